@@ -1,0 +1,176 @@
+// What a structure is: plain, immutable data in SI, every name resolved to an index. It is all that mechanics and
+// virtual work know of a note, and all that they share.
+//
+// Axes: x to the right, y up, rotations and couples anticlockwise. A member's local axes: x along its travel, y to the
+// left of it, so its underside is the side of negative local y.
+
+import type { Range } from '../quantity/range.ts';
+
+export interface Structure {
+  readonly name: string;
+  readonly title?: string;
+  /** Where the structure is spoken of as a whole: its `structure` line, or its first member. */
+  readonly range: Range;
+  readonly points: readonly Point[];
+  readonly sections: readonly Section[];
+  readonly members: readonly Member[];
+  readonly groups: readonly Group[];
+  readonly hinges: readonly Hinge[];
+  readonly supports: readonly Support[];
+  readonly cases: readonly LoadCase[];
+  readonly loads: readonly Load[];
+}
+
+export interface Point {
+  readonly name: string;
+  readonly x: number;
+  readonly y: number;
+  /** Where it was first named. */
+  readonly range: Range;
+}
+
+/** A section with the material's figures worked in. */
+export interface Section {
+  readonly name: string;
+  readonly material?: string;
+  /** In the writer's words, for labels: `box 100 × 200 × 6, S355`. */
+  readonly description: string;
+  /** EI, N m²; undefined where no figure gives one (a bar's section needs none). */
+  readonly bendingStiffness: number | undefined;
+  /** EA, N; undefined: no axial stiffness is known, and the member is axially stiff, exactly. */
+  readonly axialStiffness: number | undefined;
+  /** kg/m; undefined where no area or no density is known. */
+  readonly massPerLength: number | undefined;
+  /** The smaller elastic modulus, m³. */
+  readonly sectionModulus: number | undefined;
+  /** m². */
+  readonly area: number | undefined;
+  /** m⁴, about the axis of bending. */
+  readonly secondMomentOfArea: number | undefined;
+  /** Pa. */
+  readonly youngsModulus: number | undefined;
+  /** m, in the plane of bending. */
+  readonly depth: number | undefined;
+  readonly range: Range;
+}
+
+/**
+ * A member (bending and axial force) or a bar (axial force only), as a chain of straight legs.
+ * Every point on the chain, one placed on it by a `point` statement included, ends a leg.
+ */
+export interface Member {
+  readonly name: string;
+  readonly kind: 'member' | 'bar';
+  readonly legs: readonly Leg[];
+  /** Along the chain, m. */
+  readonly length: number;
+  readonly range: Range;
+}
+
+/** A straight stretch of a member between two neighbouring points of the structure. */
+export interface Leg {
+  /** Indices into `points`, in the direction of travel. */
+  readonly from: number;
+  readonly to: number;
+  /** Index into `sections`. */
+  readonly section: number;
+  /** Distance of `from` along the member, m. */
+  readonly start: number;
+  readonly length: number;
+  /** Unit vector along the travel. The left-hand normal, local y, is (−sine, cosine). */
+  readonly cosine: number;
+  readonly sine: number;
+}
+
+export interface Group {
+  readonly name: string;
+  readonly members: readonly number[];
+}
+
+/**
+ * Frees the moment of every member at the point, or of one member. A member that runs through the point has its moment
+ * split there, so that it is zero on both sides. Bars are pinned already and take no part.
+ */
+export interface Hinge {
+  readonly point: number;
+  readonly member?: number;
+  readonly range: Range;
+}
+
+export interface Support {
+  readonly point: number;
+  readonly restraints: readonly Restraint[];
+  /** As the writer said it, for drawings and words: `pinned`, `roller on 30 deg`, `hold x, rotation`. */
+  readonly symbol: SupportSymbol;
+  readonly range: Range;
+}
+
+/** One held or sprung freedom. Several at one point may repeat or lie askew; together they span what is held. */
+export interface Restraint {
+  /** A unit vector for a movement that is resisted, or the rotation. */
+  readonly freedom: { readonly kind: 'movement'; readonly x: number; readonly y: number } | { readonly kind: 'rotation' };
+  /** N/m or N m/rad; Infinity where held. */
+  readonly stiffness: number;
+}
+
+/** What the drawing shows. `angle` is that of a roller's surface from level, anticlockwise, rad. */
+export interface SupportSymbol {
+  readonly kind: 'pinned' | 'roller' | 'fixed' | 'guided' | 'held';
+  readonly angle: number;
+  readonly springs: readonly ('x' | 'y' | 'rotation')[];
+}
+
+export interface LoadCase {
+  readonly name: string;
+  readonly title?: string;
+}
+
+/** Where a load or a question stands: at a point (of one member, where it matters), or along a member. */
+export type Location =
+  | { readonly kind: 'point'; readonly point: number; readonly member?: number }
+  /** `distance` from the member's first point, along it. */
+  | { readonly kind: 'along'; readonly member: number; readonly distance: number };
+
+interface LoadCommon {
+  /** Index into `cases`. */
+  readonly case: number;
+  readonly source?: string;
+  readonly range: Range;
+}
+
+/** Loads in SI, in the case's own size, unfactored. */
+export type Load = LoadCommon &
+  (
+    | { readonly kind: 'self-weight'; readonly members: readonly number[]; readonly factor: number }
+    /** On one member (a statement that names several gives several). Linear in the distance along the member. */
+    | {
+        readonly kind: 'line';
+        readonly member: number;
+        /** Distances along the member, start < end. */
+        readonly start: number;
+        readonly end: number;
+        /** N/m at start and end, positive in `direction`. */
+        readonly startIntensity: number;
+        readonly endIntensity: number;
+        readonly direction: LineDirection;
+      }
+    /** N, global components. */
+    | { readonly kind: 'force'; readonly x: number; readonly y: number; readonly at: Location; readonly row?: number }
+    /** N m, anticlockwise. */
+    | { readonly kind: 'couple'; readonly moment: number; readonly at: Location; readonly row?: number }
+    /** Imposed movement of a held or sprung freedom: m along the unit vector, or rad anticlockwise. */
+    | {
+        readonly kind: 'movement';
+        readonly point: number;
+        readonly freedom: Restraint['freedom'];
+        readonly amount: number;
+      }
+  );
+
+export type LineDirection =
+  /** Unit vector in global axes; `onPlan`: per length measured level. */
+  | { readonly kind: 'global'; readonly x: number; readonly y: number; readonly onPlan: boolean }
+  /** At right angles to each leg, on the side whose normal has a positive part along this global unit vector. */
+  | { readonly kind: 'square'; readonly x: number; readonly y: number }
+  /** Along each leg, with the travel (1) or against it (−1). */
+  | { readonly kind: 'along'; readonly sense: 1 | -1 };
