@@ -1,0 +1,47 @@
+// Every diagnostic code, with the one line that the reference prints for it. Codes are stable.
+import type { ProblemCode } from '../quantity/problem.ts';
+
+export const CODES = {
+  // values
+  'bad-value': 'Words that do not make a value.',
+  'unknown-unit': 'Behind a number stands a word that is no unit.',
+  'wrong-dimension': 'Quantities of different kinds are added or compared, or another kind is due here.',
+  'number-out-of-range': 'A number is not finite or lies outside 1e-30 to 1e30.',
+  'value-too-deep': 'Parentheses or operators are nested more than 64 deep.',
+  'decimal-comma': 'A comma stands between two digits; a decimal point is meant.',
+  domain: 'A function or a division has no value here.',
+  // statements
+  'unknown-statement': 'A line begins with a word that begins no statement.',
+  'bad-statement': 'A statement breaks off or has words where they mean nothing.',
+  'stray-continuation': 'An indented line continues nothing.',
+  'long-dash': 'A long dash stands where -- is meant.',
+  'open-quote': 'A quoted text does not close on its line.',
+  'reserved-name': 'A word that may not be a name is used as one.',
+  'limit-missing': '`require` without a limit.',
+  'limit-in-find': '`find` with a limit.',
+  // names
+  'unknown-name': 'A name that nothing defines.',
+  'defined-twice': 'A name has two definitions.',
+  'circular-value': 'A value depends on itself.',
+  // model
+  'bad-geometry': 'A chain, a point or a member that cannot be drawn.',
+  'chain-gap': 'A chain does not close on a point already placed.',
+  'point-not-placed': 'A point that nothing places.',
+  'missing-property': 'A section or a material lacks a figure that is needed.',
+  'bad-support': 'A support that cannot be read, or stands where nothing is.',
+  'bad-load': 'A load that cannot act where it is put.',
+  'unused-case': 'A case that has loads and is in no combination.',
+  'bad-combination': 'A combination that cannot be worked.',
+  'bad-question': 'A question that has no answer as it stands.',
+  'unstable-structure': 'Something can move freely.',
+  // results
+  'limit-exceeded': 'A requirement is not met.',
+  'limit-without-source': 'A limit has no source.',
+  'answer-withheld': 'The two methods or the equilibrium check disagree; the number is not shown.',
+  // bounds
+  'too-large': 'A bound on the size of notes is passed.',
+  // language that is read but not evaluated yet
+  'not-evaluated-yet': 'The statement is read, but this version does not evaluate it; answers that depend on it are withheld.',
+} as const satisfies Record<ProblemCode, string> & Record<string, string>;
+
+export type DiagnosticCode = keyof typeof CODES;
