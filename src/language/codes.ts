@@ -38,10 +38,13 @@ export const CODES = {
   'limit-exceeded': 'A requirement is not met.',
   'limit-without-source': 'A limit has no source.',
   'answer-withheld': 'The two methods or the equilibrium check disagree; the number is not shown.',
+  // files
+  'unreadable-note': 'A file that cannot be read as a note.',
   // bounds
   'too-large': 'A bound on the size of notes is passed.',
   // language that is read but not evaluated yet
-  'not-evaluated-yet': 'The statement is read, but this version does not evaluate it; answers that depend on it are withheld.',
+  'not-evaluated-yet':
+    'The statement is read, but this version does not evaluate it; answers that depend on it are withheld.',
 } as const satisfies Record<ProblemCode, string> & Record<string, string>;
 
 export type DiagnosticCode = keyof typeof CODES;

@@ -1,0 +1,92 @@
+// The answers of one structure as a person reads them: a head line, then a row for each question.
+import type { Answer, NoteResult, StructureResult } from '../note/result.ts';
+import { safeText } from './safe-text.ts';
+import type { Style } from './style.ts';
+import { type Alignment, type Cell, layOut, wrap } from './table.ts';
+
+const ALIGNMENTS: readonly Alignment[] = ['left', 'left', 'point', 'point', 'right', 'left'];
+/** What the columns beside the question take, roughly; the question has the rest. */
+const OTHER_COLUMNS = 62;
+const NARROWEST_QUESTION = 28;
+const WIDEST_QUESTION = 56;
+
+export function structureText(result: NoteResult, structure: StructureResult, width: number, style: Style): string[] {
+  const answers = structure.answers.map(index => result.answers[index]!);
+  const question = Math.max(NARROWEST_QUESTION, Math.min(WIDEST_QUESTION, width - OTHER_COLUMNS));
+  return [
+    `  ${headLine(structure, answers, style)}`,
+    ...(structure.withheld === undefined ? [] : [`    ${safeText(`answers are withheld: ${structure.withheld}`)}`]),
+    ...layOut(
+      answers.map(answer => row(answer, question, style)),
+      ALIGNMENTS,
+      '    ',
+    ),
+  ];
+}
+
+/** `met`, `not met`, `withheld`, or `not checked` for what has no limit. */
+export function stateOf({ kind, status, quantity }: Answer): 'met' | 'not met' | 'withheld' | 'not checked' {
+  if (quantity === undefined) return 'withheld';
+  if (kind === 'find') return 'not checked';
+  return status === 'ok' ? 'met' : status === 'fails' ? 'not met' : 'withheld';
+}
+
+function headLine({ name, title }: StructureResult, answers: readonly Answer[], style: Style): string {
+  const heading = style.strong(safeText(name)) + (title === undefined ? '' : ` ${safeText(title)}`);
+  const state = stateLine(answers);
+  return state === '' ? heading : `${heading} ${style.soft('·')} ${state}`;
+}
+
+function stateLine(answers: readonly Answer[]): string {
+  const required = answers.filter(({ kind }) => kind === 'require');
+  if (required.length === 0) return '';
+  const met = required.filter(answer => stateOf(answer) === 'met').length;
+  const highest = required
+    .filter(({ utilisation }) => utilisation !== undefined)
+    .reduce<Answer | undefined>(
+      (worst, answer) => (answer.utilisation! > (worst?.utilisation ?? -1) ? answer : worst),
+      undefined,
+    );
+  const counted = `${met} of ${required.length} ${required.length === 1 ? 'requirement' : 'requirements'} met`;
+  return highest === undefined ? counted : `${counted}, highest use ${useOf(highest)} (${safeText(highest.name)})`;
+}
+
+function row(answer: Answer, questionWidth: number, style: Style): Cell[] {
+  const state = stateOf(answer);
+  const emphasis = state === 'not met' ? style.error : state === 'withheld' ? style.warning : undefined;
+  const under = answer.under === null ? '' : ` under ${answer.under}`;
+  return [
+    { lines: [answer.name] },
+    {
+      lines: [
+        ...wrap(`${answer.measure}${under}`, questionWidth),
+        ...notes(answer).flatMap(note => wrap(note, questionWidth)),
+      ],
+    },
+    { lines: [state === 'withheld' ? '–' : answer.display] },
+    { lines: [limitOf(answer)] },
+    { lines: [useOf(answer)] },
+    { lines: [state], ...(emphasis === undefined ? {} : { style: emphasis }) },
+  ];
+}
+
+/** What stands under the question: the alternative that governs, and both sides of a jump. */
+function notes({ governing, sides }: Answer): string[] {
+  return [...(governing === null ? [] : [governing]), ...(sides === undefined ? [] : [sides])];
+}
+
+/** The limit itself, without the way to it. */
+function limitOf({ comparison, limitDisplay }: Answer): string {
+  if (comparison === undefined || limitDisplay === undefined) return '';
+  return `${comparison === '<=' ? '≤' : '≥'} ${limitDisplay.split(' = ').at(-1)}`;
+}
+
+/** Three decimals, and as many more as it takes not to round a requirement across its limit. */
+function useOf({ utilisation, status }: Answer): string {
+  if (utilisation === undefined) return '';
+  for (let decimals = 3; decimals < 15; decimals++) {
+    const shown = utilisation.toFixed(decimals);
+    if (Number(shown) > 1 === (status === 'fails')) return shown;
+  }
+  return String(utilisation);
+}
