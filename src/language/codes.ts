@@ -8,6 +8,7 @@ export const CODES = {
   'wrong-dimension': 'Quantities of different kinds are added or compared, or another kind is due here.',
   'number-out-of-range': 'A number is not finite or lies outside 1e-30 to 1e30.',
   'value-too-deep': 'Parentheses or operators are nested more than 64 deep.',
+  'value-too-long': 'A value has more than 2000 operands and operators.',
   'decimal-comma': 'A comma stands between two digits; a decimal point is meant.',
   domain: 'A function or a division has no value here.',
   // statements
@@ -19,6 +20,7 @@ export const CODES = {
   'reserved-name': 'A word that may not be a name is used as one.',
   'limit-missing': '`require` without a limit.',
   'limit-in-find': '`find` with a limit.',
+  'misplaced-in-limit': 'A measure or `under` stands behind `<=` or `>=`.',
   // names
   'unknown-name': 'A name that nothing defines.',
   'defined-twice': 'A name has two definitions.',

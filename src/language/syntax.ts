@@ -30,7 +30,12 @@ export type Operand =
   /** `I of RHS`, `fm of C24`, `k of Gauge`. */
   | { readonly kind: 'property'; readonly property: Name; readonly of: Name; readonly range: Range }
   /** `length(P, Q)`, `length(M)`, `along(P, Q)`, `plan(P, Q)`, `height(P)`, `span(tip)`. */
-  | { readonly kind: 'extent'; readonly function: ExtentFunction; readonly arguments: readonly Name[]; readonly range: Range }
+  | {
+      readonly kind: 'extent';
+      readonly function: ExtentFunction;
+      readonly arguments: readonly Name[];
+      readonly range: Range;
+    }
   /** The bare word `span`, in a limit. */
   | { readonly kind: 'span'; readonly range: Range }
   /** A measure inside an expression; only in `find` and `require`. */
@@ -174,10 +179,19 @@ export type LoadBody =
       readonly kind: 'heat';
       readonly factor?: Value;
       readonly on: readonly Name[];
-      readonly by: { readonly kind: 'uniform'; readonly rise: Value } | { readonly kind: 'gradient'; readonly above: Value; readonly below: Value };
+      readonly by:
+        | { readonly kind: 'uniform'; readonly rise: Value }
+        | { readonly kind: 'gradient'; readonly above: Value; readonly below: Value };
       readonly range: Range;
     }
-  | { readonly kind: 'move'; readonly factor?: Value; readonly point: Name; readonly by: Value; readonly turn: Turn; readonly range: Range }
+  | {
+      readonly kind: 'move';
+      readonly factor?: Value;
+      readonly point: Name;
+      readonly by: Value;
+      readonly turn: Turn;
+      readonly range: Range;
+    }
   | {
       readonly kind: 'lengthen' | 'shorten';
       readonly factor?: Value;
@@ -205,7 +219,9 @@ export type LoadBody =
   | {
       readonly kind: 'point';
       readonly amount: Value;
-      readonly direction: { readonly kind: 'turn'; readonly turn: Turn } | { readonly kind: 'angle'; readonly angle: Value };
+      readonly direction:
+        | { readonly kind: 'turn'; readonly turn: Turn }
+        | { readonly kind: 'angle'; readonly angle: Value };
       readonly at: Place;
       readonly in?: Name;
       readonly range: Range;
@@ -214,7 +230,9 @@ export type LoadBody =
   | {
       readonly kind: 'row';
       readonly amount: Value;
-      readonly direction: { readonly kind: 'turn'; readonly turn: Turn } | { readonly kind: 'angle'; readonly angle: Value };
+      readonly direction:
+        | { readonly kind: 'turn'; readonly turn: Turn }
+        | { readonly kind: 'angle'; readonly angle: Value };
       readonly every: Value;
       readonly stretch: Stretch;
       readonly on: Name;
@@ -234,9 +252,20 @@ export interface Term {
 export type ShowBody =
   | { readonly kind: 'inputs' | 'drawing' | 'results'; readonly range: Range }
   | { readonly kind: 'reactions'; readonly under?: Under; readonly byCase: boolean; readonly range: Range }
-  | { readonly kind: 'working'; readonly of: Name; readonly by?: 'direct integration' | 'conjugate beam'; readonly range: Range }
+  | {
+      readonly kind: 'working';
+      readonly of: Name;
+      readonly by?: 'direct integration' | 'conjugate beam';
+      readonly range: Range;
+    }
   | { readonly kind: 'contributions'; readonly to: Name; readonly range: Range }
-  | { readonly kind: 'field'; readonly envelope: boolean; readonly measure: Measure; readonly under?: Under; readonly range: Range };
+  | {
+      readonly kind: 'field';
+      readonly envelope: boolean;
+      readonly measure: Measure;
+      readonly under?: Under;
+      readonly range: Range;
+    };
 
 export interface CarryBody {
   readonly factor?: Value;
@@ -317,7 +346,10 @@ export type Statement = Common &
 /** `units` as written, blanks normalised: `kN m`. */
 export type DisplaySetting =
   | { readonly kind: 'metric' | 'us' }
-  | { readonly kind: 'units'; readonly units: readonly { readonly name: Name; readonly units: string; readonly range: Range }[] };
+  | {
+      readonly kind: 'units';
+      readonly units: readonly { readonly name: Name; readonly units: string; readonly range: Range }[];
+    };
 
 export type StatementKind = Statement['kind'];
 export type StatementOf<K extends StatementKind> = Extract<Statement, { readonly kind: K }>;

@@ -7,6 +7,7 @@ export type ProblemCode =
   | 'wrong-dimension'
   | 'number-out-of-range' // not finite, or outside 1e-30 … 1e30
   | 'value-too-deep' // nesting past the bound of 64
+  | 'value-too-long' // more than 2000 operands and operators
   | 'decimal-comma'
   | 'domain'; // sqrt of a negative quantity, division by zero …
 
