@@ -3,6 +3,9 @@
 import markdownIt, { type MarkdownIt, type Token } from 'markdown-it';
 import type { SourceLine } from '../language/syntax.ts';
 import type { Range } from '../quantity/range.ts';
+import { mayHoldCalculation } from './calculation-mark.ts';
+
+export { mayHoldCalculation };
 
 export interface SourceFence {
   readonly kind: 'calculation' | 'record' | 'sign';
@@ -27,11 +30,6 @@ export interface SourceSpan {
 export interface Source {
   readonly fences: readonly SourceFence[];
   readonly spans: readonly SourceSpan[];
-}
-
-/** Whether the text can hold a fence of ours at all; cheap, and never wrong when it says no. */
-export function mayHoldCalculation(text: string): boolean {
-  return /[`~]{3,}[ \t]*tautline/.test(text);
 }
 
 /** `skip` is the length of the front matter, which is not Markdown. */
