@@ -1,6 +1,6 @@
 // Supports as restraints: what is held or sprung at a point, and the symbol that a drawing shows for it.
 import type { Statement, StatementOf, SupportItem } from '../language/syntax.ts';
-import { DIMENSIONLESS, divideDimensions, FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
+import { divideDimensions, FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
 import type { Due, Figures } from './figures.ts';
 import { AN_ANGLE, cleanCosine, cleanSine, type Geometry } from './geometry.ts';
 import type { Report } from './report.ts';
@@ -8,7 +8,7 @@ import type { Scope } from './scope.ts';
 import type { Restraint, Support, SupportSymbol } from './structure.ts';
 
 const MOVEMENT_STIFFNESS: Due = { dimension: divideDimensions(FORCE, LENGTH), words: 'a stiffness in force per length' };
-const ROTATION_STIFFNESS: Due = { dimension: divideDimensions(MOMENT, DIMENSIONLESS), words: 'a stiffness in moment per radian' };
+const ROTATION_STIFFNESS: Due = { dimension: MOMENT, words: 'a stiffness in moment per radian' };
 
 const X: Restraint = { freedom: { kind: 'movement', x: 1, y: 0 }, stiffness: Infinity };
 const Y: Restraint = { freedom: { kind: 'movement', x: 0, y: 1 }, stiffness: Infinity };
@@ -99,12 +99,10 @@ function readSpring(item: Extract<SupportItem, { kind: 'spring' }>, figures: Fig
   const due = item.freedom === 'rotation' ? ROTATION_STIFFNESS : MOVEMENT_STIFFNESS;
   const stiffness = figures.number(item.stiffness, due);
   if (stiffness === undefined) return undefined;
-  if (stiffness < 0) {
-    report.error('bad-support', item.stiffness.range, 'A spring has a stiffness greater than zero.');
-    return undefined;
-  }
-  if (stiffness === 0) {
-    report.error('bad-support', item.stiffness.range, 'A spring without stiffness holds nothing.', { hint: 'leave the spring out' });
+  if (stiffness <= 0) {
+    report.error('bad-support', item.stiffness.range, 'A spring has a stiffness greater than zero.', {
+      hint: stiffness === 0 ? 'leave out a spring that holds nothing' : 'write the stiffness without a sign',
+    });
     return undefined;
   }
   const freedom: Restraint['freedom'] = {

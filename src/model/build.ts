@@ -1,0 +1,157 @@
+// Builds a structure from its statements: geometry is laid out already; sections, hinges, supports and loads are put on it.
+import type { Name } from '../language/syntax.ts';
+import type { Figures } from './figures.ts';
+import type { Geometry, LaidLeg, LaidMember } from './geometry.ts';
+import { distanceOf } from './geometry.ts';
+import type { Library, SectionFigures } from './library.ts';
+import { readLoads } from './loads.ts';
+import type { Definition, Names } from './names.ts';
+import type { Report } from './report.ts';
+import type { Scope } from './scope.ts';
+import type { Hinge, Member, Section, Structure } from './structure.ts';
+import { readSupports, reportUnevaluatedJoints } from './supports.ts';
+
+export interface Building {
+  readonly scope: Scope;
+  readonly names: Names;
+  readonly geometry: Geometry;
+  readonly library: Library;
+  readonly figures: Figures;
+  readonly report: Report;
+  /** Titles of cases, from `case` lines of the structure and of the head. */
+  readonly titles: ReadonlyMap<string, string>;
+}
+
+/** What could be built. `report.flawed` says whether anything is missing from it, `report.flawedCases` of which cases. */
+export function buildStructure(building: Building): Structure {
+  const { scope, geometry, figures, report } = building;
+  const sections = new Sections(building);
+  const members = geometry.members.map(member => sections.give(member));
+  const hinges = readHinges(building);
+  const supports = readSupports(scope, geometry, figures, report);
+  for (const statement of scope.statements) reportUnevaluatedJoints(statement, report);
+  for (const { only, name } of geometry.members) {
+    if (only === undefined) continue;
+    report.flawed = true;
+    report.error('not-evaluated-yet', only.range, `That ${name} ${only.kind} only is read but not evaluated by this version: its answers are withheld.`);
+  }
+  const sectionOf = (member: number, leg: number): Section | undefined => sections.list[members[member]!.legs[leg]!.section];
+  const { cases, loads } = readLoads(scope, building.titles, { geometry, supports, hinges, sectionOf }, figures, report);
+  const title = scope.structure?.title?.text;
+  return {
+    name: scope.name ?? '',
+    ...(title === undefined ? {} : { title }),
+    range: scope.structure?.name.range ?? geometry.members[0]?.range ?? { start: 0, end: 0 },
+    points: geometry.points,
+    sections: sections.list,
+    members,
+    groups: geometry.groups,
+    hinges,
+    supports,
+    cases,
+    loads,
+  };
+}
+
+/** Sections in the order in which legs first name them. */
+class Sections {
+  readonly list: Section[] = [];
+  readonly #building: Building;
+  readonly #indices = new Map<string, number>();
+  readonly #told = new Set<string>();
+
+  constructor(building: Building) {
+    this.#building = building;
+  }
+
+  give(member: LaidMember): Member {
+    const legs = member.legs.map(leg => ({ ...leg, section: this.#sectionOf(leg, member) }));
+    return { name: member.name, kind: member.kind, legs, length: member.length, range: member.range };
+  }
+
+  /** Index of the leg's section; −1, and the structure flawed, where there is none. */
+  #sectionOf(leg: LaidLeg, member: LaidMember): number {
+    const definition = leg.section === undefined ? this.#onlySection(member) : this.#find(leg.section);
+    const found = definition === undefined ? undefined : this.#building.library.section(definition);
+    if (definition === undefined || found === undefined) {
+      this.#building.report.flawed = true;
+      return -1;
+    }
+    const key = `${definition.structure ?? ''} ${definition.name}`;
+    let index = this.#indices.get(key);
+    if (index === undefined) {
+      index = this.list.push(toSection(definition, found)) - 1;
+      this.#indices.set(key, index);
+    }
+    if (member.kind === 'member') this.#needBending(definition, found, member);
+    return index;
+  }
+
+  #find(name: Name): Definition | undefined {
+    return this.#building.names.find(this.#building.scope, ['section'], name.text);
+  }
+
+  /** A member need not name its section where there is one only. */
+  #onlySection(member: LaidMember): Definition | undefined {
+    const { names, scope, report } = this.#building;
+    const inReach = names.entries.filter(
+      ({ namespace, structure, scope: owner }) => namespace === 'section' && (owner === scope || structure === undefined),
+    );
+    const [only, another] = inReach;
+    if (only !== undefined && another === undefined) return only;
+    if (this.#told.has(member.name) || scope.broken.some(({ keyword }) => keyword === 'section')) return undefined;
+    this.#told.add(member.name);
+    const hint = only === undefined ? 'describe one: section S: solid 50 mm x 200 mm, E 11 GPa' : `write ${member.kind} ${member.name}, ${only.name}: …`;
+    report.error('missing-property', member.range, only === undefined ? `${member.name} has no section, and there is none to take.` : `There are several sections: say which ${member.name} has.`, { hint });
+    return undefined;
+  }
+
+  #needBending(definition: Definition, { properties }: SectionFigures, member: LaidMember): void {
+    if (properties.has('EI') || this.#told.has(definition.name)) return;
+    this.#told.add(definition.name);
+    this.#building.report.flawed = true;
+    const missing = !properties.has('E') && !properties.has('I') ? 'E and I, or EI' : properties.has('E') ? 'I' : 'E';
+    this.#building.report.error('missing-property', definition.definition, `${definition.name} has no bending stiffness, and ${member.name} bends: ${missing} is missing.`, {
+      hint: missing === 'E' ? 'name a material with an E, or give EI' : 'give EI, or I and a material with an E',
+      related: [{ range: member.range, message: `${member.name} has this section.` }],
+    });
+  }
+}
+
+function toSection(definition: Definition, { properties, material, description }: SectionFigures): Section {
+  const value = (key: string): number | undefined => properties.get(key)?.value;
+  return {
+    name: definition.name,
+    ...(material === undefined ? {} : { material }),
+    description,
+    bendingStiffness: value('EI'),
+    axialStiffness: value('EA'),
+    massPerLength: value('mass'),
+    sectionModulus: value('modulus'),
+    area: value('A'),
+    secondMomentOfArea: value('I'),
+    youngsModulus: value('E'),
+    depth: value('depth'),
+    range: definition.definition,
+  };
+}
+
+function readHinges({ scope, geometry, report }: Building): Hinge[] {
+  const hinges: Hinge[] = [];
+  for (const statement of scope.statements) {
+    if (statement.kind !== 'hinge') continue;
+    const point = geometry.pointNamed.get(statement.point.text);
+    const member = statement.member === undefined ? undefined : geometry.memberNamed.get(statement.member.text);
+    if (point === undefined || (statement.member !== undefined && member === undefined)) {
+      report.flawed = true;
+      continue;
+    }
+    if (member !== undefined && distanceOf(geometry.members[member]!, point) === undefined) {
+      report.flawed = true;
+      report.error('bad-geometry', statement.member!.range, `${statement.member!.text} does not run through ${statement.point.text}.`);
+      continue;
+    }
+    hinges.push({ point, range: statement.point.range, ...(member === undefined ? {} : { member }) });
+  }
+  return hinges;
+}
