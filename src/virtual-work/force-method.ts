@@ -1,0 +1,167 @@
+// The force method: redundants found from compatibility, case by case. Everything is worked out when first asked for and
+// then kept.
+import type { Load, Structure } from '../model/structure.ts';
+import { type Cholesky, cholesky, solveCholesky } from './cholesky.ts';
+import { addLoad, emptyLoading } from './loading.ts';
+import type { Preference } from './preference.ts';
+import { type ForceState, type PrimaryStructure, primaryForces, primaryStructure } from './primary.ts';
+import { flexibilityOf } from './statics.ts';
+import { addState, type UnitState, unitStates, workOf } from './unit-states.ts';
+import { strainsOf } from './work.ts';
+
+/** The response to one case alone. */
+export interface CaseForces {
+  /** Of the primary structure, every redundant zero. */
+  readonly primary: ForceState;
+  /** δ₀ at each redundant, m or rad: the work of its unit state on the strains of `primary`, imposed movements included. */
+  readonly gaps: Float64Array;
+  /** X, N or N m. */
+  readonly redundants: Float64Array;
+  /** Of the structure itself: primary + Σ X · unit state. Undetermined thrusts are left at zero. */
+  readonly final: ForceState;
+  /** Of `final`, as `strainsOf` in work.ts lays them out. */
+  readonly strains: Float64Array;
+  /** An imposed movement would have to lengthen axially stiff members: there is no answer. */
+  readonly contradicted: boolean;
+}
+
+/**
+ * Multiplications for the flexibilities of the redundants past which the force method is not tried: some tenths of a
+ * second. A frame of ten storeys and ten bays has 300 redundants and takes half of it.
+ */
+const MOST_DENSE_WORK = 1e8;
+
+/** Undefined for the reasons of `primaryStructure`, and where the redundants are too many. */
+export function prepare(structure: Structure, preference?: Preference): ForceMethod | undefined {
+  const primary = primaryStructure(structure, preference);
+  if (!primary) return undefined;
+  const count = primary.elimination.redundants.length;
+  const work = (count * count * (primary.statics.unknownCount + count)) / 2;
+  return work <= MOST_DENSE_WORK ? new ForceMethod(primary) : undefined;
+}
+
+/**
+ * Smallest pivot of the scaled flexibilities with which the redundants are still trusted: with it, refinement gains
+ * three digits a step.
+ */
+const LEAST_PIVOT = 1e-13;
+/** Refinements of the redundants; each gains all digits that the condition leaves, so that the last only confirms. */
+const REFINEMENTS = 3;
+/** Share of the terms of a sum that counts as nothing left: their rounding. */
+const CANCELLED = 1e-9;
+
+export class ForceMethod {
+  readonly primary: PrimaryStructure;
+  readonly #loads: readonly (readonly Load[])[];
+  readonly #cases: (CaseForces | undefined)[] = [];
+  #states: { determined: UnitState[]; undetermined: UnitState[] } | undefined;
+  #flexibility: Float64Array | undefined;
+  #factor: Cholesky | undefined;
+
+  constructor(primary: PrimaryStructure) {
+    this.primary = primary;
+    const { structure } = primary.statics;
+    const loads: Load[][] = structure.cases.map(() => []);
+    for (const load of structure.loads) loads[load.case]!.push(load);
+    this.#loads = loads;
+  }
+
+  /** Of the redundants that compatibility determines. */
+  get unitStates(): readonly UnitState[] {
+    return this.#allStates().determined;
+  }
+
+  /** Of those that nothing flexible determines: thrusts in axially stiff members between held points. */
+  get undeterminedStates(): readonly UnitState[] {
+    return this.#allStates().undetermined;
+  }
+
+  /** f, m/N, rad/(N m) or 1/N: lower triangle by rows, entry (i, j) at i(i + 1)/2 + j. */
+  get flexibility(): Float64Array {
+    this.#flexibility ??= flexibilities(this.primary, this.unitStates);
+    return this.#flexibility;
+  }
+
+  /** False where the flexibilities are too nearly singular for the redundants to be trusted. */
+  get wellConditioned(): boolean {
+    return this.unitStates.length === 0 || this.#cholesky().smallestPivot > LEAST_PIVOT;
+  }
+
+  /** `index`: into the structure's cases. */
+  case(index: number): CaseForces {
+    return (this.#cases[index] ??= this.#solve(index));
+  }
+
+  #allStates() {
+    if (!this.#states) {
+      const { statics } = this.primary;
+      const rigid = ({ unknowns }: UnitState) => unknowns.every(unknown => flexibilityOf(statics, unknown) === 0);
+      const determined: UnitState[] = [];
+      const undetermined: UnitState[] = [];
+      for (const state of unitStates(this.primary)) (rigid(state) ? undetermined : determined).push(state);
+      this.#states = { determined, undetermined };
+    }
+    return this.#states;
+  }
+
+  #cholesky(): Cholesky {
+    this.#factor ??= cholesky(this.flexibility.slice(), this.unitStates.length);
+    return this.#factor;
+  }
+
+  #solve(index: number): CaseForces {
+    const { primary, unitStates: states } = this;
+    const { statics } = primary;
+    const loading = emptyLoading(statics);
+    for (const load of this.#loads[index]!) addLoad(statics, loading, load, 1);
+    const released = primaryForces(primary, loading);
+    let strains = strainsOf(statics, released);
+    const contradicted = this.undeterminedStates.some(state => contradicts(state, strains));
+    const gaps = Float64Array.from(states, state => workOf(state, strains));
+    if (states.length === 0) {
+      return { primary: released, gaps, redundants: gaps, final: released, strains, contradicted };
+    }
+
+    const redundants = new Float64Array(states.length);
+    const unknowns = released.unknowns.slice();
+    const final = { ...released, unknowns };
+    let open = gaps;
+    for (let refinement = 0; refinement <= REFINEMENTS; refinement++) {
+      // f · X = −δ; then the gaps that are left, from the strains themselves rather than from f.
+      const step = open.map(gap => -gap);
+      solveCholesky(this.#cholesky(), step);
+      for (const [at, state] of states.entries()) {
+        redundants[at]! += step[at]!;
+        addState(state, step[at]!, unknowns);
+      }
+      strains = strainsOf(statics, final);
+      open = Float64Array.from(states, state => workOf(state, strains));
+    }
+    return { primary: released, gaps, redundants, final, strains, contradicted };
+  }
+}
+
+function flexibilities({ statics }: PrimaryStructure, states: readonly UnitState[]): Float64Array {
+  const result = new Float64Array((states.length * (states.length + 1)) / 2);
+  const unknowns = new Float64Array(statics.unknownCount);
+  let at = 0;
+  for (const [row, state] of states.entries()) {
+    unknowns.fill(0);
+    addState(state, 1, unknowns);
+    const strains = strainsOf(statics, { unknowns, spans: new Map(), ground: undefined });
+    for (let column = 0; column <= row; column++) result[at++] = workOf(states[column]!, strains);
+  }
+  return result;
+}
+
+/** Whether the gap at a redundant without flexibility, which no force can close, is more than rounding. */
+function contradicts({ unknowns, forces }: UnitState, strains: Float64Array): boolean {
+  let gap = 0;
+  let size = 0;
+  for (let index = 0; index < unknowns.length; index++) {
+    const work = forces[index]! * strains[unknowns[index]!]!;
+    gap += work;
+    size += Math.abs(work);
+  }
+  return Math.abs(gap) > CANCELLED * size;
+}

@@ -1,0 +1,28 @@
+// A movement by the unit load: a virtual system in equilibrium with unit actions at the place, whose work on the real
+// strains is the movement. By the reduction theorem any such system will do; the primary structure carries it.
+import type { UnitAction } from '../model/question.ts';
+import type { ForceMethod } from './force-method.ts';
+import { type ForceState, virtualSystem } from './primary.ts';
+import { virtualWork } from './work.ts';
+
+/**
+ * Σ action · movement, m or rad, under the cases with these factors (in the order of the structure's cases). NaN where
+ * there is no answer to give: an imposed movement that axially stiff members contradict, or redundants that are too
+ * nearly undetermined to be trusted.
+ */
+export function movement(forceMethod: ForceMethod, factors: readonly number[], actions: readonly UnitAction[]): number {
+  return movementOf(forceMethod, factors, virtualSystem(forceMethod.primary, actions));
+}
+
+/** The same with the virtual system at hand, for one question under many combinations. */
+export function movementOf(forceMethod: ForceMethod, factors: readonly number[], virtual: ForceState): number {
+  if (!forceMethod.wellConditioned) return Number.NaN;
+  let sum = 0;
+  for (const [index, factor] of factors.entries()) {
+    if (factor === 0) continue;
+    const { final, strains, contradicted } = forceMethod.case(index);
+    if (contradicted) return Number.NaN;
+    sum += factor * virtualWork(forceMethod.primary.statics, virtual, final, strains);
+  }
+  return sum;
+}
