@@ -1,0 +1,245 @@
+// A question worked one alternative at a time: a measure, or an expression of measures, earlier results and values. Never
+// a mixture of two alternatives.
+import type { Measure, Operand, StatementOf, Value } from '../language/syntax.ts';
+import { measure as takeMeasure } from '../mechanics/index.ts';
+import { type AlternativeModel, alternativesUnder } from '../model/combinations.ts';
+import type { Figures } from '../model/figures.ts';
+import type { Definition } from '../model/names.ts';
+import type { Measured, ResolvedMeasure, Seek } from '../model/question.ts';
+import { dimensionOf, resolveMeasure } from '../model/questions.ts';
+import type { Quantity } from '../quantity/quantity.ts';
+import type { Range } from '../quantity/range.ts';
+import { magnitudeFor, withoutNoise } from './magnitudes.ts';
+import type { Solved } from './solved.ts';
+import type { StructureState } from './structure-state.ts';
+
+export type Question = StatementOf<'find' | 'require'>;
+
+/** One value for each alternative, and which of them is the answer. */
+export interface Series {
+  readonly alternatives: readonly AlternativeModel[];
+  readonly values: readonly Quantity[];
+  readonly governing: number;
+  /** Identifies the set of alternatives: two results mix well only where these agree. */
+  readonly set: string;
+  /** Where the question is one measure alone. */
+  readonly measure: ResolvedMeasure | undefined;
+  readonly measured: readonly Measured[];
+  /** Every measure that took part, for the second road. */
+  readonly taken: readonly ResolvedMeasure[];
+  /** Whether anything was measured under a combination, so that there is something to say behind `under`. */
+  readonly solved: Solved | undefined;
+}
+
+export interface SeriesInputs {
+  readonly state: StructureState;
+  /** The series of an earlier result, of this or of another structure. */
+  readonly seriesOf: (definition: Definition, range: Range) => Series | undefined;
+  readonly figures: (frame: { readonly measure: (measure: Measure) => Quantity | undefined; readonly result: (definition: Definition, range: Range) => Quantity | undefined }) => Figures;
+  readonly plain: Figures;
+  readonly resultNamed: (operand: Operand) => Definition | undefined;
+}
+
+export function seriesOf(question: Question, inputs: SeriesInputs): Series | undefined {
+  return new SeriesReader(question, inputs).read();
+}
+
+class SeriesReader {
+  readonly #question: Question;
+  readonly #inputs: SeriesInputs;
+
+  constructor(question: Question, inputs: SeriesInputs) {
+    this.#question = question;
+    this.#inputs = inputs;
+  }
+
+  read(): Series | undefined {
+    const { state } = this.#inputs;
+    const { what, under } = this.#question;
+    const measures: Measure[] = [];
+    const results: { readonly definition: Definition; readonly range: Range }[] = [];
+    this.#collect(what, measures, results);
+    const earlier = results.map(({ definition, range }) => this.#inputs.seriesOf(definition, range));
+    if (earlier.some(series => series === undefined)) return undefined;
+    const own = measures.length > 0 || under !== undefined ? this.#alternatives() : [];
+    if (own === undefined) return undefined;
+    if (measures.length === 0) return this.#ofResults(own, earlier as Series[], results);
+    const resolved = this.#resolve(measures);
+    const solved = state.solved(() => this.#circle());
+    if (resolved === undefined || solved === undefined || state.report.flawed) return undefined;
+    if (own.some(({ cases }) => cases.some(name => state.report.flawedCases.has(name)))) return undefined;
+    const running = this.#running(own, earlier as Series[], results);
+    if (running === undefined) return undefined;
+    return this.#work(running, own, resolved, solved);
+  }
+
+  /** The alternatives that `under` asks for; an empty list is never returned. */
+  #alternatives(): readonly AlternativeModel[] | undefined {
+    const { state } = this.#inputs;
+    if (state.report.flawed) return undefined;
+    const asked = alternativesUnder(this.#question.under, state.combinations(() => this.#circle()));
+    if (state.report.flawed) return undefined;
+    if ('problem' in asked) {
+      const range = this.#question.under?.range ?? this.#question.what.range;
+      state.report.error('bad-question', range, asked.problem, { hint: asked.hint });
+      return undefined;
+    }
+    return asked.sound && asked.alternatives.length > 0 ? asked.alternatives : undefined;
+  }
+
+  #circle(): void {
+    this.#inputs.state.report.error('circular-value', this.#question.name.range, `${this.#question.name.text} depends on itself.`);
+  }
+
+  #resolve(measures: readonly Measure[]): ReadonlyMap<Measure, ResolvedMeasure> | undefined {
+    const { state, plain } = this.#inputs;
+    const geometry = state.geometry(() => this.#circle());
+    const structure = state.structure(() => this.#circle());
+    if (geometry === undefined || structure === undefined) return undefined;
+    const resolved = new Map<Measure, ResolvedMeasure>();
+    for (const measure of measures) {
+      const found = resolveMeasure(measure, structure, geometry, plain, state.report);
+      if (found === undefined) return undefined;
+      resolved.set(measure, found);
+    }
+    return resolved;
+  }
+
+  /** The set of alternatives that the question runs over: its own, or those of the results in it; not two at once. */
+  #running(
+    own: readonly AlternativeModel[],
+    earlier: readonly Series[],
+    results: readonly { readonly definition: Definition; readonly range: Range }[],
+  ): readonly AlternativeModel[] | undefined {
+    let running = own;
+    let from = 'its own combination';
+    for (const [i, series] of earlier.entries()) {
+      if (series.alternatives.length < 2) continue;
+      const { name } = results[i]!.definition;
+      if (running.length > 1 && setOf(running) !== series.set) {
+        this.#inputs.state.report.error('bad-question', results[i]!.range, `${name} has alternatives of another combination than ${from}: one expression cannot run over both.`, {
+          hint: 'ask for the two in questions of their own, each with its limit',
+        });
+        return undefined;
+      }
+      running = series.alternatives;
+      from = name;
+    }
+    return running;
+  }
+
+  #ofResults(
+    own: readonly AlternativeModel[],
+    earlier: readonly Series[],
+    results: readonly { readonly definition: Definition; readonly range: Range }[],
+  ): Series | undefined {
+    const running = this.#running(own, earlier, results);
+    if (running === undefined) return undefined;
+    const count = Math.max(1, running.length);
+    const values: Quantity[] = [];
+    for (let i = 0; i < count; i++) {
+      const value = this.#evaluate(i, () => undefined);
+      if (value === undefined) return undefined;
+      values.push(value);
+    }
+    return {
+      alternatives: running,
+      values,
+      governing: this.#governing(values),
+      set: setOf(running),
+      measure: undefined,
+      measured: [],
+      taken: earlier.flatMap(series => series.taken),
+      solved: earlier[0]?.solved,
+    };
+  }
+
+  #work(
+    running: readonly AlternativeModel[],
+    own: readonly AlternativeModel[],
+    resolved: ReadonlyMap<Measure, ResolvedMeasure>,
+    solved: Solved,
+  ): Series | undefined {
+    const { what } = this.#question;
+    const alone = what.kind === 'operand' && what.operand.kind === 'measure' ? resolved.get(what.operand.measure) : undefined;
+    const values: Quantity[] = [];
+    const measured: Measured[] = [];
+    for (const [i, alternative] of running.entries()) {
+      const acting = own.length > 1 ? alternative : own[0]!;
+      const value = this.#evaluate(i, measure => {
+        const found = this.#take(measure, resolved.get(measure)!, acting, solved, alone === undefined ? 'size' : this.#seek());
+        measured.push(found);
+        return { value: found.value, dimension: dimensionOf(measure) };
+      });
+      if (value === undefined) return undefined;
+      values.push(value);
+    }
+    return {
+      alternatives: running,
+      values,
+      governing: this.#governing(values),
+      set: setOf(running),
+      measure: alone,
+      measured: alone === undefined ? [] : measured,
+      taken: [...resolved.values()],
+      solved,
+    };
+  }
+
+  #take(asked: Measure, resolved: ResolvedMeasure, alternative: AlternativeModel, solved: Solved, seek: Seek): Measured {
+    const solution = solved.solution(alternative.factors);
+    const found = takeMeasure(solved.analysis.structure, solution, resolved, seek);
+    const isMoment = asked.kind === 'reaction' && asked.component === 'moment';
+    return { ...found, value: withoutNoise(found.value, magnitudeFor(asked.kind, isMoment, solved.magnitudes(solution))) };
+  }
+
+  #evaluate(index: number, measure: (measure: Measure) => Quantity | undefined): Quantity | undefined {
+    const figures = this.#inputs.figures({
+      measure,
+      result: (definition, range) => {
+        const series = this.#inputs.seriesOf(definition, range);
+        return series?.values[series.values.length > 1 ? index : 0];
+      },
+    });
+    return figures.quantity(this.#question.what);
+  }
+
+  /** Within one alternative, where a measure looks along a member. */
+  #seek(): Seek {
+    return this.#question.kind === 'require' && this.#question.comparison === '>=' ? 'least' : 'size';
+  }
+
+  /** Among alternatives: the least for `>=`, the greatest for a reaction with `<=`, otherwise the largest in size; the first among equals. */
+  #governing(values: readonly Quantity[]): number {
+    const { what } = this.#question;
+    const isReaction = what.kind === 'operand' && what.operand.kind === 'measure' && what.operand.measure.kind === 'reaction';
+    let [best, rank] = [0, -Infinity];
+    for (const [i, { value }] of values.entries()) {
+      const score = this.#seek() === 'least' ? -value : this.#question.kind === 'require' && isReaction ? value : Math.abs(value);
+      if (score > rank + 1e-12 * Math.abs(rank) || rank === -Infinity) [best, rank] = [i, score];
+    }
+    return best;
+  }
+
+  #collect(value: Value, measures: Measure[], results: { definition: Definition; range: Range }[]): void {
+    switch (value.kind) {
+      case 'operand': {
+        if (value.operand.kind === 'measure') measures.push(value.operand.measure);
+        const definition = this.#inputs.resultNamed(value.operand);
+        if (definition !== undefined) results.push({ definition, range: value.operand.range });
+        return;
+      }
+      case 'negate':
+        return this.#collect(value.of, measures, results);
+      case 'binary':
+        this.#collect(value.left, measures, results);
+        return this.#collect(value.right, measures, results);
+      case 'call':
+        for (const argument of value.arguments) this.#collect(argument, measures, results);
+    }
+  }
+}
+
+function setOf(alternatives: readonly AlternativeModel[]): string {
+  return alternatives.map(({ text }) => text).join('\n');
+}

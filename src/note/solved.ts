@@ -1,0 +1,84 @@
+// A structure with what it does: its analysis, the solutions of combinations and the second road, each worked once, when
+// first asked for. A structure that did not change is taken from memory with all of them.
+import { analyse, combine } from '../mechanics/index.ts';
+import type { Analysis, Solution } from '../mechanics/solution.ts';
+import type { Structure } from '../model/structure.ts';
+import { type ForceMethod, prepare } from '../virtual-work/index.ts';
+import { type Magnitudes, magnitudesOf } from './magnitudes.ts';
+
+export class Solved {
+  readonly analysis: Analysis;
+  readonly #solutions = new Map<string, Solution>();
+  readonly #magnitudes = new Map<Solution, Magnitudes>();
+  #forceMethod: ForceMethod | undefined | null = null;
+
+  constructor(structure: Structure) {
+    this.analysis = analyse(structure);
+  }
+
+  solution(factors: readonly number[]): Solution {
+    const key = factors.join(' ');
+    let solution = this.#solutions.get(key);
+    if (solution === undefined) {
+      solution = combine(this.analysis, factors);
+      this.#solutions.set(key, solution);
+    }
+    return solution;
+  }
+
+  magnitudes(solution: Solution): Magnitudes {
+    let magnitudes = this.#magnitudes.get(solution);
+    if (magnitudes === undefined) {
+      magnitudes = magnitudesOf(solution);
+      this.#magnitudes.set(solution, magnitudes);
+    }
+    return magnitudes;
+  }
+
+  /** The second road; undefined where the structure is past its bound. */
+  forceMethod(): ForceMethod | undefined {
+    if (this.#forceMethod === null) this.#forceMethod = prepare(this.analysis.structure);
+    return this.#forceMethod;
+  }
+}
+
+/** Structures solved lately, by all that their solution depends on. One memory serves many evaluations of many notes. */
+export class Memory {
+  readonly #solved = new Map<string, Solved>();
+
+  solve(structure: Structure, key: string): Solved {
+    const known = this.#solved.get(key);
+    if (known !== undefined) {
+      // Used last, dropped last.
+      this.#solved.delete(key);
+      this.#solved.set(key, known);
+      return known;
+    }
+    const solved = new Solved(structure);
+    this.#solved.set(key, solved);
+    if (this.#solved.size > MOST_REMEMBERED) this.#solved.delete(this.#solved.keys().next().value!);
+    return solved;
+  }
+}
+
+const MOST_REMEMBERED = 64;
+
+/** All of a structure that its solution depends on, as a text: names, titles, sources and places in the note left out. */
+export function solutionKey(structure: Structure): string {
+  const { points, sections, members, hinges, supports, cases, loads } = structure;
+  return JSON.stringify([
+    points.map(({ x, y }) => [x, y]),
+    sections.map(({ bendingStiffness, axialStiffness, massPerLength, sectionModulus, area }) => [
+      bendingStiffness ?? '',
+      axialStiffness ?? '',
+      massPerLength ?? '',
+      sectionModulus ?? '',
+      area ?? '',
+    ]),
+    members.map(({ kind, legs }) => [kind, ...legs.map(({ from, to, section }) => [from, to, section])]),
+    hinges.map(({ point, member }) => [point, member ?? '']),
+    supports.map(({ point, restraints }) => [point, restraints.map(({ freedom, stiffness }) => [freedom, String(stiffness)])]),
+    cases.length,
+    loads.map(({ range: _range, source: _source, ...load }) => load),
+  ]);
+}

@@ -1,0 +1,172 @@
+// One structure of a note on its way from statements to a solution. Each stage is worked out when it is first asked for;
+// a value that asks for a later stage than it may is a circle, and told as one.
+import { buildStructure } from '../model/build.ts';
+import { caseAlone, type CombinationModel, readCombinations } from '../model/combinations.ts';
+import { type Geometry, layOut } from '../model/geometry.ts';
+import type { Library } from '../model/library.ts';
+import type { Names } from '../model/names.ts';
+import { Report } from '../model/report.ts';
+import type { BrokenStatement, Scope } from '../model/scope.ts';
+import type { Structure } from '../model/structure.ts';
+import { nearest } from '../quantity/nearest.ts';
+import type { Range } from '../quantity/range.ts';
+import { describeInstability } from './instability.ts';
+import { Once } from './once.ts';
+import { type Memory, solutionKey, type Solved } from './solved.ts';
+import type { Values } from './values.ts';
+
+export interface StateInputs {
+  readonly scope: Scope;
+  readonly head: Scope;
+  readonly names: Names;
+  readonly values: Values;
+  readonly library: Library;
+  readonly memory: Memory;
+  readonly wordsOf: (range: Range) => string;
+}
+
+export class StructureState {
+  readonly scope: Scope;
+  readonly report = new Report();
+  readonly #inputs: StateInputs;
+  readonly #geometry: Once<Geometry>;
+  readonly #structure: Once<Structure>;
+  readonly #solved: Once<Solved>;
+  readonly #combinations: Once<readonly CombinationModel[]>;
+  /** Identifies all that the solution depends on; set once the structure is built. */
+  key = '';
+
+  constructor(inputs: StateInputs) {
+    this.scope = inputs.scope;
+    this.#inputs = inputs;
+    this.#geometry = new Once(() => layOut(this.scope, inputs.values.figures(this.scope, this.report), this.report));
+    this.#structure = new Once(() => this.#build());
+    this.#solved = new Once(() => this.#solve());
+    this.#combinations = new Once(() => this.#readCombinations());
+  }
+
+  geometry(circle: () => void): Geometry | undefined {
+    return this.#geometry.get(circle);
+  }
+
+  /** What could be built, flawed or not; undefined where there is no member at all. */
+  structure(circle: () => void): Structure | undefined {
+    return this.#structure.get(circle);
+  }
+
+  /** Undefined where something is missing from the structure, or it is not stable. */
+  solved(circle: () => void): Solved | undefined {
+    return this.#solved.get(circle);
+  }
+
+  combinations(circle: () => void): readonly CombinationModel[] {
+    return this.#combinations.get(circle) ?? [];
+  }
+
+  /** Why nothing of this structure can be told, in one line. */
+  get withheld(): string | undefined {
+    if (this.report.flawed) return 'something of this structure cannot be read or is not evaluated';
+    const solved = this.solved(() => undefined);
+    return solved === undefined ? 'the structure can move freely' : undefined;
+  }
+
+  #build(): Structure | undefined {
+    const { scope, head, names, values, library } = this.#inputs;
+    const geometry = this.geometry(() => undefined);
+    if (geometry === undefined) return undefined;
+    if (brokenBeyond(scope.broken)) this.report.flawed = true;
+    for (const { keyword, name } of scope.broken) {
+      if (keyword === 'load' && name !== undefined) this.report.flawedCases.add(name);
+    }
+    this.#checkUnevaluated();
+    const titles = new Map<string, string>();
+    for (const statement of [...head.statements, ...scope.statements]) {
+      if (statement.kind === 'case' && statement.title !== undefined) titles.set(statement.name.text, statement.title.text);
+    }
+    const assumed = [...head.statements, ...scope.statements].some(
+      statement => statement.kind === 'assume' && statement.assumption.kind === 'axially stiff',
+    );
+    const structure = buildStructure({
+      scope,
+      names,
+      geometry,
+      library,
+      figures: values.figures(scope, this.report),
+      report: this.report,
+      titles,
+      axiallyStiff: assumed,
+    });
+    return structure.members.length === 0 ? undefined : structure;
+  }
+
+  /** Statements that are read but change what is evaluated in a way that this version cannot follow. */
+  #checkUnevaluated(): void {
+    for (const statement of [...this.#inputs.head.statements, ...this.scope.statements]) {
+      const own = this.scope.statements.includes(statement);
+      if (statement.kind === 'use') {
+        this.report.flawed = true;
+        if (own) this.report.error('not-evaluated-yet', statement.range, 'Another note or table is read but not evaluated by this version: answers that may depend on it are withheld.');
+      }
+      if (statement.kind === 'carry') {
+        this.report.flawed = true;
+        this.report.error('not-evaluated-yet', statement.range, 'A carried reaction is read but not evaluated by this version: answers of this structure are withheld.', {
+          hint: 'put the reaction on as a load, from its result: load dead: (seat of Rafter) down at D',
+        });
+      }
+      if (statement.kind === 'assume' && statement.assumption.kind === 'shear deformation') {
+        this.report.flawed = true;
+        if (own) this.report.error('not-evaluated-yet', statement.range, 'Shear deformation is read but not evaluated by this version: answers of this structure are withheld.');
+      }
+    }
+  }
+
+  #solve(): Solved | undefined {
+    const structure = this.structure(() => undefined);
+    if (structure === undefined || this.report.flawed) return undefined;
+    this.key = solutionKey(structure);
+    const solved = this.#inputs.memory.solve(structure, this.key);
+    if (solved.analysis.stability.stable) return solved;
+    this.report.diagnostics.push(...describeInstability(structure, solved.analysis));
+    return undefined;
+  }
+
+  #readCombinations(): readonly CombinationModel[] {
+    const { scope, head, values, wordsOf } = this.#inputs;
+    const structure = this.structure(() => undefined);
+    if (structure === undefined) return [];
+    const { cases } = structure;
+    const own = readCombinations(scope, cases, values.figures(scope, this.report), wordsOf, this.report);
+    const shared = readCombinations(head, cases, values.figures(head, this.report), wordsOf, this.report);
+    const names = new Set(own.map(({ name }) => name));
+    const alone = cases.map((_, index) => caseAlone(cases, index));
+    return [...own, ...shared.filter(({ name }) => !names.has(name)), ...alone];
+  }
+}
+
+/** Keywords whose broken line costs less than the whole structure: what it would have defined is missed where it is used. */
+const CONTAINED = ['structure', 'case', 'material', 'section', 'let', 'combine', 'find', 'require', 'display', 'show', 'load'];
+
+/** Whether a line that could not be read may have been part of the structure itself. */
+function brokenBeyond(broken: readonly BrokenStatement[]): boolean {
+  return broken.some(({ keyword, name }) => {
+    if (keyword === 'load') return name === undefined;
+    if (CONTAINED.includes(keyword)) return keyword === 'structure';
+    return !CONTAINED.includes(nearest(keyword, KEYWORDS) ?? '');
+  });
+}
+
+const KEYWORDS = [
+  ...CONTAINED,
+  'use',
+  'hinge',
+  'member',
+  'bar',
+  'bars',
+  'group',
+  'point',
+  'connection',
+  'release',
+  'support',
+  'assume',
+  'carry',
+];
