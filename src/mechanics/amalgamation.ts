@@ -17,13 +17,12 @@ export interface Fronts {
  * A child joins its parent when the front then has at most this share of zeros among its panel's numbers: more for
  * narrow fronts, whose handling costs more than their arithmetic (the relaxed supernodes of Ashcraft and Grimes, The
  * influence of relaxed supernode partitions on the multifrontal method, ACM Transactions on Mathematical Software 15,
- * 1989; the limits found by measurement on frames of 300 to 300 000 freedoms).
+ * 1989; the limits found by measurement on frames of 300 to 30 000 freedoms).
  */
 const zeroLimits: readonly { readonly pivots: number; readonly share: number }[] = [
-  { pivots: 16, share: 0.5 },
-  { pivots: 48, share: 0.2 },
-  { pivots: 96, share: 0.1 },
-  { pivots: Number.POSITIVE_INFINITY, share: 0.03 },
+  { pivots: 12, share: 0.4 },
+  { pivots: 24, share: 0.2 },
+  { pivots: Number.POSITIVE_INFINITY, share: 0.05 },
 ];
 
 /** Gathers the nodes of a tree in fronts. `weights` are the freedoms of the nodes, by positions. */

@@ -59,7 +59,7 @@ export class Factorisation {
     const { factors, size } = this;
     const { order } = factors.symbolic;
     const { scale } = factors;
-    const count = size === 0 ? 0 : rhs.length / size;
+    const count = rhs.length === 0 ? 0 : rhs.length / size;
     if (!Number.isInteger(count)) {
       throw new Error(`A right side of ${rhs.length} numbers does not fit a matrix of ${size} rows`);
     }

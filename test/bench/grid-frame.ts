@@ -3,16 +3,16 @@
 
 import type { SymmetricMatrix } from '../../src/mechanics/symmetric-matrix.ts';
 
-/** What a bay's members are made of: steel in SI, EA and EI of the right order. */
-const length = 4;
-const axialStiffness = 1.9e9;
-const bendingStiffness = 4.2e7;
+/** Of every member: m, N, N m². */
+export const length = 4;
+export const axialStiffness = 1.9e9;
+export const bendingStiffness = 4.2e7;
 
 /**
- * A frame of storeys × columns joints, all bases fixed, a column under every joint and a beam between neighbours,
- * Euler-Bernoulli, three freedoms a joint (x, y, rotation).
+ * A frame of storeys × columns joints, three freedoms each (x, y, rotation), Euler-Bernoulli: a beam between neighbours
+ * of a storey, a column under every joint. The lowest columns stand in fixed bases, or there are none (a floating frame).
  */
-export function gridFrame(storeys: number, columns: number): SymmetricMatrix {
+export function gridFrame(storeys: number, columns: number, bases: 'fixed' | 'none' = 'fixed'): SymmetricMatrix {
   const size = 3 * storeys * columns;
   const entries = Array.from({ length: size }, () => new Map<number, number>());
   const add = (row: number, column: number, value: number) => {
@@ -23,6 +23,7 @@ export function gridFrame(storeys: number, columns: number): SymmetricMatrix {
   const addElement = (from: number, to: number, block: readonly (readonly number[])[]) => {
     const freedoms = [0, 1, 2].map(k => from + k).concat([0, 1, 2].map(k => to + k));
     for (let i = 0; i < 6; i++) {
+      // Freedoms below 0 are those of a base.
       if (freedoms[i]! < 0) continue;
       for (let j = 0; j < 6; j++) if (freedoms[j]! >= 0) add(freedoms[i]!, freedoms[j]!, block[i]![j]!);
     }
@@ -32,7 +33,8 @@ export function gridFrame(storeys: number, columns: number): SymmetricMatrix {
   for (let storey = 0; storey < storeys; storey++) {
     for (let bay = 0; bay < columns; bay++) {
       const joint = 3 * (storey * columns + bay);
-      addElement(storey === 0 ? -3 : joint - 3 * columns, joint, column);
+      if (storey > 0) addElement(joint - 3 * columns, joint, column);
+      else if (bases === 'fixed') addElement(-3, joint, column);
       if (bay > 0) addElement(joint - 3, joint, beam);
     }
   }
