@@ -19,7 +19,7 @@ export async function run(args: readonly string[], world: World): Promise<number
 const RUN: Readonly<Record<CommandName, (args: Arguments, world: World) => Promise<number>>> = {
   check: async (args, world) => (await import('./check.ts')).check(args, world),
   print: async (args, world) => (await import('./print.ts')).print(args, world),
-  'language-server': async (args, world) => (await import('./language-server.ts')).languageServer(args, world),
+  'language-server': async args => (await import('./language-server.ts')).languageServer(args),
 };
 
 async function dispatch([first, ...rest]: readonly string[], world: World): Promise<number> {
