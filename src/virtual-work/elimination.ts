@@ -102,6 +102,30 @@ export function selfBalance(
   substituteBack(elimination, scratch, end, result);
 }
 
+/**
+ * The other way about: the movements u, by rows, that give each column kept the strain that `strains` has for it,
+ * keptᵀ · u = strain.
+ */
+export function movementsFrom(elimination: Elimination, strains: Float64Array): Float64Array {
+  const { rank, rowCount, rowOfPivot, columnOfPivot, pivots, lower, upper } = elimination;
+  const movements = new Float64Array(rowCount);
+  for (let pivot = 0; pivot < rank; pivot++) {
+    let sum = strains[columnOfPivot[pivot]!]!;
+    for (let entry = upper.starts[pivot]!; entry < upper.starts[pivot + 1]!; entry++) {
+      sum -= upper.values[entry]! * movements[rowOfPivot[upper.indices[entry]!]!]!;
+    }
+    movements[rowOfPivot[pivot]!] = sum / pivots[pivot]!;
+  }
+  for (let pivot = rank - 1; pivot >= 0; pivot--) {
+    let sum = movements[rowOfPivot[pivot]!]!;
+    for (let entry = lower.starts[pivot]!; entry < lower.starts[pivot + 1]!; entry++) {
+      sum -= lower.values[entry]! * movements[lower.indices[entry]!]!;
+    }
+    movements[rowOfPivot[pivot]!] = sum;
+  }
+  return movements;
+}
+
 /** Of the pivots before `end`; leaves `load` zero at their rows. */
 function substituteBack(elimination: Elimination, load: Float64Array, end: number, result: Float64Array): void {
   const { rowOfPivot, columnOfPivot, pivots, upper } = elimination;
@@ -129,7 +153,7 @@ class Eliminator implements Elimination {
   readonly lower: SparseColumns;
   readonly upper: SparseColumns;
   readonly redundants: number[] = [];
-  readonly redundant = new SparseColumns(16);
+  readonly redundant = new SparseColumns();
   /** Multiplications so far, and rows visited. */
   spent = 0;
 
@@ -159,8 +183,8 @@ class Eliminator implements Elimination {
     this.rowOfPivot = new Int32Array(rowCount);
     this.columnOfPivot = new Int32Array(rowCount);
     this.pivots = new Float64Array(rowCount);
-    this.lower = new SparseColumns(8 * rowCount);
-    this.upper = new SparseColumns(8 * rowCount);
+    this.lower = new SparseColumns();
+    this.upper = new SparseColumns();
     this.#columns = columns;
     this.#pivotOfRow = new Int32Array(rowCount).fill(-1);
     this.#rows = new Int32Array(maximumEntries);

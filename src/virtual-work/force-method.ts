@@ -2,15 +2,15 @@
 // then kept.
 import type { Load, Structure } from '../model/structure.ts';
 import { type Cholesky, cholesky, solveCholesky } from './cholesky.ts';
-import { addLoad, emptyLoading } from './loading.ts';
+import { addLoad, emptyLoading, type Loading } from './loading.ts';
 import type { Preference } from './preference.ts';
 import { type ForceState, type PrimaryStructure, primaryForces, primaryStructure } from './primary.ts';
 import { flexibilityOf } from './statics.ts';
 import { addState, type UnitState, unitStates, workOf } from './unit-states.ts';
 import { strainsOf } from './work.ts';
 
-/** The response to one case alone. */
-export interface CaseForces {
+/** The response to one loading. */
+export interface Response {
   /** Of the primary structure, every redundant zero. */
   readonly primary: ForceState;
   /** δ₀ at each redundant, m or rad: the work of its unit state on the strains of `primary`, imposed movements included. */
@@ -45,15 +45,17 @@ export function prepare(structure: Structure, preference?: Preference): ForceMet
  * three digits a step.
  */
 const LEAST_PIVOT = 1e-13;
-/** Refinements of the redundants; each gains all digits that the condition leaves, so that the last only confirms. */
+/** Refinements of the redundants at most; each gains all the digits that the condition leaves. */
 const REFINEMENTS = 3;
+/** Step of a redundant, relative to it, that is rounding. */
+const SETTLED = 1e-14;
 /** Share of the terms of a sum that counts as nothing left: their rounding. */
 const CANCELLED = 1e-9;
 
 export class ForceMethod {
   readonly primary: PrimaryStructure;
   readonly #loads: readonly (readonly Load[])[];
-  readonly #cases: (CaseForces | undefined)[] = [];
+  readonly #cases: (Response | undefined)[] = [];
   #states: { determined: UnitState[]; undetermined: UnitState[] } | undefined;
   #flexibility: Float64Array | undefined;
   #factor: Cholesky | undefined;
@@ -88,8 +90,53 @@ export class ForceMethod {
   }
 
   /** `index`: into the structure's cases. */
-  case(index: number): CaseForces {
-    return (this.#cases[index] ??= this.#solve(index));
+  case(index: number): Response {
+    this.#cases[index] ??= this.respond(this.loading(this.#loads.map((_, other) => Number(other === index))));
+    return this.#cases[index];
+  }
+
+  /** The response to any loading, real or virtual. */
+  respond(loading: Loading): Response {
+    const { primary, unitStates: states } = this;
+    const { statics } = primary;
+    const released = primaryForces(primary, loading);
+    let strains = strainsOf(statics, released);
+    const contradicted = this.undeterminedStates.some(state => contradicts(state, strains));
+    const gaps = gapsAt(states, strains);
+    if (states.length === 0) {
+      return { primary: released, gaps, redundants: gaps, final: released, strains, contradicted };
+    }
+
+    const redundants = new Float64Array(states.length);
+    const unknowns = released.unknowns.slice();
+    const final = { ...released, unknowns };
+    let open = gaps;
+    for (let round = 0; round <= REFINEMENTS; round++) {
+      // f · X = −δ for the gaps that are open, which come from the strains themselves and not from f.
+      const step = open.map(gap => -gap);
+      solveCholesky(this.#cholesky(), step);
+      let settled = true;
+      for (let at = 0; at < states.length; at++) {
+        settled &&= Math.abs(step[at]!) <= SETTLED * Math.abs(redundants[at]!);
+        redundants[at]! += step[at]!;
+        addState(states[at]!, step[at]!, unknowns);
+      }
+      strains = strainsOf(statics, final);
+      if (settled) break;
+      open = gapsAt(states, strains);
+    }
+    return { primary: released, gaps, redundants, final, strains, contradicted };
+  }
+
+  /** The cases with these factors, as one loading. */
+  loading(factors: readonly number[]): Loading {
+    const { statics } = this.primary;
+    const loading = emptyLoading(statics);
+    for (const [index, loads] of this.#loads.entries()) {
+      const factor = factors[index] ?? 0;
+      if (factor !== 0) for (const load of loads) addLoad(statics, loading, load, factor);
+    }
+    return loading;
   }
 
   #allStates() {
@@ -108,46 +155,21 @@ export class ForceMethod {
     this.#factor ??= cholesky(this.flexibility.slice(), this.unitStates.length);
     return this.#factor;
   }
+}
 
-  #solve(index: number): CaseForces {
-    const { primary, unitStates: states } = this;
-    const { statics } = primary;
-    const loading = emptyLoading(statics);
-    for (const load of this.#loads[index]!) addLoad(statics, loading, load, 1);
-    const released = primaryForces(primary, loading);
-    let strains = strainsOf(statics, released);
-    const contradicted = this.undeterminedStates.some(state => contradicts(state, strains));
-    const gaps = Float64Array.from(states, state => workOf(state, strains));
-    if (states.length === 0) {
-      return { primary: released, gaps, redundants: gaps, final: released, strains, contradicted };
-    }
-
-    const redundants = new Float64Array(states.length);
-    const unknowns = released.unknowns.slice();
-    const final = { ...released, unknowns };
-    let open = gaps;
-    for (let refinement = 0; refinement <= REFINEMENTS; refinement++) {
-      // f · X = −δ; then the gaps that are left, from the strains themselves rather than from f.
-      const step = open.map(gap => -gap);
-      solveCholesky(this.#cholesky(), step);
-      for (const [at, state] of states.entries()) {
-        redundants[at]! += step[at]!;
-        addState(state, step[at]!, unknowns);
-      }
-      strains = strainsOf(statics, final);
-      open = Float64Array.from(states, state => workOf(state, strains));
-    }
-    return { primary: released, gaps, redundants, final, strains, contradicted };
-  }
+function gapsAt(states: readonly UnitState[], strains: Float64Array): Float64Array {
+  const gaps = new Float64Array(states.length);
+  for (let at = 0; at < states.length; at++) gaps[at] = workOf(states[at]!, strains);
+  return gaps;
 }
 
 function flexibilities({ statics }: PrimaryStructure, states: readonly UnitState[]): Float64Array {
   const result = new Float64Array((states.length * (states.length + 1)) / 2);
   const unknowns = new Float64Array(statics.unknownCount);
   let at = 0;
-  for (const [row, state] of states.entries()) {
+  for (let row = 0; row < states.length; row++) {
     unknowns.fill(0);
-    addState(state, 1, unknowns);
+    addState(states[row]!, 1, unknowns);
     const strains = strainsOf(statics, { unknowns, spans: new Map(), ground: undefined });
     for (let column = 0; column <= row; column++) result[at++] = workOf(states[column]!, strains);
   }

@@ -1,4 +1,11 @@
-export { type CaseForces, ForceMethod, prepare } from './force-method.ts';
+export { ForceMethod, prepare, type Response } from './force-method.ts';
+export { type GivenForces, givenForces, largestGap, movementFromForces } from './given-forces.ts';
+export type { Ground } from './grounds.ts';
+export { type ForcePiece, type InternalForces, internalForces, type MemberForces } from './internal-forces.ts';
 export { movement, movementOf } from './movement.ts';
 export { type Preference, stiffestFromTheGround } from './preference.ts';
-export { type PrimaryStructure, primaryStructure, virtualSystem } from './primary.ts';
+export { type ForceState, type PrimaryStructure, primaryStructure, virtualSystem } from './primary.ts';
+export { type UnknownForce, unknownForce } from './redundants.ts';
+export { withLeastThrusts } from './thrusts.ts';
+export { addState, type UnitState } from './unit-states.ts';
+export type { Work } from './work.ts';

@@ -37,7 +37,10 @@ export function addLoad(statics: Statics, loading: Loading, load: Load, factor: 
   }
 }
 
-/** A force (global components) and a couple, anticlockwise, at a place. */
+/**
+ * A force (global components) and a couple, anticlockwise, at a place. `side`: where the member is hinged at the place and
+ * runs on, which of its two ends the couple turns, in the direction of travel.
+ */
 export function addAction(
   statics: Statics,
   loading: Loading,
@@ -45,11 +48,12 @@ export function addAction(
   x: number,
   y: number,
   moment: number,
+  side: 'before' | 'after' = 'before',
 ): void {
   const place = at.kind === 'point' ? at : placeOnMember(statics, at.member, at.distance);
   if (place.kind === 'point') {
     addToPoint(statics, loading, place.point, x, y);
-    if (moment !== 0) addCouple(statics, loading, place.point, place.member, moment);
+    if (moment !== 0) addCouple(statics, loading, place, moment, side);
     return;
   }
   const leg = statics.legs[place.leg]!;
@@ -86,32 +90,39 @@ function addToPoint({ forceRow }: Statics, { joints }: Loading, point: number, x
   joints[row + 1]! += y;
 }
 
-/** On the joint, or on the member's own end where that is hinged (of two, the one that the travel comes to first). */
+/** On the joint, or on the member's own end where that is hinged. */
 function addCouple(
   statics: Statics,
   loading: Loading,
-  point: number,
-  member: number | undefined,
+  { point, member }: { readonly point: number; readonly member?: number },
   moment: number,
+  side: 'before' | 'after',
 ): void {
-  if (member !== undefined) {
-    for (let index = statics.firstLeg[member]!; index < statics.firstLeg[member + 1]!; index++) {
-      const leg = statics.legs[index]!;
-      if (leg.from === point) {
-        if (leg.rigidStart) break;
-        // An anticlockwise couple on the start of a leg puts its upper side in tension, one on its end the underside.
-        spanOf(loading, index).startMoment -= moment;
-        return;
-      }
-      if (leg.to === point) {
-        if (leg.rigidEnd) break;
-        spanOf(loading, index).endMoment += moment;
-        return;
-      }
-    }
+  const end = member === undefined ? undefined : freeEnd(statics, point, member, side);
+  if (end) {
+    // An anticlockwise couple on the start of a leg puts its upper side in tension, one on its end the underside.
+    const span = spanOf(loading, end.leg);
+    if (end.which === 'start') span.startMoment -= moment;
+    else span.endMoment += moment;
+    return;
   }
   const row = statics.coupleRow[point]!;
   if (row >= 0) loading.joints[row]! += moment;
+}
+
+interface FreeEnd {
+  readonly leg: number;
+  readonly which: 'start' | 'end';
+}
+
+function freeEnd(statics: Statics, point: number, member: number, side: 'before' | 'after'): FreeEnd | undefined {
+  let found: FreeEnd | undefined;
+  for (let index = statics.firstLeg[member]!; index < statics.firstLeg[member + 1]!; index++) {
+    const leg = statics.legs[index]!;
+    if (leg.to === point && !leg.rigidEnd) found = { leg: index, which: 'end' };
+    if (leg.from === point && !leg.rigidStart && (!found || side === 'after')) found = { leg: index, which: 'start' };
+  }
+  return found;
 }
 
 function addSelfWeight(statics: Statics, loading: Loading, member: number, factor: number): void {
@@ -156,7 +167,7 @@ function perLength(leg: StaticLeg, direction: LineDirection): [x: number, y: num
       return [direction.x * share, direction.y * share];
     }
     case 'square': {
-      const side = Math.sign(leg.cosine * direction.y - leg.sine * direction.x);
+      const side = leg.cosine * direction.y - leg.sine * direction.x < 0 ? -1 : 1;
       return [-leg.sine * side, leg.cosine * side];
     }
     case 'along':

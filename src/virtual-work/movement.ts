@@ -3,7 +3,7 @@
 import type { UnitAction } from '../model/question.ts';
 import type { ForceMethod } from './force-method.ts';
 import { type ForceState, virtualSystem } from './primary.ts';
-import { virtualWork } from './work.ts';
+import { virtualWork, type Work } from './work.ts';
 
 /**
  * Σ action · movement, m or rad, under the cases with these factors (in the order of the structure's cases). NaN where
@@ -11,18 +11,22 @@ import { virtualWork } from './work.ts';
  * nearly undetermined to be trusted.
  */
 export function movement(forceMethod: ForceMethod, factors: readonly number[], actions: readonly UnitAction[]): number {
-  return movementOf(forceMethod, factors, virtualSystem(forceMethod.primary, actions));
+  return movementOf(forceMethod, factors, virtualSystem(forceMethod.primary, actions)).value;
 }
 
-/** The same with the virtual system at hand, for one question under many combinations. */
-export function movementOf(forceMethod: ForceMethod, factors: readonly number[], virtual: ForceState): number {
-  if (!forceMethod.wellConditioned) return Number.NaN;
-  let sum = 0;
-  for (const [index, factor] of factors.entries()) {
+/**
+ * The same with the virtual system at hand, for one question under many combinations, and with the size of its terms: a
+ * movement that is nil by symmetry, or at a held point, is so to some 1e-13 of that size.
+ */
+export function movementOf(forceMethod: ForceMethod, factors: readonly number[], virtual: ForceState): Work {
+  const sum = { value: forceMethod.wellConditioned ? 0 : Number.NaN, size: 0 };
+  for (let index = 0; index < factors.length; index++) {
+    const factor = factors[index]!;
     if (factor === 0) continue;
     const { final, strains, contradicted } = forceMethod.case(index);
-    if (contradicted) return Number.NaN;
-    sum += factor * virtualWork(forceMethod.primary.statics, virtual, final, strains);
+    const { value, size } = virtualWork(forceMethod.primary.statics, virtual, final, strains);
+    sum.value += contradicted ? Number.NaN : factor * value;
+    sum.size += Math.abs(factor) * size;
   }
   return sum;
 }

@@ -34,3 +34,8 @@ export function productIntegral(a: Polynomial, b: Polynomial, length: number): n
   }
   return sum * length;
 }
+
+export function sum(a: Polynomial, b: Polynomial): number[] {
+  const [long, short] = a.length >= b.length ? [a, b] : [b, a];
+  return long.map((coefficient, power) => coefficient + (short[power] ?? 0));
+}

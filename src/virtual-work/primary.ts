@@ -76,6 +76,6 @@ export function primaryForces({ statics, elimination }: PrimaryStructure, loadin
 /** The virtual system of the actions, carried by the primary structure alone. */
 export function virtualSystem(primary: PrimaryStructure, actions: readonly UnitAction[]): ForceState {
   const loading = emptyLoading(primary.statics);
-  for (const { at, x, y, moment } of actions) addAction(primary.statics, loading, at, x, y, moment);
+  for (const { at, x, y, moment, side } of actions) addAction(primary.statics, loading, at, x, y, moment, side);
   return primaryForces(primary, loading);
 }

@@ -1,7 +1,7 @@
 // The work of one state of forces on the strains of another: the integrals of virtual work, leg by leg.
 import { productIntegral, shifted } from './polynomial.ts';
 import type { ForceState } from './primary.ts';
-import type { SpanForces } from './span.ts';
+import type { SpanForces, SpanPiece } from './span.ts';
 import type { StaticLeg, Statics } from './statics.ts';
 
 /**
@@ -34,17 +34,38 @@ export function strainsOf(statics: Statics, { unknowns, spans, ground }: ForceSt
   return strains;
 }
 
-/** Σ∫(N n/EA + M m/EI) dx + Σ R r/k − Σ r g of a virtual state on a real one, whose strains are given. */
-export function virtualWork(statics: Statics, virtual: ForceState, real: ForceState, strains: Float64Array): number {
-  let work = 0;
+/** A sum beside the sum of the sizes of its terms, to which its rounding is relative. */
+export interface Work {
+  value: number;
+  size: number;
+}
+
+/** Σ∫(N n/EA + M m/EI) dx + Σ R r/k − Σ r g of a virtual state on real forces, whose strains are given. */
+export function virtualWork(statics: Statics, virtual: ForceState, real: RealForces, strains: Float64Array): Work {
+  let value = 0;
+  let size = 0;
   const { unknowns } = virtual;
-  for (let unknown = 0; unknown < unknowns.length; unknown++) work += unknowns[unknown]! * strains[unknown]!;
-  for (const [index, span] of virtual.spans) work += workWithin(statics.legs[index]!, index, span, real);
-  return work;
+  for (let unknown = 0; unknown < unknowns.length; unknown++) {
+    const term = unknowns[unknown]! * strains[unknown]!;
+    value += term;
+    size += Math.abs(term);
+  }
+  for (const [index, span] of virtual.spans) {
+    const term = workWithin(statics.legs[index]!, index, span, real);
+    value += term;
+    size += Math.abs(term);
+  }
+  return { value, size };
+}
+
+/** What is read of a real state: see `ForceState`. */
+export interface RealForces {
+  readonly unknowns: Float64Array;
+  readonly spans: ReadonlyMap<number, { readonly pieces: readonly SpanPiece[] }>;
 }
 
 /** Of what a virtual action within the leg adds to the forces that stand at its ends. */
-function workWithin(leg: StaticLeg, index: number, virtual: SpanForces, real: ForceState): number {
+function workWithin(leg: StaticLeg, index: number, virtual: SpanForces, real: RealForces): number {
   const { axialFlexibility, bendingFlexibility } = leg;
   const { unknowns, spans } = real;
   let axial = unknowns[3 * index]! * virtual.axialIntegral;

@@ -1,0 +1,157 @@
+// Movements of structures that have too many redundants for the force method: the real forces are given by the caller,
+// and only the virtual system is found here.
+//
+// What this proves. The virtual system is in equilibrium by itself, so the movement is the one that belongs to the given
+// forces along the members that carry the virtual system: a wrong movement is found out. That the forces are right is
+// proved apart, by `largestGap`: forces that leave no gap anywhere belong to movements that fit together, and if they
+// also balance the loads (which the caller's own residual says) they are the only ones that do both.
+import type { UnitAction } from '../model/question.ts';
+import { movementsFrom } from './elimination.ts';
+import type { InternalForces } from './internal-forces.ts';
+import { addLoad, emptyLoading, type Loading } from './loading.ts';
+import { derivative, productIntegral, valueAt } from './polynomial.ts';
+import { type PrimaryStructure, virtualSystem } from './primary.ts';
+import type { SpanPiece } from './span.ts';
+import { ENTRIES_PER_UNKNOWN, entriesOf, isUnknown, type StaticLeg, type Statics, unitOf } from './statics.ts';
+import { type RealForces, virtualWork, type Work } from './work.ts';
+
+/** The strains that given forces cause, by unknown (see `strainsOf` in work.ts), with the forces themselves. */
+export interface GivenForces {
+  readonly forces: InternalForces;
+  readonly strains: Float64Array;
+}
+
+/** Of the structure under its cases with these factors, the forces being those of the same. */
+export function givenForces(
+  { statics }: PrimaryStructure,
+  factors: readonly number[],
+  forces: InternalForces,
+): GivenForces {
+  const { structure, legs, grounds, firstReaction } = statics;
+  const strains = new Float64Array(statics.unknownCount);
+  const loading = emptyLoading(statics);
+  for (const load of structure.loads) {
+    const factor = factors[load.case]!;
+    if (factor !== 0) addLoad(statics, loading, load, factor);
+  }
+  const ends = new Float64Array(2 * legs.length * COMPONENTS);
+  for (let index = 0; index < legs.length; index++) {
+    const leg = legs[index]!;
+    const pieces = piecesWithin(forces, leg);
+    strains.set(strainsWithin(leg, pieces), 3 * index);
+    ends.set(endForces(leg, pieces), 2 * index * COMPONENTS);
+  }
+  const onPoints = sumAtPoints(statics, ends, loading);
+  for (const [index, { point, x, y, moment, flexibility }] of grounds.entries()) {
+    const row = moment ? statics.coupleRow[point]! : statics.forceRow[point]!;
+    const reaction = moment ? -onPoints[row]! : -(x * onPoints[row]! + y * onPoints[row + 1]!);
+    strains[firstReaction + index] = flexibility * reaction - (loading.ground?.[index] ?? 0);
+  }
+  return { forces, strains };
+}
+
+/** As `movement`, with the virtual system on the primary structure and the given forces for the real ones. */
+export function movementFromForces(
+  primary: PrimaryStructure,
+  { forces, strains }: GivenForces,
+  actions: readonly UnitAction[],
+): Work {
+  const { statics } = primary;
+  const virtual = virtualSystem(primary, actions);
+  const spans = new Map<number, { pieces: readonly SpanPiece[] }>();
+  for (const leg of virtual.spans.keys()) spans.set(leg, { pieces: piecesWithin(forces, statics.legs[leg]!) });
+  // The given pieces hold the whole force, so that nothing is left to stand at the ends.
+  const real: RealForces = { unknowns: new Float64Array(statics.unknownCount), spans };
+  return virtualWork(statics, virtual, real, strains);
+}
+
+/**
+ * The largest gap that the strains of the given forces leave at a redundant, when the points have moved as the primary
+ * structure's strains say: relative to the largest movement, turns by the length of the legs. 0 where all fits.
+ */
+export function largestGap({ statics, elimination }: PrimaryStructure, { strains }: GivenForces): number {
+  // Here in dimensionless units, as the columns are.
+  const scaled = strains.map((strain, unknown) => (strain === 0 ? 0 : strain * unitOf(statics, unknown)));
+  // A unit of an unknown pulls the points against their movement, so that its work on them is minus its strain.
+  const movements = movementsFrom(
+    elimination,
+    scaled.map(strain => -strain),
+  );
+  const rows = new Int32Array(ENTRIES_PER_UNKNOWN);
+  const values = new Float64Array(ENTRIES_PER_UNKNOWN);
+  let size = 0;
+  for (const movement of movements) size = Math.max(size, Math.abs(movement));
+  let largest = 0;
+  for (const unknown of elimination.redundants) {
+    if (!isUnknown(statics, unknown)) continue;
+    const count = entriesOf(statics, unknown, rows, values);
+    let gap = scaled[unknown]!;
+    size = Math.max(size, Math.abs(gap));
+    for (let entry = 0; entry < count; entry++) gap += values[entry]! * movements[rows[entry]!]!;
+    largest = Math.max(largest, Math.abs(gap));
+  }
+  return size === 0 ? 0 : largest / size;
+}
+
+/** Force right, force up, couple anticlockwise. */
+const COMPONENTS = 3;
+
+/** The leg's pieces, in distances from its start. */
+function piecesWithin(forces: InternalForces, leg: StaticLeg): SpanPiece[] {
+  const pieces: SpanPiece[] = [];
+  for (const { leg: index, start, end, axialForce, bendingMoment } of forces.members[leg.member]!.pieces) {
+    if (index !== leg.index) continue;
+    pieces.push({ start: start - leg.start, end: end - leg.start, axialForce, bendingMoment });
+  }
+  return pieces;
+}
+
+function strainsWithin(
+  { length, axialFlexibility, bendingFlexibility }: StaticLeg,
+  pieces: readonly SpanPiece[],
+): [axial: number, start: number, end: number] {
+  let axial = 0;
+  let falling = 0;
+  let rising = 0;
+  for (const { start, end, axialForce, bendingMoment } of pieces) {
+    const span = end - start;
+    axial += productIntegral(axialForce, [1], span);
+    falling += productIntegral(bendingMoment, [1 - start / length, -1 / length], span);
+    rising += productIntegral(bendingMoment, [start / length, 1 / length], span);
+  }
+  return [axialFlexibility * axial, bendingFlexibility * falling, bendingFlexibility * rising];
+}
+
+/** What the leg does to the points at its start and end, `COMPONENTS` each. */
+function endForces({ cosine, sine, rigidStart, rigidEnd }: StaticLeg, pieces: readonly SpanPiece[]): number[] {
+  const first = pieces[0]!;
+  const last = pieces[pieces.length - 1]!;
+  const span = last.end - last.start;
+  const startAxial = valueAt(first.axialForce, 0);
+  const startShear = valueAt(derivative(first.bendingMoment), 0);
+  const endAxial = valueAt(last.axialForce, span);
+  const endShear = valueAt(derivative(last.bendingMoment), span);
+  return [
+    startAxial * cosine + startShear * sine,
+    startAxial * sine - startShear * cosine,
+    rigidStart ? valueAt(first.bendingMoment, 0) : 0,
+    -endAxial * cosine - endShear * sine,
+    -endAxial * sine + endShear * cosine,
+    rigidEnd ? -valueAt(last.bendingMoment, span) : 0,
+  ];
+}
+
+/** Legs and loads together, by the rows of the equations. */
+function sumAtPoints({ legs, forceRow, coupleRow }: Statics, ends: Float64Array, { joints }: Loading): Float64Array {
+  const sum = joints.slice();
+  for (const [index, { from, to }] of legs.entries()) {
+    for (const [which, point] of [from, to].entries()) {
+      const at = (2 * index + which) * COMPONENTS;
+      const row = forceRow[point]!;
+      sum[row]! += ends[at]!;
+      sum[row + 1]! += ends[at + 1]!;
+      if (coupleRow[point]! >= 0) sum[coupleRow[point]!]! += ends[at + 2]!;
+    }
+  }
+  return sum;
+}
