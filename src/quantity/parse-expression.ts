@@ -159,7 +159,8 @@ function bad(range: Range, message: string, hint?: string): Problem {
   return { code: 'bad-value', range, message, ...(hint && { hint }) };
 }
 
-function adjacent(range: Range): Problem {
+/** Two operands without an operator between them; `range` is the second. */
+export function adjacent(range: Range): Problem {
   return bad(range, 'Two operands stand side by side; nothing multiplies without a sign.', 'Put `*` between them.');
 }
 

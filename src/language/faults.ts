@@ -1,0 +1,56 @@
+// The diagnostics of mistakes in spelling that no grammar is needed to see.
+
+import type { Diagnostic } from './diagnostic.ts';
+import { rangeOf } from './reader.ts';
+import type { Fault, Scanned, Token } from './tokens.ts';
+
+/** What a fault of a line says. In a chain a long dash stands for `--`, elsewhere for a minus. */
+export function faultDiagnostic(fault: Fault, line: Scanned, inChain: boolean): Diagnostic {
+  const range = rangeOf(fault);
+  switch (fault.kind) {
+    case 'decimal-comma':
+      return {
+        code: 'decimal-comma',
+        severity: 'error',
+        range,
+        message: 'A comma stands between two digits; the decimal sign is a point.',
+        hint: 'Between two values, a blank stands behind the comma.',
+        fix: { title: 'Write a decimal point', edits: [{ range, text: '.' }] },
+      };
+    case 'long-dash': {
+      const text = inChain ? '--' : '-';
+      const edits = line.tokens.filter(isLongDash).map(token => ({ range: rangeOf(token), text }));
+      const message = inChain
+        ? 'A long dash stands where `--` (two hyphens) is due.'
+        : 'A long dash is no sign here; a minus is a hyphen.';
+      return { code: 'long-dash', severity: 'error', range, message, fix: { title: `Write \`${text}\``, edits } };
+    }
+    case 'open-quote':
+      return {
+        code: 'open-quote',
+        severity: 'error',
+        range,
+        message: 'The quoted text does not close on its line.',
+        hint: 'Put `"` at its end.',
+      };
+    case 'curly-quote':
+      return {
+        code: 'open-quote',
+        severity: 'error',
+        range,
+        message: 'A quoted text stands between straight quotes (`"`).',
+        fix: {
+          title: 'Write straight quotes',
+          edits: line.tokens.filter(isCurlyQuote).map(token => ({ range: rangeOf(token), text: '"' })),
+        },
+      };
+  }
+}
+
+function isLongDash(token: Token): boolean {
+  return token.kind === 'stray' && '–—‒―'.includes(token.text);
+}
+
+function isCurlyQuote(token: Token): boolean {
+  return token.kind === 'stray' && '“”„‟«»'.includes(token.text);
+}
