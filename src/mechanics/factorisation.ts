@@ -21,7 +21,7 @@ export class Factorisation {
   readonly largestPivot: number;
   /** Pivots below −tolerance; none in a stiffness matrix whose stiffnesses are all positive. */
   readonly negativePivots: number;
-  /** Freedoms with a singular pivot, in the order of elimination. */
+  /** Freedoms with a singular pivot, in the order of elimination. A structure may be free although there are none. */
   readonly singular: Int32Array;
 
   constructor(factors: Factors, tolerance: number) {
@@ -98,14 +98,16 @@ export class Factorisation {
  *
  * A pivot is 1 less a sum of terms l²d, none negative and together at most 1, so that each addition errs by at most
  * half of ε. In one front there are at most as many terms as the front is tall; between fronts sums are added up pair
- * by pair, which the 8 allows for. A pivot that is exactly 0 thus comes out no larger than this, unless the free
- * movement is much larger elsewhere than at the freedom met last; `nullSpace` finds those as well.
+ * by pair, which the 8 allows for. A pivot that is exactly 0 thus comes out no larger than this where the free movement
+ * is about even. Where it is larger by a factor at other freedoms than at the one met last, the rounding of the pivot
+ * grows with its square: a frame of 100 × 100 joints that floats ends in pivots of 1e-7. So a small pivot shows that
+ * something is free, and none shows that nothing is; that is for `nullSpace` to say.
  */
 export function pivotTolerance(symbolic: Symbolic): number {
   return (8 + symbolic.tallest) * Number.EPSILON;
 }
 
-/** Factorises a matrix; a plan made for the same pattern is used when given. */
+/** Factorises a matrix of finite numbers; a plan made for the same pattern is used when given. */
 export function factorise(matrix: SymmetricMatrix, symbolic: Symbolic = analyseSymbolic(matrix)): Factorisation {
   const tolerance = pivotTolerance(symbolic);
   const scale = unitDiagonalScale(matrix);

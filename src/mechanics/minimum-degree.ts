@@ -149,45 +149,46 @@ class QuotientGraph {
     this.#pivots[this.#pivotCount++] = pivot;
     this.#eliminated += weight[pivot]!;
     weight[pivot] = -weight[pivot]!;
-    let freedoms = 0;
     let start = pivotStart;
-    let end = pivotStart;
     if (elements > 0) {
       let room = pivotEnd - pivotStart - elements;
       for (let k = pivotStart; k < pivotStart + elements; k++) room += this.#length[this.#lists[k]!]!;
       this.#reserve(room);
-      start = end = this.#listsEnd;
+      start = this.#listsEnd;
     }
-    const lists = this.#lists;
+    this.#degree[pivot] = 0;
+    let end = start;
     for (let k = pivotStart; k < pivotStart + elements; k++) {
-      const element = lists[k]!;
+      const element = this.#lists[k]!;
       const from = this.#start[element]!;
-      const to = from + this.#length[element]!;
-      for (let m = from; m < to; m++) {
-        const node = lists[m]!;
-        const own = weight[node]!;
-        if (own <= 0) continue;
-        freedoms += own;
-        weight[node] = -own;
-        lists[end++] = node;
-        this.#delist(node);
-      }
+      end = this.#gather(from, from + this.#length[element]!, pivot, end);
       this.#mark[element] = 0;
     }
-    for (let m = pivotStart + elements; m < pivotEnd; m++) {
-      const node = lists[m]!;
-      const own = weight[node]!;
-      if (own <= 0) continue;
-      freedoms += own;
-      weight[node] = -own;
-      lists[end++] = node;
-      this.#delist(node);
-    }
+    // Without elements the list is gathered where it stands, never ahead of what is read.
+    end = this.#gather(pivotStart + elements, pivotEnd, pivot, end);
     if (elements > 0) this.#listsEnd = end;
     this.#start[pivot] = start;
     this.#length[pivot] = end - start;
     this.#elements[pivot] = none;
-    this.#degree[pivot] = freedoms;
+  }
+
+  /** Moves the live nodes of a stretch of the lists, those not there yet, to the new element, which ends at `end`; returns its new end. */
+  #gather(from: number, to: number, pivot: number, end: number): number {
+    const lists = this.#lists;
+    const weight = this.#weight;
+    let freedoms = 0;
+    let at = end;
+    for (let k = from; k < to; k++) {
+      const node = lists[k]!;
+      const own = weight[node]!;
+      if (own <= 0) continue;
+      freedoms += own;
+      weight[node] = -own;
+      lists[at++] = node;
+      this.#delist(node);
+    }
+    this.#degree[pivot]! += freedoms;
+    return at;
   }
 
   #reserve(room: number): void {
