@@ -1,8 +1,8 @@
-// Words that several features share, in the voice of the page: figures with their units, movements with a direction,
-// the state of an answer.
+// Words that several features share, in the voice of the page: the state of an answer, figures with their units.
+import { show } from '../note/phrases.ts';
 import type { Answer } from '../note/result.ts';
-import { ANGLE, FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
-import { type DisplayUnits, showQuantity } from '../quantity/display.ts';
+import { FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
+import type { DisplayUnits } from '../quantity/display.ts';
 import { full } from '../quantity/number.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 
@@ -34,56 +34,26 @@ export function allDigits({ value }: Quantity, unit: string): string {
 
 /** m → `4.800 m`. */
 export function length(value: number, units: DisplayUnits): string {
-  return showQuantity({ value, dimension: LENGTH }, units, 'length').text;
+  return show({ value, dimension: LENGTH }, units, 'length');
 }
 
-/** N → `3.100 kN`. */
-export function force(value: number, units: DisplayUnits): string {
-  return showQuantity({ value, dimension: FORCE }, units, 'force').text;
+/** N right and up, N m anticlockwise → `3.100 kN down, 1.200 kN to the right`; `none` where all are nothing. */
+export function inAllDirections(
+  { x, y, couple }: { readonly x: number; readonly y: number; readonly couple: number },
+  units: DisplayUnits,
+): string {
+  const noise = 1e-12 * Math.max(Math.abs(x), Math.abs(y));
+  const parts: string[] = [];
+  if (Math.abs(y) > noise) parts.push(`${force(Math.abs(y), units)} ${y > 0 ? 'up' : 'down'}`);
+  if (Math.abs(x) > noise) parts.push(`${force(Math.abs(x), units)} to the ${x > 0 ? 'right' : 'left'}`);
+  if (couple !== 0) parts.push(`${moment(Math.abs(couple), units)} ${couple > 0 ? 'anticlockwise' : 'clockwise'}`);
+  return parts.length === 0 ? 'none' : parts.join(', ');
 }
 
-/** N m → `22.00 kN m`. */
-export function moment(value: number, units: DisplayUnits): string {
-  return showQuantity({ value, dimension: MOMENT }, units, 'moment').text;
+function force(value: number, units: DisplayUnits): string {
+  return show({ value, dimension: FORCE }, units, 'force');
 }
 
-/** m, positive down → `4.443 mm down`. */
-export function verticalMovement(down: number, units: DisplayUnits): string {
-  return directed(down, 'down', 'up', value => movement(value, units));
-}
-
-/** m, positive right → `2.100 mm to the left`. */
-export function levelMovement(right: number, units: DisplayUnits): string {
-  return directed(right, 'to the right', 'to the left', value => movement(value, units));
-}
-
-/** rad, positive anticlockwise → `0.008100 rad clockwise`. */
-export function rotation(anticlockwise: number, units: DisplayUnits): string {
-  return directed(
-    anticlockwise,
-    'anticlockwise',
-    'clockwise',
-    value => showQuantity({ value, dimension: ANGLE }, units, 'rotation').text,
-  );
-}
-
-/** N, positive in the first direction → `3.100 kN up`. */
-export function directedForce(value: number, positive: string, negative: string, units: DisplayUnits): string {
-  return directed(value, positive, negative, size => force(size, units));
-}
-
-/** N m, positive anticlockwise → `6.000 kN m clockwise`. */
-export function directedMoment(anticlockwise: number, units: DisplayUnits): string {
-  return directed(anticlockwise, 'anticlockwise', 'clockwise', size => moment(size, units));
-}
-
-function movement(value: number, units: DisplayUnits): string {
-  return showQuantity({ value, dimension: LENGTH }, units, 'deflection').text;
-}
-
-/** What is nothing has no direction. */
-function directed(value: number, positive: string, negative: string, show: (size: number) => string): string {
-  const shown = show(Math.abs(value));
-  if (value === 0) return shown;
-  return `${shown} ${value > 0 ? positive : negative}`;
+function moment(value: number, units: DisplayUnits): string {
+  return show({ value, dimension: MOMENT }, units, 'moment');
 }
