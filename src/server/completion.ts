@@ -1,8 +1,7 @@
 // Completion inside a fence: statements at the start of a line, and behind it the words and the names that can stand at
 // the cursor. Outside the fences it is silent, since the editor asks in all of the Markdown.
 import { type CompletionItem, CompletionItemKind, InsertTextFormat, type Position } from 'vscode-languageserver';
-import { STATEMENTS } from '../language/statements/index.ts';
-import type { StatementKind } from '../language/syntax.ts';
+import { isStatementKind, STATEMENTS } from '../language/statements/table.ts';
 import { MEASURES } from '../language/words.ts';
 import type { NameEntry, Namespace } from '../note/result.ts';
 import { type Offer, offersAt } from './completion-offers.ts';
@@ -11,13 +10,14 @@ import { holds, type OpenNote, structureAt } from './open-note.ts';
 /** Rare in prose, and each a place where the language has something to offer. */
 export const TRIGGER_CHARACTERS = [':', '=', '('] as const;
 
-export function completions(note: OpenNote, position: Position): CompletionItem[] {
+/** `snippets`: whether the editor can take a statement's form with places to fill in. */
+export function completions(note: OpenNote, position: Position, snippets: boolean): CompletionItem[] {
   const typed = statementAt(note, position);
   if (typed === undefined) return [];
   const word = /[\p{L}\p{M}\p{N}_-]*$/u.exec(typed)?.[0] ?? '';
   const before = typed.slice(0, typed.length - word.length);
   const start = { line: position.line, character: position.character - word.length };
-  const items = before.trim() === '' ? statementItems() : itemsFor(note, position, before);
+  const items = before.trim() === '' ? statementItems(snippets) : itemsFor(note, position, before);
   // Right behind a mark the word needs a blank before it; a parenthesis needs none.
   const blank = /[:=]$/.test(before) ? ' ' : '';
   return items.map(({ insertText, ...item }) => ({
@@ -45,7 +45,11 @@ function statementAt(note: OpenNote, position: Position): string | undefined {
 }
 
 function beginsStatement(text: string): boolean {
-  return Object.hasOwn(STATEMENTS, /^[a-z]*/.exec(text)?.[0] ?? '');
+  return isStatementKind(firstWord(text));
+}
+
+function firstWord(text: string): string {
+  return /^[a-z]*/.exec(text)?.[0] ?? '';
 }
 
 function lineText(note: OpenNote, line: number): string {
@@ -60,23 +64,21 @@ function withoutPrefix(text: string): string {
 
 type Draft = Pick<CompletionItem, 'label' | 'kind' | 'detail' | 'insertText' | 'insertTextFormat' | 'documentation'>;
 
-function statementItems(): Draft[] {
+function statementItems(snippets: boolean): Draft[] {
   return Object.values(STATEMENTS).map(({ keyword, help, grammar, skeleton }) => ({
     label: keyword,
     kind: CompletionItemKind.Keyword,
     detail: help,
     documentation: grammar,
-    insertText: skeleton,
-    insertTextFormat: InsertTextFormat.Snippet,
+    ...(snippets && { insertText: skeleton, insertTextFormat: InsertTextFormat.Snippet }),
   }));
 }
 
 function itemsFor(note: OpenNote, position: Position, before: string): Draft[] {
   // A word that begins no statement is the parser's business.
-  const keyword = /^[a-z]*/.exec(before)?.[0] ?? '';
-  if (!Object.hasOwn(STATEMENTS, keyword)) return [];
-  const offers = offersAt(keyword as StatementKind, before);
-  return offers.flatMap(offer => itemsOf(note, position, offer));
+  const keyword = firstWord(before);
+  if (!isStatementKind(keyword)) return [];
+  return offersAt(keyword, before).flatMap(offer => itemsOf(note, position, offer));
 }
 
 function itemsOf(note: OpenNote, position: Position, offer: Offer): Draft[] {

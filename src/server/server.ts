@@ -26,10 +26,12 @@ export function serve(connection: Connection): void {
   let theme: Theme = 'light';
   let hoverFormat: 'markdown' | 'plaintext' = 'plaintext';
   let refreshesHints = false;
+  let snippets = false;
 
   connection.onInitialize((params): InitializeResult => {
     const { textDocument, workspace } = params.capabilities;
     hoverFormat = textDocument?.hover?.contentFormat?.includes('markdown') ? 'markdown' : 'plaintext';
+    snippets = textDocument?.completion?.completionItem?.snippetSupport === true;
     refreshesHints = workspace?.inlayHint?.refreshSupport === true;
     theme = readTheme(params.initializationOptions);
     return { capabilities: CAPABILITIES, serverInfo: { name: 'tautline' } };
@@ -57,7 +59,7 @@ export function serve(connection: Connection): void {
   });
   connection.onCompletion(({ textDocument, position }) => {
     const note = noteAt(textDocument.uri);
-    return note && completions(note, position);
+    return note && completions(note, position, snippets);
   });
   connection.onCodeAction(({ textDocument, range }) => {
     const note = noteAt(textDocument.uri);

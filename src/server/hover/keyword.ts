@@ -1,5 +1,5 @@
 // Hover on a statement's keyword: the line of help and the examples that its own file in the language gives.
-import { STATEMENTS } from '../../language/statements/index.ts';
+import { STATEMENTS } from '../../language/statements/table.ts';
 import type { StatementKind } from '../../language/syntax.ts';
 import type { Card } from './card.ts';
 
