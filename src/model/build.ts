@@ -20,6 +20,8 @@ export interface Building {
   readonly report: Report;
   /** Titles of cases, from `case` lines of the structure and of the head. */
   readonly titles: ReadonlyMap<string, string>;
+  /** `assume: axially stiff`: members, not bars, keep their length whatever their section. */
+  readonly axiallyStiff: boolean;
 }
 
 /** What could be built. `report.flawed` says whether anything is missing from it, `report.flawedCases` of which cases. */
@@ -69,21 +71,29 @@ class Sections {
     return { name: member.name, kind: member.kind, legs, length: member.length, range: member.range };
   }
 
-  /** Index of the leg's section; −1, and the structure flawed, where there is none. */
+  /** Index of the leg's section; that of an empty one, and the structure flawed, where there is none. */
   #sectionOf(leg: LaidLeg, member: LaidMember): number {
     const definition = leg.section === undefined ? this.#onlySection(member) : this.#find(leg.section);
     const found = definition === undefined ? undefined : this.#building.library.section(definition);
     if (definition === undefined || found === undefined) {
       this.#building.report.flawed = true;
-      return -1;
+      return this.#index('', () => UNKNOWN_SECTION);
     }
     const key = `${definition.structure ?? ''} ${definition.name}`;
+    const stiff = this.#building.axiallyStiff && member.kind === 'member';
+    if (member.kind === 'member') this.#needBending(definition, found, member);
+    return this.#index(stiff ? `${key} stiff` : key, () => {
+      const section = toSection(definition, found);
+      return stiff ? { ...section, axialStiffness: undefined } : section;
+    });
+  }
+
+  #index(key: string, make: () => Section): number {
     let index = this.#indices.get(key);
     if (index === undefined) {
-      index = this.list.push(toSection(definition, found)) - 1;
+      index = this.list.push(make()) - 1;
       this.#indices.set(key, index);
     }
-    if (member.kind === 'member') this.#needBending(definition, found, member);
     return index;
   }
 
@@ -117,6 +127,21 @@ class Sections {
     });
   }
 }
+
+/** Stands for a section that could not be read, so that a drawing can still be made. */
+const UNKNOWN_SECTION: Section = {
+  name: '',
+  description: '',
+  bendingStiffness: undefined,
+  axialStiffness: undefined,
+  massPerLength: undefined,
+  sectionModulus: undefined,
+  area: undefined,
+  secondMomentOfArea: undefined,
+  youngsModulus: undefined,
+  depth: undefined,
+  range: { start: 0, end: 0 },
+};
 
 function toSection(definition: Definition, { properties, material, description }: SectionFigures): Section {
   const value = (key: string): number | undefined => properties.get(key)?.value;

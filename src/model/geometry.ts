@@ -3,7 +3,7 @@
 // and a leg without length are told at their words.
 import type { Chain, ChainLeg, Name, PlaceOnMember, Statement, StatementOf } from '../language/syntax.ts';
 import { ANGLE, LENGTH } from '../quantity/dimension.ts';
-import { significant } from '../quantity/display.ts';
+import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
 import type { Due, Figures } from './figures.ts';
 import type { Report } from './report.ts';

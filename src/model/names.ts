@@ -31,6 +31,8 @@ export interface Names {
   readonly diagnostics: readonly Diagnostic[];
   /** What a use in a scope means: looked for there, then in the head. */
   readonly find: (scope: Scope, sought: readonly Namespace[], name: string) => Definition | undefined;
+  /** Resolves uses outside statements, in a value in prose; what is unknown is returned. */
+  readonly useInProse: (scope: Scope, uses: readonly NameUse[]) => Diagnostic[];
 }
 
 export function resolveNames(scopes: Scopes): Names {
@@ -46,11 +48,16 @@ export function resolveNames(scopes: Scopes): Names {
     entries: names.entries,
     diagnostics: names.diagnostics,
     find: (scope, sought, name) => names.find(scope, sought, name),
+    useInProse: (scope, uses) => {
+      const known = names.diagnostics.length;
+      for (const use of uses) names.use(scope, use);
+      return names.diagnostics.splice(known);
+    },
   };
 }
 
 /** What a word may mean, by what is sought. */
-export const SOUGHT = {
+const SOUGHT = {
   point: ['point'],
   member: ['member'],
   section: ['section'],
@@ -62,13 +69,6 @@ export const SOUGHT = {
   owner: ['section', 'material', 'structure'],
 } as const satisfies Record<Sought, readonly Namespace[]>;
 
-/** Marks a use in a text that is no statement: a value in prose. */
-export function useInProse(names: Names, scope: Scope, uses: readonly NameUse[]): void {
-  for (const use of uses) {
-    const found = names.find(scope, SOUGHT[use.sought], use.name.text);
-    found?.uses.push(use.name.range);
-  }
-}
 
 class NameTable {
   readonly entries: Definition[] = [];

@@ -7,6 +7,8 @@ export interface BrokenStatement {
   readonly keyword: string;
   /** The word behind the keyword, where there is one. */
   readonly name: string | undefined;
+  /** Where it stands in the note. */
+  readonly start: number;
 }
 
 export interface Scope {

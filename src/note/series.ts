@@ -10,6 +10,7 @@ import { dimensionOf, resolveMeasure } from '../model/questions.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { magnitudeFor, withoutNoise } from './magnitudes.ts';
+import type { Taken } from './second-road.ts';
 import type { Solved } from './solved.ts';
 import type { StructureState } from './structure-state.ts';
 
@@ -25,8 +26,8 @@ export interface Series {
   /** Where the question is one measure alone. */
   readonly measure: ResolvedMeasure | undefined;
   readonly measured: readonly Measured[];
-  /** Every measure that took part, for the second road. */
-  readonly taken: readonly ResolvedMeasure[];
+  /** Every measure behind the governing value, those of earlier results included: what the checks are made on. */
+  readonly taken: readonly Taken[];
   /** Whether anything was measured under a combination, so that there is something to say behind `under`. */
   readonly solved: Solved | undefined;
 }
@@ -55,22 +56,23 @@ class SeriesReader {
 
   read(): Series | undefined {
     const { state } = this.#inputs;
-    const { what, under } = this.#question;
+    const { what } = this.#question;
     const measures: Measure[] = [];
     const results: { readonly definition: Definition; readonly range: Range }[] = [];
     this.#collect(what, measures, results);
     const earlier = results.map(({ definition, range }) => this.#inputs.seriesOf(definition, range));
     if (earlier.some(series => series === undefined)) return undefined;
-    const own = measures.length > 0 || under !== undefined ? this.#alternatives() : [];
+    // Without a measure of its own there is nothing that `under` could go for.
+    if (measures.length === 0) return this.#ofResults(earlier as Series[], results);
+    const own = this.#alternatives();
     if (own === undefined) return undefined;
-    if (measures.length === 0) return this.#ofResults(own, earlier as Series[], results);
     const resolved = this.#resolve(measures);
     const solved = state.solved(() => this.#circle());
     if (resolved === undefined || solved === undefined || state.report.flawed) return undefined;
     if (own.some(({ cases }) => cases.some(name => state.report.flawedCases.has(name)))) return undefined;
     const running = this.#running(own, earlier as Series[], results);
     if (running === undefined) return undefined;
-    return this.#work(running, own, resolved, solved);
+    return this.#work(running, own, resolved, solved, (earlier as Series[]).flatMap(series => series.taken));
   }
 
   /** The alternatives that `under` asks for; an empty list is never returned. */
@@ -129,11 +131,10 @@ class SeriesReader {
   }
 
   #ofResults(
-    own: readonly AlternativeModel[],
     earlier: readonly Series[],
     results: readonly { readonly definition: Definition; readonly range: Range }[],
   ): Series | undefined {
-    const running = this.#running(own, earlier, results);
+    const running = this.#running([], earlier, results);
     if (running === undefined) return undefined;
     const count = Math.max(1, running.length);
     const values: Quantity[] = [];
@@ -159,35 +160,42 @@ class SeriesReader {
     own: readonly AlternativeModel[],
     resolved: ReadonlyMap<Measure, ResolvedMeasure>,
     solved: Solved,
+    before: readonly Taken[],
   ): Series | undefined {
     const { what } = this.#question;
     const alone = what.kind === 'operand' && what.operand.kind === 'measure' ? resolved.get(what.operand.measure) : undefined;
     const values: Quantity[] = [];
     const measured: Measured[] = [];
+    const taken: Taken[][] = [];
     for (const [i, alternative] of running.entries()) {
-      const acting = own.length > 1 ? alternative : own[0]!;
-      const value = this.#evaluate(i, measure => {
-        const found = this.#take(measure, resolved.get(measure)!, acting, solved, alone === undefined ? 'size' : this.#seek());
+      const { factors } = own.length > 1 ? alternative : own[0]!;
+      const here: Taken[] = [];
+      taken.push(here);
+      const value = this.#evaluate(i, asked => {
+        const measure = resolved.get(asked)!;
+        const found = this.#take(asked, measure, factors, solved, alone === undefined ? 'size' : this.#seek());
         measured.push(found);
-        return { value: found.value, dimension: dimensionOf(measure) };
+        here.push({ measure, place: found.place, value: found.value, factors, solved });
+        return { value: found.value, dimension: dimensionOf(asked) };
       });
       if (value === undefined) return undefined;
       values.push(value);
     }
+    const governing = this.#governing(values);
     return {
       alternatives: running,
       values,
-      governing: this.#governing(values),
+      governing,
       set: setOf(running),
       measure: alone,
       measured: alone === undefined ? [] : measured,
-      taken: [...resolved.values()],
+      taken: [...before, ...taken[governing]!],
       solved,
     };
   }
 
-  #take(asked: Measure, resolved: ResolvedMeasure, alternative: AlternativeModel, solved: Solved, seek: Seek): Measured {
-    const solution = solved.solution(alternative.factors);
+  #take(asked: Measure, resolved: ResolvedMeasure, factors: readonly number[], solved: Solved, seek: Seek): Measured {
+    const solution = solved.solution(factors);
     const found = takeMeasure(solved.analysis.structure, solution, resolved, seek);
     const isMoment = asked.kind === 'reaction' && asked.component === 'moment';
     return { ...found, value: withoutNoise(found.value, magnitudeFor(asked.kind, isMoment, solved.magnitudes(solution))) };

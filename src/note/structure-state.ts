@@ -8,7 +8,10 @@ import type { Names } from '../model/names.ts';
 import { Report } from '../model/report.ts';
 import type { BrokenStatement, Scope } from '../model/scope.ts';
 import type { Structure } from '../model/structure.ts';
+import { MAX_FREEDOMS } from '../mechanics/index.ts';
+import type { Analysis, Conflict } from '../mechanics/solution.ts';
 import { nearest } from '../quantity/nearest.ts';
+import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
 import { describeInstability } from './instability.ts';
 import { Once } from './once.ts';
@@ -29,12 +32,13 @@ export class StructureState {
   readonly scope: Scope;
   readonly report = new Report();
   readonly #inputs: StateInputs;
+  #excuse: string | undefined;
   readonly #geometry: Once<Geometry>;
   readonly #structure: Once<Structure>;
   readonly #solved: Once<Solved>;
   readonly #combinations: Once<readonly CombinationModel[]>;
-  /** Identifies all that the solution depends on; set once the structure is built. */
-  key = '';
+  /** The analysis of a structure that can move freely, for a drawing of how; undefined for any other. */
+  unstable: Analysis | undefined;
 
   constructor(inputs: StateInputs) {
     this.scope = inputs.scope;
@@ -65,9 +69,8 @@ export class StructureState {
 
   /** Why nothing of this structure can be told, in one line. */
   get withheld(): string | undefined {
-    if (this.report.flawed) return 'something of this structure cannot be read or is not evaluated';
-    const solved = this.solved(() => undefined);
-    return solved === undefined ? 'the structure can move freely' : undefined;
+    if (this.solved(() => undefined) !== undefined && !this.report.flawed) return undefined;
+    return this.#excuse ?? 'something of it cannot be read or is not evaluated';
   }
 
   #build(): Structure | undefined {
@@ -123,10 +126,31 @@ export class StructureState {
   #solve(): Solved | undefined {
     const structure = this.structure(() => undefined);
     if (structure === undefined || this.report.flawed) return undefined;
-    this.key = solutionKey(structure);
-    const solved = this.#inputs.memory.solve(structure, this.key);
-    if (solved.analysis.stability.stable) return solved;
+    const solved = this.#inputs.memory.solve(structure, solutionKey(structure));
+    const { stability, tooLarge, conflict } = solved.analysis;
+    if (tooLarge !== undefined) {
+      this.#excuse = 'the structure is too large';
+      this.report.error('too-large', structure.range, `${structure.name} has more joints than are solved: about ${MAX_FREEDOMS} freedoms are taken, three a joint.`, {
+        hint: 'divide it into structures that hand reactions on',
+      });
+      return undefined;
+    }
+    if (conflict !== undefined) return this.#conflict(structure, conflict);
+    if (stability.stable) return solved;
+    this.unstable = solved.analysis;
+    this.#excuse = 'it can move freely';
     this.report.diagnostics.push(...describeInstability(structure, solved.analysis));
+    return undefined;
+  }
+
+  /** A support is moved along members that keep their length. */
+  #conflict(structure: Structure, { case: index, member, amount }: Conflict): undefined {
+    this.#excuse = 'an imposed movement contradicts members that keep their length';
+    const { name } = structure.cases[index]!;
+    const load = structure.loads.find(({ kind, case: of }) => kind === 'movement' && of === index);
+    this.report.error('bad-load', load?.range ?? structure.range, `In ${name} a support moves so that ${structure.members[member]!.name} would change its length by ${significant(Math.abs(amount) * 1000)} mm, and it is axially stiff: the force would be without bound.`, {
+      hint: 'give its section an area, or move the support across it',
+    });
     return undefined;
   }
 

@@ -1,0 +1,163 @@
+// From a note's text to all that it says: the one function that server, page and command line are faces of. Pure: the same
+// text gives the same result, and no text makes it fail.
+import { parseProse, parseStatements, wordsOf } from '../language/index.ts';
+import type { Diagnostic } from '../language/diagnostic.ts';
+import type { Statement } from '../language/syntax.ts';
+import { resolveNames } from '../model/names.ts';
+import { divide, type Part } from '../model/scope.ts';
+import { NoteEvaluation } from './evaluation.ts';
+import { readSource, type Source, type SourceFence } from './fences.ts';
+import { fingerprintOf } from './fingerprint.ts';
+import { type FrontMatterBlock, readFrontMatter } from './front-matter.ts';
+import type { Fence, NoteResult } from './result.ts';
+import { Memory } from './solved.ts';
+
+export interface EvaluateOptions {
+  /** Names the note in messages, and its structure where it never says `structure`. Forward slashes. */
+  readonly path: string;
+  /** What earlier evaluations solved; without it everything is worked out afresh. */
+  readonly memory?: Memory;
+}
+
+/** A note larger than this is refused: 1 MB of text. */
+const MOST_TEXT = 1_000_000;
+/** A fence larger than this is refused: 64 kB of text. */
+const MOST_FENCE = 65_536;
+
+export function createMemory(): Memory {
+  return new Memory();
+}
+
+export function evaluateNote(text: string, options: EvaluateOptions): NoteResult {
+  if (text.length > MOST_TEXT) return tooLarge(text, options);
+  const front = readFrontMatter(text);
+  const source = readSource(text, front.length);
+  if (source.fences.length === 0) return nothing(text, options, front);
+  const read = source.fences.map(fence => readFence(fence, text));
+  const scopes = divide(
+    read.flatMap(({ parts }) => parts),
+    fileName(options.path),
+  );
+  const names = resolveNames(scopes);
+  const evaluation = new NoteEvaluation({
+    text,
+    scopes,
+    names,
+    memory: options.memory ?? createMemory(),
+    wordsOf: range => wordsOf(text, range),
+  });
+  const { structures, answers, values } = evaluation.run();
+  const prose = source.spans.map(span => {
+    const { value, diagnostics } = parseProse(span.text, span.start);
+    return evaluation.prose(span, value, diagnostics);
+  });
+  const diagnostics = [...read.flatMap(fence => fence.diagnostics), ...names.diagnostics, ...evaluation.diagnostics()];
+  return {
+    path: options.path,
+    text,
+    frontMatter: front.values,
+    fences: fencesOf(source, read, evaluation),
+    structures,
+    answers,
+    values,
+    prose,
+    names: names.entries,
+    diagnostics: inOrder(diagnostics),
+    fingerprint: fingerprintOf(structures, answers, values),
+  };
+}
+
+interface FenceRead {
+  readonly statements: readonly Statement[];
+  readonly parts: readonly Part[];
+  readonly diagnostics: readonly Diagnostic[];
+}
+
+function readFence(fence: SourceFence, text: string): FenceRead {
+  if (fence.kind !== 'calculation') {
+    const what = fence.kind === 'record' ? 'A record' : 'A signature';
+    return { statements: [], parts: [], diagnostics: [error('not-evaluated-yet', firstLine(fence, text), `${what} is read but not evaluated by this version: what it says is neither written nor checked.`)] };
+  }
+  const size = fence.range.end - fence.range.start;
+  if (size > MOST_FENCE) {
+    const message = `This fence holds ${size} characters; at most ${MOST_FENCE} are read.`;
+    // What it would have defined is unknown, and so is all that may depend on it.
+    const broken: Part = { kind: 'broken', broken: { keyword: '', name: undefined, start: fence.range.start } };
+    return { statements: [], parts: [broken], diagnostics: [error('too-large', firstLine(fence, text), message)] };
+  }
+  const { statements, broken, diagnostics } = parseStatements(fence.lines);
+  const parts: Part[] = statements.map(statement => ({ kind: 'statement', statement }));
+  for (const { range, names } of broken) {
+    const keyword = /^\S*/.exec(text.slice(range.start, range.end))![0];
+    parts.push({ kind: 'broken', broken: { keyword, name: names[0]?.text, start: range.start } });
+  }
+  for (const { code, range } of diagnostics) {
+    if (code === 'stray-continuation') parts.push({ kind: 'broken', broken: { keyword: '', name: undefined, start: range.start } });
+  }
+  parts.sort((a, b) => startOf(a) - startOf(b));
+  return { statements, parts, diagnostics };
+}
+
+function startOf(part: Part): number {
+  return part.kind === 'statement' ? part.statement.range.start : part.broken.start;
+}
+
+function firstLine(fence: SourceFence, text: string): { readonly start: number; readonly end: number } {
+  const { start } = fence.range;
+  const ending = text.slice(start, fence.range.end).search(/[\r\n]/);
+  return { start, end: ending < 0 ? fence.range.end : start + ending };
+}
+
+function fencesOf(source: Source, read: readonly FenceRead[], evaluation: NoteEvaluation): Fence[] {
+  return source.fences.map(({ kind, range, firstLine, lastLine }, i) => ({
+    kind,
+    range,
+    firstLine,
+    lastLine,
+    statements: read[i]!.statements,
+    structures: evaluation.structuresIn(read[i]!.statements),
+  }));
+}
+
+/** By place, each once: an expression that is worked for several alternatives tells its mistake for each. */
+function inOrder(diagnostics: readonly Diagnostic[]): Diagnostic[] {
+  const seen = new Set<string>();
+  const unique = diagnostics.filter(({ code, range, message }) => {
+    const key = `${range.start} ${range.end} ${code} ${message}`;
+    if (seen.has(key)) return false;
+    seen.add(key);
+    return true;
+  });
+  return unique.sort((a, b) => a.range.start - b.range.start || a.range.end - b.range.end);
+}
+
+function error(code: Diagnostic['code'], range: Diagnostic['range'], message: string): Diagnostic {
+  return { code, severity: 'error', range, message };
+}
+
+function fileName(path: string): string {
+  const name = path.slice(path.lastIndexOf('/') + 1);
+  return name.replace(/\.[^.]+$/, '') || name;
+}
+
+function nothing(text: string, { path }: EvaluateOptions, front: FrontMatterBlock): NoteResult {
+  return {
+    path,
+    text,
+    frontMatter: front.values,
+    fences: [],
+    structures: [],
+    answers: [],
+    values: [],
+    prose: [],
+    names: [],
+    diagnostics: [],
+    fingerprint: '',
+  };
+}
+
+function tooLarge(text: string, options: EvaluateOptions): NoteResult {
+  const message = `This note holds ${text.length} characters; at most ${MOST_TEXT} are read.`;
+  const diagnostics = [error('too-large', { start: 0, end: Math.min(1, text.length) }, message)];
+  return { ...nothing(text, options, { values: {}, length: 0 }), diagnostics };
+}

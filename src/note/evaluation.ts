@@ -1,0 +1,338 @@
+// One evaluation of a note: its values, structures and questions, each worked out when it is first asked for, then told in
+// the order of the text.
+import type { Diagnostic } from '../language/diagnostic.ts';
+import type { Item, Operand, Statement, StatementOf, Value } from '../language/syntax.ts';
+import { Library } from '../model/library.ts';
+import type { Definition, Names } from '../model/names.ts';
+import { usesInValue } from '../model/name-uses.ts';
+import { Report } from '../model/report.ts';
+import { belongsToStructure, type Scope, type Scopes } from '../model/scope.ts';
+import { siUnit } from '../quantity/dimension-names.ts';
+import { type DisplayUnits, METRIC, readDisplay } from '../quantity/display.ts';
+import { LENGTH } from '../quantity/dimension.ts';
+import type { Quantity } from '../quantity/quantity.ts';
+import type { Range } from '../quantity/range.ts';
+import { answerTo, spanOf } from './answers.ts';
+import type { SourceSpan } from './fences.ts';
+import { Once } from './once.ts';
+import { show } from './phrases.ts';
+import type { Answer, Combination, NamedValue, ProseValue, StructureResult } from './result.ts';
+import { type Question, type Series, seriesOf } from './series.ts';
+import type { Memory } from './solved.ts';
+import { StructureState } from './structure-state.ts';
+import { Values } from './values.ts';
+import { remarksOn } from './remarks.ts';
+
+export interface EvaluationInputs {
+  readonly text: string;
+  readonly scopes: Scopes;
+  readonly names: Names;
+  readonly memory: Memory;
+  readonly wordsOf: (range: Range) => string;
+}
+
+export class NoteEvaluation {
+  readonly #inputs: EvaluationInputs;
+  /** What is wrong outside structures: values, materials, sections, prose. */
+  readonly #report = new Report();
+  readonly #values: Values;
+  readonly #library: Library;
+  readonly #states: readonly StructureState[];
+  readonly #display = new Map<Scope, DisplayUnits>();
+  readonly #series = new Map<Definition, Once<Series>>();
+  readonly #answers = new Map<Definition, Answer>();
+
+  constructor(inputs: EvaluationInputs) {
+    this.#inputs = inputs;
+    const { names, scopes } = inputs;
+    this.#values = new Values(names, this.#report, {
+      geometry: (scope, range) => this.#geometry(scope, range),
+      supported: scope => scope.statements.flatMap(statement => (statement.kind === 'support' ? [statement.point.text] : [])),
+      result: (definition, range) => this.#result(definition, range),
+      span: (definition, range) => this.#spanOfResult(definition, range),
+    });
+    this.#library = new Library(
+      names,
+      definition => this.#values.figures(definition.scope, this.#report),
+      (item: Item) => inputs.wordsOf(item.range),
+      this.#report,
+    );
+    this.#values.library = this.#library;
+    this.#readDisplay();
+    this.#states = scopes.structures.map(
+      scope =>
+        new StructureState({
+          scope,
+          head: scopes.head,
+          names,
+          values: this.#values,
+          library: this.#library,
+          memory: inputs.memory,
+          wordsOf: inputs.wordsOf,
+        }),
+    );
+  }
+
+  run(): { readonly structures: StructureResult[]; readonly answers: Answer[]; readonly values: NamedValue[] } {
+    const { names } = this.#inputs;
+    const answers: Answer[] = [];
+    const values: NamedValue[] = [];
+    // Told in the order of the text; worked out in the order of what depends on what.
+    for (const definition of inTextOrder(names.entries)) {
+      if (definition.namespace === 'value') values.push(this.#namedValue(definition));
+      if (definition.namespace === 'result') {
+        const answer = this.#answer(definition);
+        if (answer !== undefined) answers.push(answer);
+      }
+      if (definition.namespace === 'section') this.#library.section(definition);
+      if (definition.namespace === 'material') this.#library.material(definition);
+    }
+    const structures = this.#states.map((state, index) => this.#structureResult(state, index, answers));
+    this.#reportHead();
+    for (const state of this.#states) remarksOn(state, this.#inputs.scopes.head, answers, this.#states.indexOf(state));
+    return { structures, answers, values };
+  }
+
+  /** A value in prose, as the structure last spoken of above it sees names. */
+  prose(span: SourceSpan, value: Value | undefined, diagnostics: readonly Diagnostic[]): ProseValue {
+    this.#report.diagnostics.push(...diagnostics);
+    const common = { line: span.line + 1, text: this.#inputs.wordsOf({ start: span.start, end: span.start + span.text.length }), range: span.range };
+    const scope = this.#scopeAbove(span.range.start);
+    if (value === undefined) return { ...common, quantity: undefined, unit: '', display: '' };
+    this.#useNames(scope, value);
+    const quantity = this.#values.figures(scope, this.#report).quantity(value);
+    if (quantity === undefined) return { ...common, quantity, unit: '', display: '' };
+    const answer = this.#answerNamed(scope, value);
+    const display = answer?.quantity === undefined ? show(quantity, this.#unitsOf(scope)) : answer.display;
+    return { ...common, quantity, unit: siUnit(quantity.dimension), display };
+  }
+
+  diagnostics(): Diagnostic[] {
+    return [...this.#report.diagnostics, ...this.#states.flatMap(state => state.report.diagnostics)];
+  }
+
+  /** Indices of the structures that statements are of. */
+  structuresIn(statements: readonly Statement[]): number[] {
+    const wanted = new Set(statements);
+    return this.#states.flatMap((state, index) => (state.scope.statements.some(statement => wanted.has(statement)) ? [index] : []));
+  }
+
+  // Structures
+
+  #stateOf(scope: Scope): StructureState | undefined {
+    return this.#states.find(state => state.scope === scope);
+  }
+
+  #geometry(scope: Scope, range: Range) {
+    const state = this.#stateOf(scope);
+    if (state === undefined) {
+      this.#report.error('bad-value', range, 'A length between points is that of a structure; this stands before the first.', {
+        hint: 'move the value behind the structure line',
+      });
+      return undefined;
+    }
+    return state.geometry(() => {
+      this.#report.error('circular-value', range, 'This length depends on the chain that it stands in.');
+    });
+  }
+
+  #structureResult(state: StructureState, index: number, answers: readonly Answer[]): StructureResult {
+    const { scope } = state;
+    const { head } = this.#inputs.scopes;
+    const structure = state.structure(() => undefined);
+    const solved = state.solved(() => undefined);
+    const sentences = [...head.statements, ...scope.statements].flatMap(assumptionOf);
+    const title = scope.structure?.title?.text;
+    const combinations: Combination[] = state
+      .combinations(() => undefined)
+      .map(({ name, kind, alternatives }) => ({
+        name,
+        kind,
+        alternatives: alternatives.map(({ label, text, factors }) => ({ label, text, factors, solution: () => this.#solution(state, factors) })),
+      }));
+    return {
+      structure,
+      name: scope.name ?? '',
+      ...(title === undefined ? {} : { title }),
+      range: structure?.range ?? scope.structure?.name.range ?? scope.statements[0]?.range ?? { start: 0, end: 0 },
+      analysis: solved?.analysis ?? state.unstable,
+      combinations: solved === undefined ? [] : combinations,
+      answers: answers.flatMap((answer, i) => (answer.structure === index ? [i] : [])),
+      assumptions: sentences,
+      display: this.#unitsOf(scope),
+      shows: scope.statements.filter((statement): statement is StatementOf<'show'> => statement.kind === 'show'),
+      withheld: state.withheld,
+    };
+  }
+
+  #solution(state: StructureState, factors: readonly number[]) {
+    const solved = state.solved(() => undefined);
+    if (solved === undefined) throw new Error('a combination of a structure without a solution was asked for its solution');
+    return solved.solution(factors);
+  }
+
+  // Questions
+
+  #seriesOf(definition: Definition, range: Range): Series | undefined {
+    let once = this.#series.get(definition);
+    if (once === undefined) {
+      once = new Once(() => this.#workSeries(definition));
+      this.#series.set(definition, once);
+    }
+    return once.get(() => this.#circle(definition, range));
+  }
+
+  #workSeries(definition: Definition): Series | undefined {
+    const { statement, scope } = definition;
+    const state = this.#stateOf(scope);
+    if (state === undefined || !isQuestion(statement)) return undefined;
+    return seriesOf(statement, {
+      state,
+      seriesOf: (earlier, range) => this.#seriesOf(earlier, range),
+      figures: frame => this.#values.figures(scope, state.report, frame),
+      plain: this.#values.figures(scope, state.report),
+      resultNamed: operand => this.#resultNamed(scope, operand),
+    });
+  }
+
+  /** The result that an operand names: of this structure, or of another. */
+  #resultNamed(scope: Scope, operand: Operand): Definition | undefined {
+    const { names } = this.#inputs;
+    if (operand.kind === 'name') {
+      const found = names.find(scope, ['value', 'result'], operand.name.text);
+      return found?.namespace === 'result' ? found : undefined;
+    }
+    if (operand.kind !== 'property') return undefined;
+    const owner = names.find(scope, ['section', 'material', 'structure'], operand.of.text);
+    if (owner?.namespace !== 'structure') return undefined;
+    return names.entries.find(entry => entry.namespace === 'result' && entry.name === operand.property.text && entry.scope.structure === owner.statement);
+  }
+
+  #result(definition: Definition, range: Range): { readonly quantity: Quantity; readonly chosen: boolean } | undefined {
+    const series = this.#seriesOf(definition, range);
+    if (series === undefined || this.#answer(definition)?.quantity === undefined) return undefined;
+    return { quantity: series.values[series.governing]!, chosen: series.values.length > 1 };
+  }
+
+  #spanOfResult(definition: Definition, range: Range): Quantity | undefined {
+    const series = this.#seriesOf(definition, range);
+    const state = this.#stateOf(definition.scope);
+    if (series === undefined || state === undefined) return undefined;
+    const span = spanOf(series, state.structure(() => undefined), range, state.report);
+    return span === undefined ? undefined : { value: span.length, dimension: LENGTH };
+  }
+
+  #answer(definition: Definition): Answer | undefined {
+    const known = this.#answers.get(definition);
+    const { statement, scope } = definition;
+    const state = this.#stateOf(scope);
+    if (known !== undefined || state === undefined || !isQuestion(statement)) return known;
+    const answer = answerTo({
+      question: statement,
+      structureIndex: this.#states.indexOf(state),
+      state,
+      series: this.#seriesOf(definition, statement.name.range),
+      units: this.#unitsOf(scope),
+      wordsOf: this.#inputs.wordsOf,
+      limitOf: (limit, span) => this.#values.figures(scope, state.report, { span }).quantity(limit),
+      report: state.report,
+    });
+    this.#answers.set(definition, answer);
+    return answer;
+  }
+
+  #answerNamed(scope: Scope, value: Value): Answer | undefined {
+    const definition = value.kind === 'operand' ? this.#resultNamed(scope, value.operand) : undefined;
+    return definition === undefined ? undefined : this.#answer(definition);
+  }
+
+  #circle(definition: Definition, range: Range): void {
+    this.#report.error('circular-value', range, `${definition.name} depends on itself.`, {
+      related: [{ range: definition.definition, message: `${definition.name} is asked for here.` }],
+    });
+  }
+
+  // Values
+
+  #namedValue(definition: Definition): NamedValue {
+    const quantity = this.#values.named(definition, definition.definition);
+    const { structure, statement, name, scope } = definition;
+    // Without a `structure` line the values are the whole note's.
+    const owner = scope.structure === undefined ? undefined : structure;
+    return {
+      name: owner === undefined ? name : `${owner}.${name}`,
+      quantity,
+      unit: quantity === undefined ? '' : siUnit(quantity.dimension),
+      display: quantity === undefined ? '' : show(quantity, this.#unitsOf(scope)),
+      range: statement.range,
+      nameRange: definition.definition,
+    };
+  }
+
+  #unitsOf(scope: Scope): DisplayUnits {
+    return this.#display.get(scope) ?? this.#display.get(this.#inputs.scopes.head) ?? METRIC;
+  }
+
+  #readDisplay(): void {
+    const { head, structures } = this.#inputs.scopes;
+    for (const scope of [head, ...structures]) {
+      let units = this.#unitsOf(scope);
+      for (const statement of scope.statements) {
+        if (statement.kind !== 'display') continue;
+        const read = readDisplay(statement.setting, units);
+        units = read.units;
+        for (const { code, range, message, hint } of read.problems) this.#report.error(code, range, message, hint === undefined ? {} : { hint });
+      }
+      this.#display.set(scope, units);
+    }
+  }
+
+  // Prose
+
+  #scopeAbove(offset: number): Scope {
+    const { head, structures } = this.#inputs.scopes;
+    const above = structures.filter(scope => (scope.statements[0]?.range.start ?? 0) < offset);
+    return above.at(-1) ?? structures[0] ?? head;
+  }
+
+  #useNames(scope: Scope, value: Value): void {
+    this.#report.diagnostics.push(...this.#inputs.names.useInProse(scope, usesInValue(value)));
+  }
+
+  /** Statements of a structure in the head of a note with structures, and what the head holds that is not evaluated. */
+  #reportHead(): void {
+    for (const statement of this.#inputs.scopes.head.statements) {
+      if (belongsToStructure(statement)) {
+        this.#report.error('bad-statement', statement.keyword, `This ${statement.kind} belongs to a structure, and none has begun.`, {
+          hint: 'move it behind a structure line',
+        });
+      }
+      if (statement.kind === 'use') {
+        this.#report.error('not-evaluated-yet', statement.range, 'Another note or table is read but not evaluated by this version: answers that may depend on it are withheld.');
+      }
+      if (statement.kind === 'assume' && statement.assumption.kind === 'shear deformation') {
+        this.#report.error('not-evaluated-yet', statement.range, 'Shear deformation is read but not evaluated by this version: answers of every structure are withheld.');
+      }
+    }
+  }
+}
+
+function isQuestion(statement: Statement): statement is Question {
+  return statement.kind === 'find' || statement.kind === 'require';
+}
+
+function assumptionOf(statement: Statement): string[] {
+  if (statement.kind !== 'assume') return [];
+  switch (statement.assumption.kind) {
+    case 'sentence':
+      return [statement.assumption.text.text];
+    case 'axially stiff':
+      return ['Members keep their length: axial deformation is not counted.'];
+    case 'shear deformation':
+      return [];
+  }
+}
+
+function inTextOrder(entries: readonly Definition[]): Definition[] {
+  return [...entries].sort((a, b) => a.definition.start - b.definition.start);
+}

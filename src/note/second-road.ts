@@ -1,0 +1,84 @@
+// Holds each movement against the second road: the virtual work of unit actions at the place that the first road found.
+import type { ResolvedMeasure, UnitAction } from '../model/question.ts';
+import { isMovement } from '../model/questions.ts';
+import { positionAlong } from '../model/spans.ts';
+import type { Location, Structure } from '../model/structure.ts';
+import { movement } from '../virtual-work/index.ts';
+import type { Solved } from './solved.ts';
+
+/** Past this relative difference, or residual, an answer is withheld. */
+export const MOST_DIFFERENCE = 1e-9;
+
+/** Answers smaller than this part of the largest movement are held against that part instead: rounding grows as they shrink. */
+const SMALL_ANSWER = 1e-3;
+
+/** A measure as it was taken under one alternative. */
+export interface Taken {
+  readonly measure: ResolvedMeasure;
+  /** Where along a member its value stands, for an extreme. */
+  readonly place: Place | undefined;
+  readonly value: number;
+  readonly factors: readonly number[];
+  readonly solved: Solved;
+}
+
+interface Place {
+  readonly member: number;
+  readonly distance: number;
+}
+
+/**
+ * Relative difference of the two roads to a movement: 0 where the measure is none, undefined where the structure is past
+ * the bound of the second road.
+ */
+export function differenceOf({ measure, place, value, factors, solved }: Taken): number | undefined {
+  const actions = unitActions(measure, place, solved.analysis.structure);
+  if (actions === undefined) return 0;
+  const forceMethod = solved.forceMethod();
+  if (forceMethod === undefined) return undefined;
+  const other = movement(forceMethod, factors, actions);
+  if (Number.isNaN(other)) return undefined;
+  const magnitudes = solved.magnitudes(solved.solution(factors));
+  const largest = measure.kind === 'rotation' ? magnitudes.rotation : magnitudes.movement;
+  const scale = Math.max(Math.abs(value), Math.abs(other), SMALL_ANSWER * largest);
+  return scale === 0 ? 0 : Math.abs(value - other) / scale;
+}
+
+/** The virtual loads of a movement, in the sense in which the measure is positive; undefined for what is no movement. */
+function unitActions(measure: ResolvedMeasure, place: Place | undefined, structure: Structure): readonly UnitAction[] | undefined {
+  if (!isMovement(measure.kind)) return undefined;
+  const at: Location | undefined = place !== undefined ? { kind: 'along', ...place } : 'at' in measure ? measure.at : undefined;
+  if (at === undefined) return undefined;
+  switch (measure.kind) {
+    case 'deflection':
+      return [{ at, x: 0, y: -1, moment: 0 }];
+    case 'sway':
+      return [{ at, x: 1, y: 0, moment: 0 }];
+    case 'rotation':
+      return [{ at, x: 0, y: 0, moment: 1 }];
+    case 'sag':
+      return at.kind === 'along' ? sagActions(measure, at, structure) : undefined;
+    default:
+      return undefined;
+  }
+}
+
+/** A unit force at the place towards the underside of the chord, held by its parts against it at the chord's ends. */
+function sagActions(measure: ResolvedMeasure, at: Place, structure: Structure): readonly UnitAction[] {
+  const member = structure.members[at.member]!;
+  const stretch = ('stretch' in measure ? measure.stretch : undefined) ?? { start: 0, end: member.length };
+  const [start, end] = [positionAlong(structure, member, stretch.start), positionAlong(structure, member, stretch.end)];
+  const length = Math.hypot(end.x - start.x, end.y - start.y);
+  const reversed = 'reversed' in measure && measure.reversed;
+  const [along, across] = [(end.x - start.x) / length, (end.y - start.y) / length];
+  const sign = reversed ? -1 : 1;
+  const [x, y] = [sign * across, -sign * along];
+  const here = positionAlong(structure, member, at.distance);
+  const part = ((here.x - start.x) * along + (here.y - start.y) * across) / length;
+  const on = (distance: number): Location => ({ kind: 'along', member: at.member, distance });
+  return [
+    { at: on(at.distance), x, y, moment: 0 },
+    { at: on(stretch.start), x: -(1 - part) * x, y: -(1 - part) * y, moment: 0 },
+    { at: on(stretch.end), x: -part * x, y: -part * y, moment: 0 },
+  ];
+}
