@@ -1,6 +1,7 @@
 // From a note's text to all that it says: the one function that server, page and command line are faces of. Pure: the same
 // text gives the same result, and no text makes it fail.
-import { parseProse, parseStatements, wordsOf } from '../language/index.ts';
+import { wordsOf } from '../language/lines.ts';
+import { parseProse, parseStatements } from '../language/parse.ts';
 import type { Diagnostic } from '../language/diagnostic.ts';
 import type { Statement } from '../language/syntax.ts';
 import { resolveNames } from '../model/names.ts';
@@ -11,6 +12,8 @@ import { fingerprintOf } from './fingerprint.ts';
 import { type FrontMatterBlock, readFrontMatter } from './front-matter.ts';
 import type { Fence, NoteResult } from './result.ts';
 import { Memory } from './solved.ts';
+
+export type { Memory } from './solved.ts';
 
 export interface EvaluateOptions {
   /** Names the note in messages, and its structure where it never says `structure`. Forward slashes. */

@@ -1,7 +1,7 @@
 // A question worked one alternative at a time: a measure, or an expression of measures, earlier results and values. Never
 // a mixture of two alternatives.
 import type { Measure, Operand, StatementOf, Value } from '../language/syntax.ts';
-import { measure as takeMeasure } from '../mechanics/index.ts';
+import { measure as takeMeasure } from '../mechanics/measure.ts';
 import { type AlternativeModel, alternativesUnder } from '../model/combinations.ts';
 import type { Figures } from '../model/figures.ts';
 import type { Definition } from '../model/names.ts';

@@ -1,6 +1,7 @@
 // A structure with what it does: its analysis, the solutions of combinations and the second road, each worked once, when
 // first asked for. A structure that did not change is taken from memory with all of them.
-import { analyse, combine } from '../mechanics/index.ts';
+import { analyse } from '../mechanics/analyse.ts';
+import { combine } from '../mechanics/superposition.ts';
 import type { Analysis, Solution } from '../mechanics/solution.ts';
 import type { Structure } from '../model/structure.ts';
 import { type ForceMethod, prepare } from '../virtual-work/index.ts';

@@ -1,6 +1,7 @@
 // By what factor all stiffness must rise to meet an exceeded movement limit. What a settlement imposes does not scale, so
 // the factor comes from the part that stiffness governs, and is found on the real model.
-import { imposedPart, loadPart, measure, scaledSum } from '../mechanics/index.ts';
+import { measure } from '../mechanics/measure.ts';
+import { imposedPart, loadPart, superpose } from '../mechanics/superposition.ts';
 import type { ResolvedMeasure } from '../model/question.ts';
 import { isMovement } from '../model/questions.ts';
 import type { Solved } from './solved.ts';
@@ -21,7 +22,7 @@ export function stiffnessFactor(
   if (!analysis.structure.loads.some(load => load.kind === 'movement' && factors[load.case] !== 0)) return Math.abs(value) / limit;
   const [loads, imposed] = [loadPart(analysis, factors), imposedPart(analysis, factors)];
   const sizeAt = (factor: number): number => {
-    const solution = scaledSum([loads, imposed], [1 / factor, 1]);
+    const solution = superpose(analysis, [loads, imposed], [1 / factor, 1]);
     return Math.abs(measure(analysis.structure, solution, asked, 'size').value);
   };
   if (sizeAt(MOST_FACTOR) >= limit) return undefined;

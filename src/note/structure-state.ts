@@ -8,7 +8,7 @@ import type { Names } from '../model/names.ts';
 import { Report } from '../model/report.ts';
 import type { BrokenStatement, Scope } from '../model/scope.ts';
 import type { Structure } from '../model/structure.ts';
-import { MAX_FREEDOMS } from '../mechanics/index.ts';
+import { MAX_FREEDOMS } from '../mechanics/analyse.ts';
 import type { Analysis, Conflict } from '../mechanics/solution.ts';
 import { nearest } from '../quantity/nearest.ts';
 import { significant } from '../quantity/number.ts';
