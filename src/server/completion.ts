@@ -32,20 +32,21 @@ function statementAt(note: OpenNote, position: Position): string | undefined {
   const offset = note.document.offsetAt(position);
   const fence = note.result.fences.find(({ kind, range }) => kind === 'calculation' && holds(range, offset));
   if (fence === undefined || position.line <= fence.firstLine) return undefined;
-  let typed = lineText(note, position.line).slice(0, position.character);
+  const line = lineText(note, position.line).slice(0, position.character);
   // The closing marker is no statement, but an unclosed fence goes on to the end of the text.
-  if (/^[\s>]*(`{3,}|~{3,})/.test(typed)) return undefined;
-  typed = withoutPrefix(typed);
-  for (let line = position.line; line > fence.firstLine + 1 && !beginsStatement(typed); line -= 1) {
-    const above = withoutPrefix(lineText(note, line - 1));
-    if (above === '') break;
-    if (beginsStatement(above)) return `${above} ${typed}`;
-  }
-  return typed;
+  if (/^[\s>]*(`{3,}|~{3,})/.test(line)) return undefined;
+  return `${linesAbove(note, fence.firstLine, position.line)}${withoutPrefix(line)}`;
 }
 
-function beginsStatement(text: string): boolean {
-  return isStatementKind(firstWord(text));
+/** The earlier lines of the statement that a line goes on with: those above, while it is indented more than the first. */
+function linesAbove(note: OpenNote, opening: number, line: number): string {
+  let above = '';
+  const margin = prefixLength(lineText(note, opening + 1));
+  for (let at = line; at > opening + 1; at -= 1) {
+    if (prefixLength(lineText(note, at)) <= margin) break;
+    above = `${withoutPrefix(lineText(note, at - 1))} ${above}`;
+  }
+  return above;
 }
 
 function firstWord(text: string): string {
@@ -57,9 +58,13 @@ function lineText(note: OpenNote, line: number): string {
   return note.document.getText(range).replace(/[\r\n]+$/, '');
 }
 
-/** Indentation and quote marks of what the fence stands in. */
+/** Indentation and the quote marks of what the fence stands in. */
+function prefixLength(text: string): number {
+  return /^[\s>]*/.exec(text)?.[0].length ?? 0;
+}
+
 function withoutPrefix(text: string): string {
-  return text.replace(/^[\s>]+/, '');
+  return text.slice(prefixLength(text));
 }
 
 type Draft = Pick<CompletionItem, 'label' | 'kind' | 'detail' | 'insertText' | 'insertTextFormat' | 'documentation'>;

@@ -3,7 +3,8 @@
 import type { Diagnostic } from 'vscode-languageserver';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
 import { mayHoldCalculation } from '../note/calculation-mark.ts';
-import { createMemory, evaluateNote, type Memory } from '../note/evaluate.ts';
+import { createMemory, evaluateNote } from '../note/evaluate.ts';
+import type { Memory } from '../note/solved.ts';
 import { diagnosticsOf } from './diagnostics.ts';
 import type { OpenNote } from './open-note.ts';
 

@@ -20,7 +20,7 @@ export function memberCard(result: StructureResult, index: number, drawings: The
   if (governing === undefined) return { ...card, rows: withheldRows(result) };
   const rows = [...movementRows(governing, index), ...endRows(governing.reading, index)];
   if (drawings === undefined) return { ...card, rows };
-  const svg = memberSketch(result.structure, index, governing.reading.solution, drawings);
+  const svg = memberSketch(result.structure, index, governing.reading.solution, drawings, result.display);
   return { ...card, rows, drawing: { svg, words: `${member.name}: its moved shape and its moments` } };
 }
 

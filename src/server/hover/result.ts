@@ -17,7 +17,10 @@ function valueRows(answer: Answer, units: DisplayUnits): Row[] {
   if (sides !== undefined) rows.push({ label: 'Either side', text: sides });
   if (governing !== null) rows.push({ label: 'Governed by', text: governing });
   rows.push({ label: 'All digits', text: allDigits(quantity, unit) });
-  if (check !== undefined) rows.push({ label: 'Two methods differ by', text: check.difference.toExponential(1) });
+  // Only a movement is worked by two methods.
+  const isMovement = unit === 'm' || unit === 'rad';
+  if (check !== undefined && isMovement)
+    rows.push({ label: 'Two methods differ by', text: check.difference.toExponential(1) });
   return rows;
 }
 
