@@ -19,11 +19,10 @@ export function faultDiagnostic(fault: Fault, line: Scanned, inChain: boolean): 
       };
     case 'long-dash': {
       const text = inChain ? '--' : '-';
-      const edits = line.tokens.filter(isLongDash).map(token => ({ range: rangeOf(token), text }));
       const message = inChain
         ? 'A long dash stands where `--` (two hyphens) is due.'
         : 'A long dash is no sign here; a minus is a hyphen.';
-      return { code: 'long-dash', severity: 'error', range, message, fix: { title: `Write \`${text}\``, edits } };
+      return { code: 'long-dash', severity: 'error', range, message, ...replaced(line, isLongDash, text) };
     }
     case 'open-quote':
       return {
@@ -39,13 +38,19 @@ export function faultDiagnostic(fault: Fault, line: Scanned, inChain: boolean): 
         severity: 'error',
         range,
         message: 'A quoted text stands between straight quotes (`"`).',
-        fix: {
-          title: 'Write straight quotes',
-          edits: line.tokens.filter(isCurlyQuote).map(token => ({ range: rangeOf(token), text: '"' })),
-        },
+        ...replaced(line, isCurlyQuote, '"'),
       };
   }
 }
+
+/** The fix that writes `text` for every such token of the line, where they are not too many to be a slip. */
+function replaced(line: Scanned, which: (token: Token) => boolean, text: string): Pick<Diagnostic, 'fix'> {
+  const tokens = line.tokens.filter(which);
+  if (tokens.length > MOST_EDITS) return {};
+  return { fix: { title: `Write \`${text}\``, edits: tokens.map(token => ({ range: rangeOf(token), text })) } };
+}
+
+const MOST_EDITS = 100;
 
 function isLongDash(token: Token): boolean {
   return token.kind === 'stray' && '–—‒―'.includes(token.text);

@@ -99,15 +99,24 @@ function readSource(reader: Reader): Quoted | undefined {
 /** Words stand behind what is complete. */
 function refuseRest(reader: Reader, what: 'statement' | 'value'): undefined {
   const token = reader.peek()!;
-  const dashes =
-    token.kind === 'mark' && token.text === '--' ? { hint: '`--` joins the points of a chain.' } : undefined;
-  return reader.fail(
-    'bad-statement',
-    token,
-    `${asWritten(token)} means nothing here; the ${what} is complete before it.`,
-    dashes,
-  );
+  const hint = token.kind === 'string' ? undefined : HINTS_BEHIND[token.text];
+  const code = what === 'value' ? 'bad-value' : 'bad-statement';
+  const message = `${asWritten(token)} means nothing here; the ${what} is complete before it.`;
+  return reader.fail(code, token, message, hint ? { hint } : {});
 }
+
+const IN_PARENTHESES = 'A distance or a factor that begins with a name and goes on stands in parentheses.';
+
+/** What words that stand behind a complete statement were likely meant for. */
+const HINTS_BEHIND: Readonly<Record<string, string>> = {
+  '--': '`--` joins the points of a chain.',
+  '+': IN_PARENTHESES,
+  '-': IN_PARENTHESES,
+  '*': IN_PARENTHESES,
+  '/': IN_PARENTHESES,
+  '^': IN_PARENTHESES,
+  from: IN_PARENTHESES,
+};
 
 function secondColon(tokens: readonly Token[]): Token | undefined {
   let seen = false;

@@ -8,9 +8,10 @@ import { LARGEST_POWER } from '../quantity/unit-text.ts';
 import type { Unit } from '../quantity/units.ts';
 import { divideUnits, multiplyUnits, NO_UNIT, scaled, UNIT_NAMES, unitNamed, unitRaised } from '../quantity/units.ts';
 import type { Reader } from './reader.ts';
+import { asWritten } from './reader.ts';
 import type { Operand } from './syntax.ts';
 import type { Token } from './tokens.ts';
-import { endsValue, isNameless } from './words.ts';
+import { endsValue, isNameless, VALUE_ENDS } from './words.ts';
 
 type QuantityOperand = Extract<Operand, { readonly kind: 'quantity' }>;
 
@@ -116,12 +117,11 @@ function readUnits(reader: Reader): Unit | undefined {
   }
 }
 
-/** `t of RHS` behind a stroke is a property, not the tonne. */
+/** In `10 kN / t of RHS`, with blanks about the stroke, `t` is a property and not the tonne. */
 function isUnit(reader: Reader, ahead: number): boolean {
   const token = reader.peek(ahead);
-  return (
-    token?.kind === 'word' && unitNamed(token.text) !== undefined && !(ahead > 0 && reader.isWord('of', ahead + 1))
-  );
+  if (token?.kind !== 'word' || unitNamed(token.text) === undefined) return false;
+  return ahead === 0 || !token.spaced || !reader.isWord('of', ahead + 1);
 }
 
 /** One unit with its power: `mm2`, `mm²`, `mm^2`. */
@@ -147,15 +147,39 @@ function readUnit(reader: Reader): Unit | undefined {
 function powerOf(reader: Reader, word: Token, exponent: Token, power: number): Unit | undefined {
   const usable = Number.isInteger(power) && power !== 0 && Math.abs(power) <= LARGEST_POWER;
   const unit = usable ? unitRaised(word.text, power) : undefined;
-  return unit ?? reader.fail('bad-value', exponent, `\`${word.text}\` has no power ${exponent.text}.`);
+  return unit ?? reader.fail('bad-value', exponent, `\`${word.text}\` has no power ${asWritten(exponent)}.`);
 }
 
 /** Whether what follows the units may follow a quantity; a word that neither is a unit nor ends a value may not. */
 function standsAlone(reader: Reader): boolean {
   const token = reader.peek();
+  if (token?.kind === 'stray' && SIGNS[token.text]) {
+    reader.fail('unknown-unit', token, `${asWritten(token)} is no unit here.`, { hint: SIGNS[token.text]! });
+    return false;
+  }
   if (token?.kind !== 'word' || endsValue(token.text) || isNameless(token.text) || token.text === 'of') return true;
-  const near = nearest(token.text, UNIT_NAMES);
+  const near = nearest(token.text, UNIT_NAMES) ?? nearest(token.text, VALUE_ENDS);
   const hint = near ? `\`${near}\`?` : 'If it is a name, an operator is missing before it.';
-  reader.fail('unknown-unit', token, `\`${token.text}\` is no unit.`, { hint });
+  reader.fail('unknown-unit', token, `${asWritten(token)} is no unit.`, {
+    hint: joinsDimensions(token.text) ? BLANKS : hint,
+  });
   return false;
 }
+
+const BLANKS = 'Between dimensions `x` stands with blanks on both sides.';
+
+/** `mmx220mm`, or the `x220mm` of `47x220mm`. */
+function joinsDimensions(word: string): boolean {
+  const at = word.indexOf('x');
+  if (at < 0 || word.length > 40 || !/^\d/.test(word.slice(at + 1))) return false;
+  return at === 0 || unitNamed(word.slice(0, at)) !== undefined;
+}
+
+/** Signs that stand for units elsewhere, and what is written here. */
+const SIGNS: Readonly<Record<string, string>> = {
+  '°': '`deg`?',
+  '%': '`/ 100`?',
+  "'": '`ft`?',
+  '′': '`ft`?',
+  '″': '`in`?',
+};

@@ -85,7 +85,7 @@ export class Reader {
     const token = this.peek();
     if (token?.kind !== 'word') return this.due(role);
     const why = whyNoName(token.text);
-    if (why) return this.fail('reserved-name', token, why, { hint: `${role} is due here.` });
+    if (why) return this.fail('reserved-name', token, why, { hint: `Here ${role} is due.` });
     this.index++;
     return { text: token.text, range: rangeOf(token) };
   }

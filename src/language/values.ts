@@ -4,15 +4,15 @@
 import type { BinaryOperator } from '../quantity/expression.ts';
 import { nearest } from '../quantity/nearest.ts';
 import type { Piece } from '../quantity/parse-expression.ts';
-import { adjacent, FUNCTION_NAMES, isFunctionName, parseExpression } from '../quantity/parse-expression.ts';
+import { adjacent, FUNCTION_NAMES, isFunctionName, LONGEST, parseExpression } from '../quantity/parse-expression.ts';
 import type { Problem } from '../quantity/problem.ts';
 import { unitNamed } from '../quantity/units.ts';
 import { readQuantity } from './quantities.ts';
 import type { Reader } from './reader.ts';
-import { rangeOf } from './reader.ts';
+import { asWritten, rangeOf } from './reader.ts';
 import type { Measure, Name, Operand, Value } from './syntax.ts';
 import type { Token } from './tokens.ts';
-import { EXTENTS, endsValue, isExtentFunction, isMeasureKind, isNameless, VALUE_WORDS } from './words.ts';
+import { EXTENTS, endsValue, isExtentFunction, isMeasureKind, isNameless, VALUE_ENDS, VALUE_WORDS } from './words.ts';
 
 /** What a value may hold, and what ends it, beyond the usual. */
 export interface ValueContext {
@@ -20,8 +20,6 @@ export interface ValueContext {
   readonly measure?: (reader: Reader) => Measure | undefined;
   /** The bare `span` of a question. */
   readonly span?: true;
-  /** Behind a dimension of a chain `of` names a section. */
-  readonly ofEnds?: true;
   /** Between dimensions of a shape `×` separates. */
   readonly timesEnds?: true;
 }
@@ -65,6 +63,13 @@ function parse(reader: Reader, pieces: Piece<Operand>[] | undefined): Value | un
   return value ?? refuse(reader, problems[0]!);
 }
 
+/** Where a word stands that may be mistyped for one that ends a value, it is offered. */
+function refuseAdjacent(reader: Reader, token: Token): undefined {
+  const problem = adjacent(rangeOf(token));
+  const near = token.kind === 'word' ? nearest(token.text, VALUE_ENDS) : undefined;
+  return refuse(reader, near ? { ...problem, hint: `\`${near}\`?` } : problem);
+}
+
 function refuse(reader: Reader, problem: Problem): undefined {
   return reader.fail(problem.code, problem.range, problem.message, problem.hint ? { hint: problem.hint } : {});
 }
@@ -96,7 +101,8 @@ function collect(reader: Reader, context: ValueContext, single: boolean): Piece<
     if (token.kind !== 'word' && token.kind !== 'number') break;
     // A word that cannot be an operand leaves open what is open: `(2 m down on R1`.
     if (complete && token.kind === 'word' && (endsValue(token.text) || isNameless(token.text))) break;
-    if (complete) return refuse(reader, adjacent(token));
+    if (complete) return refuseAdjacent(reader, token);
+    if (pieces.length > LONGEST) break;
     const piece = readOperand(reader, context);
     if (!piece) return undefined;
     pieces.push(piece);
@@ -109,7 +115,7 @@ function collect(reader: Reader, context: ValueContext, single: boolean): Piece<
 function ends(token: Token, context: ValueContext): boolean {
   switch (token.kind) {
     case 'word':
-      return endsValue(token.text) || isNameless(token.text) || (context.ofEnds === true && token.text === 'of');
+      return endsValue(token.text) || isNameless(token.text) || token.text === 'of';
     case 'mark':
       return END_MARKS.has(token.text) || (context.timesEnds === true && token.text === '×');
     case 'string':
@@ -163,9 +169,14 @@ function readOperand(reader: Reader, context: ValueContext): Piece<Operand> | un
   if (property) return operandPiece(property);
   if (isMeasureKind(word)) {
     if (!context.measure) {
-      return reader.fail('bad-value', token, `A measure (\`${word}\`) stands only in \`find\` and \`require\`.`, {
-        hint: 'Ask it in a `find` and use the name of that here.',
-      });
+      return reader.fail(
+        'bad-value',
+        token,
+        `A measure (${asWritten(token)}) stands only in \`find\` and \`require\`.`,
+        {
+          hint: 'Ask it in a `find` and use the name of that here.',
+        },
+      );
     }
     const measure = context.measure(reader);
     return measure && operandPiece({ kind: 'measure', measure, range: measure.range });
@@ -184,7 +195,7 @@ function readOperand(reader: Reader, context: ValueContext): Piece<Operand> | un
     const hint = near
       ? `\`${near}\`?`
       : `Functions are ${FUNCTION_NAMES.join(', ')}; nothing multiplies without a sign.`;
-    return reader.fail('bad-value', token, `\`${word}\` is no function.`, { hint });
+    return reader.fail('bad-value', token, `${asWritten(token)} is no function.`, { hint });
   }
   const name = reader.name('a value');
   return name && operandPiece({ kind: 'name', name, range });

@@ -10,7 +10,7 @@ const NAMELESS: ReadonlySet<string> = new Set(
 );
 
 /** Words that end a value wherever an operand is complete, outside parentheses. */
-const VALUE_ENDS: ReadonlySet<string> = new Set(
+export const VALUE_ENDS: ReadonlySet<string> = new Set(
   (
     'x y rotation up down left right clockwise anticlockwise towards square along above below ' +
     'at on onto from and to under by every'

@@ -80,16 +80,16 @@ interface Level {
 /** Walks the pieces once, alternately expecting an operand and an operator. */
 function check(pieces: readonly Piece<unknown>[], whole: Range): Problem | undefined {
   if (pieces.length === 0) return bad(whole, 'A value is missing here.');
-  if (pieces.length > LONGEST) {
-    const range = pieces[LONGEST]!.range;
-    return { code: 'value-too-long', range, message: `A value has at most ${LONGEST} operands and operators.` };
-  }
   const levels: Level[] = [{ range: whole, call: undefined, commas: 0, pending: 0 }];
   let deep = 0;
   let complete = false;
 
   for (let index = 0; index < pieces.length; index++) {
     const piece = pieces[index]!;
+    if (index === LONGEST) {
+      const message = `A value has at most ${LONGEST} operands and operators.`;
+      return { code: 'value-too-long', range: piece.range, message, hint: 'Give a part of it a name with `let`.' };
+    }
     const level = levels[levels.length - 1]!;
     switch (piece.kind) {
       case 'operand':

@@ -127,10 +127,10 @@ function endsPoint(reader: Reader): boolean {
 /** `4.8 m`, `6 m right, 0.9 m up`, `4.1 m at 35 deg`, `6 m right at 5.7 deg`. Without a heading it goes right. */
 function readDimension(reader: Reader): ChainDimension | undefined {
   const from = reader.position;
-  const distance = readValue(reader, IN_CHAIN);
+  const distance = readValue(reader);
   if (!distance) return undefined;
   if (reader.takeWord('at')) {
-    const angle = readValue(reader, IN_CHAIN);
+    const angle = readValue(reader);
     return angle && { kind: 'polar', length: distance, angle, range: reader.since(from) };
   }
   const heading = takeHeading(reader) ?? 'right';
@@ -140,7 +140,7 @@ function readDimension(reader: Reader): ChainDimension | undefined {
       const message = 'A pitch stands behind `left` or `right`, which say the run.';
       return reader.fail('bad-statement', reader.since(reader.position - 1), message);
     }
-    const pitch = readValue(reader, IN_CHAIN);
+    const pitch = readValue(reader);
     return pitch && { kind: 'pitched', run: distance, heading, pitch, range: reader.since(from) };
   }
   if (reader.takeMark(',')) {
@@ -151,11 +151,9 @@ function readDimension(reader: Reader): ChainDimension | undefined {
   return { kind: 'parts', parts, range: reader.since(from) };
 }
 
-const IN_CHAIN = { ofEnds: true } as const;
-
 function readSecondPart(reader: Reader): { distance: Value; heading: Heading; range: Range } | undefined {
   const from = reader.position;
-  const distance = readValue(reader, IN_CHAIN);
+  const distance = readValue(reader);
   if (!distance) return undefined;
   const heading = takeHeading(reader);
   if (!heading) return reader.dueOneOf('a direction', ['up', 'down', 'left', 'right']);
