@@ -9,8 +9,27 @@ export interface Analysis {
   readonly stability: Stability;
   /** Degree of static indeterminacy, springs and bars counted as unknowns; 0 when determinate. Meaningless when unstable. */
   readonly redundancy: number;
-  /** The response to each case alone, in the order of `structure.cases`; empty when unstable. */
+  /** The response to each case alone, in the order of `structure.cases`; empty when unstable, too large or in conflict. */
   readonly cases: readonly Solution[];
+  /** By case: what of its response forces cause, and what imposed movements; undefined where it has no imposed movement. */
+  readonly parts: readonly (CaseParts | undefined)[];
+  /** An imposed movement that an axially stiff member would have to change its length for. */
+  readonly conflict?: Conflict;
+  /** Not analysed: so many freedoms, or so many movements tied together by axially stiff members, are past what is solved in seconds. */
+  readonly tooLarge?: 'freedoms' | 'axially-stiff';
+}
+
+export interface CaseParts {
+  readonly forces: Solution;
+  readonly imposed: Solution;
+}
+
+export interface Conflict {
+  /** Indices. */
+  readonly case: number;
+  readonly member: number;
+  /** What the member would lengthen by, m. */
+  readonly amount: number;
 }
 
 export interface Stability {

@@ -18,7 +18,18 @@ export type ResolvedMeasure =
   | { readonly kind: 'rotation'; readonly at: Location }
   /** Along members (one, or those of a group); a stretch only with one member. */
   | {
-      readonly kind: 'deflection' | 'sway' | 'rotation' | 'moment' | 'shear' | 'sagging' | 'hogging' | 'force' | 'tension' | 'compression' | 'stress';
+      readonly kind:
+        | 'deflection'
+        | 'sway'
+        | 'rotation'
+        | 'moment'
+        | 'shear'
+        | 'sagging'
+        | 'hogging'
+        | 'force'
+        | 'tension'
+        | 'compression'
+        | 'stress';
       readonly along: readonly number[];
       readonly stretch?: MemberStretch;
     }
@@ -26,10 +37,24 @@ export type ResolvedMeasure =
    * The largest departure from the straight chord between the ends of the stretch (or of the member), at right angles to
    * it; `reversed` where the way from P to Q runs against the member's travel, which turns the underside over.
    */
-  | { readonly kind: 'sag'; readonly along: readonly number[]; readonly stretch?: MemberStretch; readonly reversed: boolean }
+  | {
+      readonly kind: 'sag';
+      readonly along: readonly number[];
+      readonly stretch?: MemberStretch;
+      readonly reversed: boolean;
+    }
   /** At one place of one member; both sides of a jump count. */
   | {
-      readonly kind: 'moment' | 'shear' | 'force' | 'sagging' | 'hogging' | 'tension' | 'compression' | 'stress' | 'sag';
+      readonly kind:
+        | 'moment'
+        | 'shear'
+        | 'force'
+        | 'sagging'
+        | 'hogging'
+        | 'tension'
+        | 'compression'
+        | 'stress'
+        | 'sag';
       readonly at: Extract<Location, { kind: 'along' }>;
     }
   | { readonly kind: 'reaction'; readonly support: number; readonly component: 'vertical' | 'horizontal' | 'moment' };
@@ -43,6 +68,8 @@ export interface Measured {
   readonly place?: { readonly member: number; readonly distance: number };
   /** The two sides of a jump at the place, before and after in the direction of travel; absent where there is none. */
   readonly sides?: readonly [before: number, after: number];
+  /** A figure that the section (an index) lacks and this stress calls for; then the value is NaN. */
+  readonly missing?: { readonly section: number; readonly figure: 'area' | 'sectionModulus' };
 }
 
 /** A unit force or couple of the virtual system; movements are the sum of action · movement. */

@@ -1,0 +1,158 @@
+// The analysis of a structure: is it stable, how redundant is it, and how does it answer each of its cases.
+//
+// Plane frames, linear and first order: Euler-Bernoulli bending and axial force by the displacement method, with fields
+// exact between loads. Axes, signs and units are those of model/structure.ts and solution.ts.
+
+import type { Load, Structure } from '../model/structure.ts';
+import { conditionEstimate } from './condition.ts';
+import { fieldsOf } from './fields.ts';
+import { boundFreedoms } from './freedoms.ts';
+import { type Imposed, imposedBy } from './imposed.ts';
+import { type Loading, loadingOf, SEGMENT_NUMBERS } from './loading.ts';
+import { findMechanisms } from './mechanisms.ts';
+import { type Response, respond } from './response.ts';
+import type { Analysis, CaseParts, Conflict, Mechanism, Reaction, Solution } from './solution.ts';
+import { project } from './supports.ts';
+import { prepareSystem, type System } from './system.ts';
+
+/** A structure with more freedoms is not analysed: a square frame of so many takes about 10 s. */
+export const MAX_FREEDOMS = 300_000;
+
+/**
+ * A structure whose stiffness matrix is worse conditioned than this may be unstable, and its geometry is looked at. One
+ * that is unstable comes out at 1 / ε or so, or Infinity, and the estimate is short of the truth by a factor of
+ * ten at most.
+ */
+const SUSPICIOUS_CONDITION = 1e10;
+
+export function analyse(structure: Structure): Analysis {
+  if (boundFreedoms(structure) > MAX_FREEDOMS) return unanalysed(structure, 'freedoms');
+  const system = prepareSystem(structure);
+  if (system === undefined) return unanalysed(structure, 'axially-stiff');
+
+  const condition = conditionEstimate(system.matrix, system.factorisation);
+  const mechanisms = condition > SUSPICIOUS_CONDITION ? findMechanisms(system) : [];
+  if (mechanisms.length > 0) return { ...unanalysed(structure), stability: unstable(mechanisms) };
+
+  const redundancy = redundancyOf(system);
+  const stability = { stable: true, mechanisms, condition };
+  const byCase = loadsByCase(structure);
+  const imposed = byCase.map(loads => imposedBy(loads, system.freedoms, system.reduction));
+  const conflict = findConflict(system, imposed);
+  if (conflict !== undefined) return { structure, stability, redundancy, cases: [], parts: [], conflict };
+
+  const cases: Solution[] = [];
+  const parts: (CaseParts | undefined)[] = [];
+  byCase.forEach((loads, k) => {
+    const loading = loadingOf(structure, loads, system.legs, system.freedoms, system.ends, system.segments);
+    const forces = respond(system, loading, undefined);
+    const movements = imposed[k];
+    if (movements === undefined) {
+      cases.push(solutionOf(system, forces, loading));
+      parts.push(undefined);
+      return;
+    }
+    const moved = respond(system, undefined, movements);
+    cases.push(solutionOf(system, add(forces, moved), loading));
+    parts.push({ forces: solutionOf(system, forces, loading), imposed: solutionOf(system, moved, undefined) });
+  });
+  return { structure, stability, redundancy, cases, parts };
+}
+
+function unstable(mechanisms: readonly Mechanism[]) {
+  return { stable: false, mechanisms, condition: Number.POSITIVE_INFINITY };
+}
+
+function unanalysed(structure: Structure, tooLarge?: 'freedoms' | 'axially-stiff'): Analysis {
+  const analysis = { structure, stability: unstable([]), redundancy: 0, cases: [], parts: [] };
+  return tooLarge === undefined ? analysis : { ...analysis, tooLarge };
+}
+
+/** Unknown forces, three a leg of a member, one a leg of a bar and the reactions, less the equations of equilibrium. */
+function redundancyOf(system: System): number {
+  const { legs, freedoms } = system;
+  let forces = freedoms.reactions;
+  for (let e = 0; e < legs.count; e++) forces += legs.bending[e] === 0 ? 1 : 3;
+  return forces - freedoms.count;
+}
+
+function loadsByCase(structure: Structure): readonly Load[][] {
+  const byCase: Load[][] = structure.cases.map(() => []);
+  for (const load of structure.loads) byCase[load.case]!.push(load);
+  return byCase;
+}
+
+/** Lengthenings smaller than this beside the movements that cause them are rounding. */
+const UNSTRETCHED = 1e-9;
+
+function findConflict(system: System, imposed: readonly (Imposed | undefined)[]): Conflict | undefined {
+  for (let k = 0; k < imposed.length; k++) {
+    const movement = imposed[k]?.movement;
+    if (movement === undefined) continue;
+    for (const { leg, terms } of system.reduction.closures) {
+      let amount = 0;
+      let largest = 0;
+      for (const [freedom, value] of terms) {
+        amount += value * movement[freedom]!;
+        largest = Math.max(largest, Math.abs(value * movement[freedom]!));
+      }
+      if (Math.abs(amount) > UNSTRETCHED * largest) return { case: k, member: system.legs.member[leg]!, amount };
+    }
+  }
+  return undefined;
+}
+
+function add(a: Response, b: Response): Response {
+  return {
+    movement: a.movement.map((value, k) => value + b.movement[k]!),
+    natural: a.natural.map((value, k) => value + b.natural[k]!),
+    ground: a.ground.map((value, k) => value + b.ground[k]!),
+    residual: a.residual + b.residual,
+  };
+}
+
+function solutionOf(system: System, response: Response, loading: Loading | undefined): Solution {
+  const { legs, segments } = system;
+  const along = loading ?? {
+    segments: new Float64Array(SEGMENT_NUMBERS * segments.count),
+    shares: new Float64Array(2 * legs.count),
+  };
+  return {
+    movements: globalMovements(system, response.movement),
+    members: fieldsOf(system, along, response.movement, response.natural),
+    reactions: reactionsOf(system, response.ground),
+    applied: loading?.applied ?? { x: 0, y: 0, moment: 0 },
+    residual: response.residual,
+  };
+}
+
+function globalMovements(system: System, movement: Float64Array): Float64Array {
+  const { first, axisX, axisY, joint } = system.freedoms;
+  const points = system.structure.points.length;
+  const movements = new Float64Array(3 * points);
+  for (let p = 0; p < points; p++) {
+    const f = first[p]!;
+    if (f === first[p + 1]) continue;
+    movements[3 * p] = axisX[p]! * movement[f]! - axisY[p]! * movement[f + 1]!;
+    movements[3 * p + 1] = axisY[p]! * movement[f]! + axisX[p]! * movement[f + 1]!;
+    if (joint[p]! >= 0) movements[3 * p + 2] = movement[joint[p]!]!;
+  }
+  return movements;
+}
+
+/** Where several supports stand at a point, the first tells what all of them do. */
+function reactionsOf(system: System, ground: Float64Array): readonly Reaction[] {
+  const { structure, freedoms, supports } = system;
+  const { first, axisX, axisY, joint } = freedoms;
+  return structure.supports.map(({ point: p }, index) => {
+    const support = supports.get(p)!;
+    const f = first[p]!;
+    if (support.support !== index || f === first[p + 1]) return { x: 0, y: 0, moment: 0 };
+    const [x, y] = project(
+      support.resisted,
+      axisX[p]! * ground[f]! - axisY[p]! * ground[f + 1]!,
+      axisY[p]! * ground[f]! + axisX[p]! * ground[f + 1]!,
+    );
+    return { x, y, moment: support.rotationResisted ? ground[joint[p]!]! : 0 };
+  });
+}

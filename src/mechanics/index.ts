@@ -1,0 +1,19 @@
+// The public face of the mechanics room: what a structure does under its loads.
+
+export { analyse, MAX_FREEDOMS } from './analyse.ts';
+export { type FieldName, type FieldValues, fieldAt, movementAlong, movementAt, pieceAt, type Side } from './field.ts';
+export { measure } from './measure.ts';
+export { MAX_MECHANISMS } from './mechanisms.ts';
+export { bound, derivative, evaluate, extremes, type Polynomial, roots, sum } from './polynomial.ts';
+export type {
+  Analysis,
+  CaseParts,
+  Conflict,
+  FieldPiece,
+  Mechanism,
+  MemberField,
+  Reaction,
+  Solution,
+  Stability,
+} from './solution.ts';
+export { combine, imposedPart, loadPart } from './superposition.ts';

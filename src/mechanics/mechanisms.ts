@@ -1,0 +1,173 @@
+// How an unstable structure can move: its free movements in the fewest and simplest terms, each told as a rigid body or as
+// a mechanism, with the points and members that take part.
+
+import { findFreeMovements } from './free-movements.ts';
+import { expand } from './reduction.ts';
+import { findParts, jointsThatTurn, type Part, rigidMovements } from './rigid-bodies.ts';
+import type { Mechanism } from './solution.ts';
+import type { System } from './system.ts';
+
+/** More than this many ways to move are not listed. */
+export const MAX_MECHANISMS = 24;
+
+/** Empty where the structure is stable; at most `MAX_MECHANISMS`. */
+export function findMechanisms(system: System): readonly Mechanism[] {
+  const rigid: { movement: Float64Array; part: Part }[] = [];
+  const turning = jointsThatTurn(system);
+  for (const part of findParts(system)) {
+    for (const movement of rigidMovements(system, part, turning)) rigid.push({ movement, part });
+    if (rigid.length >= MAX_MECHANISMS) break;
+  }
+  const mechanisms = rigid.slice(0, MAX_MECHANISMS).map(({ movement }) => describe(system, 'rigid-body', movement));
+  if (rigid.length >= MAX_MECHANISMS) return mechanisms;
+
+  const { reduction, freedoms } = system;
+  const known = rigid.map(({ movement }) => Float64Array.from(reduction.freedoms, f => movement[f]!));
+  const free = findFreeMovements(system, known, MAX_MECHANISMS).map(solution => {
+    const movement = new Float64Array(freedoms.count);
+    expand(reduction, solution, movement);
+    return movement;
+  });
+  holdStill(system, rigid, free);
+  simplify(system, free);
+  for (const movement of free) mechanisms.push(describe(system, 'mechanism', movement));
+  return mechanisms.slice(0, MAX_MECHANISMS);
+}
+
+/** Takes from the movements of mechanisms what moves a part as a whole: one leg of each part that is free to stays still. */
+function holdStill(
+  system: System,
+  rigid: readonly { readonly movement: Float64Array; readonly part: Part }[],
+  free: readonly Float64Array[],
+): void {
+  const { first } = system.freedoms;
+  const { from, to } = system.legs;
+  const movements = rigid.map(({ movement }) => movement.slice());
+  movements.forEach((movement, k) => {
+    const { leg, points } = rigid[k]!.part;
+    const held = leg < 0 ? [points[0]!] : [from[leg]!, to[leg]!];
+    const candidates = held.flatMap(p => [first[p]!, first[p]! + 1]);
+    const pivot = largestOf(movement, candidates);
+    if (pivot < 0) return;
+    for (const other of [...movements, ...free]) if (other !== movement) eliminate(other, movement, pivot);
+  });
+}
+
+/**
+ * Gauss-Jordan elimination among the movements: each has a point that it alone moves, so that they are told apart by as
+ * few points as possible.
+ */
+function simplify(system: System, free: readonly Float64Array[]): void {
+  const movements: number[] = [];
+  const rotations: number[] = [];
+  const { first, point, count } = system.freedoms;
+  for (let f = 0; f < count; f++) (f - first[point[f]!]! < 2 ? movements : rotations).push(f);
+  const waiting = new Set(free);
+  while (waiting.size > 0) {
+    let chosen: Float64Array | undefined;
+    let pivot = -1;
+    for (const candidates of [movements, rotations]) {
+      for (const vector of waiting) {
+        const place = largestOf(vector, candidates);
+        if (place < 0) continue;
+        if (chosen === undefined || Math.abs(vector[place]!) > Math.abs(chosen[pivot]!) * (1 + 1e-9)) {
+          chosen = vector;
+          pivot = place;
+        }
+      }
+      if (chosen !== undefined) break;
+    }
+    if (chosen === undefined) return;
+    waiting.delete(chosen);
+    const size = Math.abs(chosen[pivot]!);
+    for (let f = 0; f < chosen.length; f++) chosen[f]! /= size;
+    for (const other of free) if (other !== chosen) eliminate(other, chosen, pivot);
+  }
+}
+
+/** Entries smaller than this beside the largest movement are rounding. */
+const STILL = 1e-7;
+
+/** The candidate where the vector is largest, the first among equals; −1 where it is zero at all. */
+function largestOf(vector: Float64Array, candidates: readonly number[]): number {
+  let place = -1;
+  let largest = STILL * vector.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
+  for (const f of candidates) {
+    if (Math.abs(vector[f]!) <= largest * (1 + 1e-9)) continue;
+    place = f;
+    largest = Math.abs(vector[f]!);
+  }
+  return place;
+}
+
+function eliminate(vector: Float64Array, by: Float64Array, pivot: number): void {
+  const factor = vector[pivot]! / by[pivot]!;
+  if (factor === 0) return;
+  for (let f = 0; f < vector.length; f++) vector[f]! -= factor * by[f]!;
+  vector[pivot] = 0;
+}
+
+function describe(system: System, kind: Mechanism['kind'], movement: Float64Array): Mechanism {
+  const { structure, freedoms, legs } = system;
+  const { first, axisX, axisY, size, startRotation, endRotation } = freedoms;
+  const movements = new Float64Array(2 * structure.points.length);
+  let largest = 0;
+  let greatest = -1;
+  for (let p = 0; p < structure.points.length; p++) {
+    const f = first[p]!;
+    if (f === first[p + 1]) continue;
+    movements[2 * p] = axisX[p]! * movement[f]! - axisY[p]! * movement[f + 1]!;
+    movements[2 * p + 1] = axisY[p]! * movement[f]! + axisX[p]! * movement[f + 1]!;
+    const length = Math.hypot(movements[2 * p]!, movements[2 * p + 1]!);
+    if (length <= largest * (1 + 1e-9)) continue;
+    largest = length;
+    greatest = p;
+  }
+  let turned = 0;
+  for (let f = 0; f < movement.length; f++) {
+    if (f - first[freedoms.point[f]!]! >= 2) turned = Math.max(turned, size * Math.abs(movement[f]!));
+  }
+
+  // Where something turns in place and nothing moves beside it, the movements are rounding.
+  if (largest <= STILL * turned) {
+    largest = 0;
+    movements.fill(0);
+  }
+  const still = STILL * (largest > 0 ? largest : turned);
+  if (largest > 0) {
+    // The way that a load would push it: to the right, or down.
+    const x = movements[2 * greatest]!;
+    const y = movements[2 * greatest + 1]!;
+    const sign = Math.abs(x) >= Math.abs(y) ? Math.sign(x) : -Math.sign(y);
+    for (let k = 0; k < movements.length; k++) {
+      movements[k] = Math.abs(movements[k]!) <= still ? 0 : (sign * movements[k]!) / largest;
+    }
+  }
+
+  const points: number[] = [];
+  const turning: number[] = [];
+  for (let p = 0; p < structure.points.length; p++) {
+    if (movements[2 * p] !== 0 || movements[2 * p + 1] !== 0) points.push(p);
+    else if (turns(freedoms, movement, p, still)) turning.push(p);
+  }
+  const moving = new Set(points);
+  const members = new Set<number>();
+  for (let e = 0; e < legs.count; e++) {
+    const bends = legs.bending[e] !== 0;
+    const ends = moving.has(legs.from[e]!) || moving.has(legs.to[e]!);
+    const rotates = bends && Math.max(rotationOf(startRotation[e]!), rotationOf(endRotation[e]!)) > still;
+    if (ends || rotates) members.add(legs.member[e]!);
+  }
+  return { kind, movements, points, members: [...members], turning };
+
+  function rotationOf(f: number): number {
+    return size * Math.abs(movement[f]!);
+  }
+}
+
+function turns(freedoms: System['freedoms'], movement: Float64Array, p: number, still: number): boolean {
+  for (let f = freedoms.first[p]! + 2; f < freedoms.first[p + 1]!; f++) {
+    if (freedoms.size * Math.abs(movement[f]!) > still) return true;
+  }
+  return false;
+}

@@ -1,0 +1,143 @@
+// The response of a prepared structure to loads or to imposed movements: movements of the freedoms, natural forces of the
+// legs, and what is left unbalanced.
+
+import type { Imposed } from './imposed.ts';
+import type { Loading } from './loading.ts';
+import { expand, gather } from './reduction.ts';
+import { addStrains, subtractForces } from './strains.ts';
+import type { System } from './system.ts';
+import { addThrusts } from './thrusts.ts';
+
+export interface Response {
+  /** By freedom. */
+  readonly movement: Float64Array;
+  /**
+   * Three a leg: axial force (tension positive; of a leg loaded along, its mean as if held at both ends), and the
+   * couples that the joints put on its ends, anticlockwise.
+   */
+  readonly natural: Float64Array;
+  /** By freedom: what the ground, springs included, puts on the structure; at a freedom that nothing resists, what is out of balance, reversed. */
+  readonly ground: Float64Array;
+  /** Largest force out of balance at a freedom that is not held, over the largest load; couples over the size of the structure. */
+  readonly residual: number;
+}
+
+export function respond(system: System, loading: Loading | undefined, imposed: Imposed | undefined): Response {
+  const { legs, ends, freedoms, reduction, factorisation, thrusts } = system;
+  const state: State = {
+    movement: imposed === undefined ? new Float64Array(freedoms.count) : imposed.movement.slice(),
+    strains: new Float64Array(3 * legs.count),
+    shortenings: new Float64Array(freedoms.springs.length),
+    natural: new Float64Array(3 * legs.count),
+    unbalanced: new Float64Array(freedoms.count),
+  };
+  if (imposed !== undefined) {
+    addStrains(legs, ends, imposed.movement, state.strains);
+    addShortenings(system, imposed.movement, state.shortenings);
+    for (let k = 0; k < state.shortenings.length; k++) state.shortenings[k]! -= imposed.springs[k]!;
+  }
+  balance(system, loading, state);
+  const largest = largestForce(system, state.unbalanced, false);
+  if (largest === 0) return { movement: state.movement, natural: state.natural, ground: state.unbalanced, residual: 0 };
+
+  // Each step solves for what the one before left. Strains and forces are added up step by step, not worked out from the
+  // sum of movements, so that what a small step adds is not lost in the rounding of a large movement.
+  let left = Number.POSITIVE_INFINITY;
+  for (let step = 0; step < MOST_STEPS; step++) {
+    const movement = new Float64Array(freedoms.count);
+    expand(reduction, factorisation.solve(gather(reduction, state.unbalanced)), movement);
+    addStrains(legs, ends, movement, state.strains);
+    addShortenings(system, movement, state.shortenings);
+    for (let f = 0; f < movement.length; f++) state.movement[f]! += movement[f]!;
+    balance(system, loading, state);
+    const before = left;
+    left = largestUnknownForce(system, state.unbalanced) / largest;
+    if (step > 0 && (left <= BALANCED || left > 0.5 * before)) break;
+  }
+  if (thrusts !== undefined) addThrusts(thrusts, legs, ends, state.natural, state.unbalanced);
+
+  const residual = largestForce(system, state.unbalanced, true) / largest;
+  const ground = state.unbalanced;
+  addSpringForces(system, state.shortenings, ground, 1);
+  for (let f = 0; f < ground.length; f++) ground[f] = -ground[f]!;
+  return { movement: state.movement, natural: state.natural, ground, residual };
+}
+
+/** Solves at most; the first two are always made, the others only for structures of badly mixed stiffness. */
+const MOST_STEPS = 8;
+
+/** What is out of balance, relative to the largest load, that rounding alone explains: some hundred ε. */
+const BALANCED = 3e-14;
+
+interface State {
+  readonly movement: Float64Array;
+  readonly strains: Float64Array;
+  /** By spring. */
+  readonly shortenings: Float64Array;
+  readonly natural: Float64Array;
+  /** By freedom: loads less what legs and springs answer. */
+  readonly unbalanced: Float64Array;
+}
+
+function balance(system: System, loading: Loading | undefined, state: State): void {
+  const { legs, ends, freedoms } = system;
+  const { strains, natural, unbalanced } = state;
+  for (let e = 0; e < legs.count; e++) {
+    const axial = legs.axial[e]!;
+    const bending = (2 * legs.bending[e]!) / legs.length[e]!;
+    const start = strains[3 * e + 1]!;
+    const end = strains[3 * e + 2]!;
+    natural[3 * e] = axial === Number.POSITIVE_INFINITY ? 0 : (axial / legs.length[e]!) * strains[3 * e]!;
+    natural[3 * e + 1] = bending * (2 * start + end);
+    natural[3 * e + 2] = bending * (start + 2 * end);
+  }
+  if (loading === undefined) unbalanced.fill(0);
+  else {
+    for (let k = 0; k < natural.length; k++) natural[k]! -= loading.clamped[k]!;
+    unbalanced.set(loading.nodal);
+  }
+  subtractForces(legs, ends, natural, unbalanced);
+  if (freedoms.springs.length > 0) addSpringForces(system, state.shortenings, unbalanced, -1);
+}
+
+function addShortenings(system: System, movement: Float64Array, shortenings: Float64Array): void {
+  system.freedoms.springs.forEach((spring, k) => {
+    spring.freedoms.forEach((freedom, i) => {
+      shortenings[k]! += spring.coefficients[i]! * movement[freedom]!;
+    });
+  });
+}
+
+function addSpringForces(system: System, shortenings: Float64Array, force: Float64Array, sign: 1 | -1): void {
+  system.freedoms.springs.forEach((spring, k) => {
+    const size = sign * spring.stiffness * shortenings[k]!;
+    spring.freedoms.forEach((freedom, i) => {
+      force[freedom]! += size * spring.coefficients[i]!;
+    });
+  });
+}
+
+/** Couples count as forces at an arm of the size of the structure. */
+function largestForce(system: System, force: Float64Array, freeOnly: boolean): number {
+  const { held, first, point, size } = system.freedoms;
+  let largest = 0;
+  for (let f = 0; f < force.length; f++) {
+    if (freeOnly && held[f] === 1) continue;
+    const value = Math.abs(force[f]!);
+    largest = Math.max(largest, f - first[point[f]!]! < 2 ? value : value / size);
+  }
+  return largest;
+}
+
+function largestUnknownForce(system: System, force: Float64Array): number {
+  const { freedoms, reduction } = system;
+  const { first, point, size } = freedoms;
+  const gathered = gather(reduction, force);
+  let largest = 0;
+  for (let k = 0; k < gathered.length; k++) {
+    const f = reduction.freedoms[k]!;
+    const value = Math.abs(gathered[k]!);
+    largest = Math.max(largest, f - first[point[f]!]! < 2 ? value : value / size);
+  }
+  return largest;
+}

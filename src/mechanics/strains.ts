@@ -1,0 +1,163 @@
+// How the movements of the joints strain the legs and the springs: natural strains (lengthening, and the turning of each
+// end against the chord), by leg from the freedoms, and as rows in the unknowns of a solve.
+
+import type { Freedoms } from './freedoms.ts';
+import type { Legs } from './legs.ts';
+import type { Reduction } from './reduction.ts';
+
+/** What relates a leg to the freedoms of its ends. */
+export interface Ends {
+  /** Six a leg: two movements and the rotation of the start, then of the end; a rotation of a bar is −1. */
+  readonly freedoms: Int32Array;
+  /**
+   * Eight a leg: what the first and second movement of the start give along the leg, what they give across it (to the
+   * left of the travel), then the same of the end.
+   */
+  readonly shares: Float64Array;
+}
+
+export function relateEnds(legs: Legs, freedoms: Freedoms): Ends {
+  const { first, axisX, axisY } = freedoms;
+  const ends: Ends = { freedoms: new Int32Array(6 * legs.count), shares: new Float64Array(8 * legs.count) };
+  for (let e = 0; e < legs.count; e++) {
+    const cosine = legs.cosine[e]!;
+    const sine = legs.sine[e]!;
+    for (let end = 0; end < 2; end++) {
+      const p = (end === 0 ? legs.from : legs.to)[e]!;
+      const x = axisX[p]!;
+      const y = axisY[p]!;
+      const f = 6 * e + 3 * end;
+      ends.freedoms[f] = first[p]!;
+      ends.freedoms[f + 1] = first[p]! + 1;
+      ends.freedoms[f + 2] = (end === 0 ? freedoms.startRotation : freedoms.endRotation)[e]!;
+      const s = 8 * e + 4 * end;
+      ends.shares[s] = cosine * x + sine * y;
+      ends.shares[s + 1] = sine * x - cosine * y;
+      ends.shares[s + 2] = cosine * y - sine * x;
+      ends.shares[s + 3] = cosine * x + sine * y;
+    }
+  }
+  return ends;
+}
+
+/**
+ * Adds to the strains (three a leg: lengthening in m, turning of start and end against the chord in rad, anticlockwise)
+ * what movements of the freedoms cause.
+ */
+export function addStrains(legs: Legs, ends: Ends, movement: Float64Array, strains: Float64Array): void {
+  const { freedoms, shares } = ends;
+  for (let e = 0; e < legs.count; e++) {
+    const f = 6 * e;
+    const s = 8 * e;
+    const x0 = movement[freedoms[f]!]!;
+    const y0 = movement[freedoms[f + 1]!]!;
+    const x1 = movement[freedoms[f + 3]!]!;
+    const y1 = movement[freedoms[f + 4]!]!;
+    strains[3 * e]! += shares[s + 4]! * x1 + shares[s + 5]! * y1 - (shares[s]! * x0 + shares[s + 1]! * y0);
+    if (legs.bending[e] === 0) continue;
+    const across = shares[s + 6]! * x1 + shares[s + 7]! * y1 - (shares[s + 2]! * x0 + shares[s + 3]! * y0);
+    const chord = across / legs.length[e]!;
+    strains[3 * e + 1]! += movement[freedoms[f + 2]!]! - chord;
+    strains[3 * e + 2]! += movement[freedoms[f + 5]!]! - chord;
+  }
+}
+
+/** Takes from the forces on the freedoms what holds the legs' natural forces (three a leg, doing work on the strains) in place. */
+export function subtractForces(legs: Legs, ends: Ends, natural: Float64Array, force: Float64Array): void {
+  const { freedoms, shares } = ends;
+  for (let e = 0; e < legs.count; e++) {
+    const f = 6 * e;
+    const s = 8 * e;
+    const axial = natural[3 * e]!;
+    const start = natural[3 * e + 1]!;
+    const end = natural[3 * e + 2]!;
+    const shear = -(start + end) / legs.length[e]!;
+    force[freedoms[f]!]! += shares[s]! * axial + shares[s + 2]! * shear;
+    force[freedoms[f + 1]!]! += shares[s + 1]! * axial + shares[s + 3]! * shear;
+    force[freedoms[f + 3]!]! -= shares[s + 4]! * axial + shares[s + 6]! * shear;
+    force[freedoms[f + 4]!]! -= shares[s + 5]! * axial + shares[s + 7]! * shear;
+    if (legs.bending[e] === 0) continue;
+    force[freedoms[f + 2]!]! -= start;
+    force[freedoms[f + 5]!]! -= end;
+  }
+}
+
+/**
+ * The strains as linear forms in the unknowns: item i, a leg or, behind the legs, a spring, has the unknowns
+ * `unknowns[starts[i]]` up to `unknowns[starts[i + 1]]`, each with its share in the lengthening (of a spring: its
+ * shortening) and in the turning of both ends.
+ */
+export interface StrainRows {
+  readonly count: number;
+  readonly starts: Int32Array;
+  readonly unknowns: Int32Array;
+  readonly lengthening: Float64Array;
+  readonly startTurning: Float64Array;
+  readonly endTurning: Float64Array;
+}
+
+export function strainRows(legs: Legs, ends: Ends, freedoms: Freedoms, reduction: Reduction): StrainRows {
+  const count = legs.count + freedoms.springs.length;
+  const starts = new Int32Array(count + 1);
+  const capacity = countTerms(ends, freedoms, reduction);
+  const unknowns = new Int32Array(capacity);
+  const lengthening = new Float64Array(capacity);
+  const startTurning = new Float64Array(capacity);
+  const endTurning = new Float64Array(capacity);
+  // Where an unknown stands in the row under way, if it is there already.
+  const places = new Int32Array(reduction.size).fill(-1);
+  let filled = 0;
+  let rowStart = 0;
+
+  const add = (freedom: number, length: number, start: number, end: number) => {
+    for (let k = reduction.starts[freedom]!; k < reduction.starts[freedom + 1]!; k++) {
+      const unknown = reduction.unknowns[k]!;
+      const value = reduction.values[k]!;
+      let place = places[unknown]!;
+      if (place < rowStart) {
+        place = filled++;
+        places[unknown] = place;
+        unknowns[place] = unknown;
+      }
+      lengthening[place]! += value * length;
+      startTurning[place]! += value * start;
+      endTurning[place]! += value * end;
+    }
+  };
+
+  for (let e = 0; e < legs.count; e++) {
+    rowStart = filled;
+    const bends = legs.bending[e] !== 0;
+    const turning = bends ? 1 / legs.length[e]! : 0;
+    for (let end = 0; end < 2; end++) {
+      const sign = end === 0 ? -1 : 1;
+      const f = 6 * e + 3 * end;
+      const s = 8 * e + 4 * end;
+      for (let k = 0; k < 2; k++) {
+        const chord = -sign * ends.shares[s + 2 + k]! * turning;
+        add(ends.freedoms[f + k]!, sign * ends.shares[s + k]!, chord, chord);
+      }
+      if (bends) add(ends.freedoms[f + 2]!, 0, end === 0 ? 1 : 0, end === 0 ? 0 : 1);
+    }
+    starts[e + 1] = filled;
+  }
+  freedoms.springs.forEach((spring, k) => {
+    rowStart = filled;
+    spring.freedoms.forEach((freedom, i) => {
+      add(freedom, spring.coefficients[i]!, 0, 0);
+    });
+    starts[legs.count + k + 1] = filled;
+  });
+  return { count, starts, unknowns, lengthening, startTurning, endTurning };
+}
+
+/** No fewer terms than the rows will have. */
+function countTerms(ends: Ends, freedoms: Freedoms, reduction: Reduction): number {
+  let terms = 0;
+  const count = (freedom: number) => {
+    if (freedom >= 0) terms += reduction.starts[freedom + 1]! - reduction.starts[freedom]!;
+  };
+  for (let k = 0; k < ends.freedoms.length; k++) count(ends.freedoms[k]!);
+  for (const spring of freedoms.springs) for (const freedom of spring.freedoms) count(freedom);
+  return terms;
+}
