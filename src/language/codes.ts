@@ -30,6 +30,7 @@ export const CODES = {
   'chain-gap': 'A chain does not close on a point already placed.',
   'point-not-placed': 'A point that nothing places.',
   'missing-property': 'A section or a material lacks a figure that is needed.',
+  'assumed-modulus': 'A section from a table gives no modulus, and that of a symmetrical section is taken.',
   'bad-support': 'A support that cannot be read, or stands where nothing is.',
   'bad-load': 'A load that cannot act where it is put.',
   'unused-case': 'A case that has loads and is in no combination.',

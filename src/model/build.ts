@@ -143,7 +143,7 @@ const UNKNOWN_SECTION: Section = {
   range: { start: 0, end: 0 },
 };
 
-function toSection(definition: Definition, { properties, material, description }: SectionFigures): Section {
+function toSection(definition: Definition, { properties, material, modulusAssumed, description }: SectionFigures): Section {
   const value = (key: string): number | undefined => properties.get(key)?.value;
   return {
     name: definition.name,
@@ -153,6 +153,7 @@ function toSection(definition: Definition, { properties, material, description }
     axialStiffness: value('EA'),
     massPerLength: value('mass'),
     sectionModulus: value('modulus'),
+    sectionModulusAssumed: modulusAssumed,
     area: value('A'),
     secondMomentOfArea: value('I'),
     youngsModulus: value('E'),

@@ -115,12 +115,10 @@ class Layout {
     }
   }
 
-  /** The first point of a structure stands at the origin unless placed, by a line of its own before the chain or anywhere. */
+  /** The first point of a structure's first chain stands at the origin unless a line of its own places it. */
   #placeFirst(strands: readonly Strand[]): void {
     const [first] = strands;
     if (first === undefined || this.#pointNamed.has(first.chain.first.text)) return;
-    const given = this.#scope.statements.find(isCoordinates);
-    if (given !== undefined && given.range.start < first.range.start) return;
     const name = first.chain.first.text;
     const onMember = this.#scope.statements.some(statement => statement.kind === 'point' && statement.name.text === name);
     if (!onMember) this.#place(first.chain.first, { x: 0, y: 0 });
@@ -522,10 +520,6 @@ function senseOf(
 
 function isStrand(statement: Statement): statement is Strand {
   return statement.kind === 'member' || statement.kind === 'bar' || statement.kind === 'bars';
-}
-
-function isCoordinates(statement: Statement): boolean {
-  return statement.kind === 'point' && statement.at.kind === 'coordinates';
 }
 
 function isOnMember(statement: Statement): statement is StatementOf<'point'> {

@@ -32,6 +32,8 @@ export type Properties = ReadonlyMap<string, Quantity>;
 export interface SectionFigures {
   readonly properties: Properties;
   readonly material: string | undefined;
+  /** The modulus is neither given nor a shape's: it is 2 I / depth, which holds for a symmetrical section. */
+  readonly modulusAssumed: boolean;
   /** In the writer's words: `box 100 mm × 200 mm × 6 mm, S355`. */
   readonly description: string;
   readonly statement: StatementOf<'section'>;
@@ -104,10 +106,13 @@ export class Library {
 
   /** `NAME of X` for a section or a material. */
   property(definition: Definition, property: Name): Quantity | undefined {
-    const isSection = definition.namespace === 'section';
-    const properties = isSection ? this.section(definition)?.properties : this.material(definition);
+    const section = definition.namespace === 'section' ? this.section(definition) : undefined;
+    const properties = section?.properties ?? (definition.namespace === 'material' ? this.material(definition) : undefined);
     if (properties === undefined) return undefined;
     const found = properties.get(property.text);
+    if (found !== undefined && property.text === 'modulus' && section?.modulusAssumed) {
+      this.#report.hint('assumed-modulus', property.range, assumedModulus(definition.name), ASSUMED_MODULUS_REMEDY);
+    }
     if (found !== undefined) return found;
     const close = nearest(property.text, properties.keys());
     this.#report.error('missing-property', property.range, `${definition.name} has no ${property.text}.`, {
@@ -179,12 +184,13 @@ export class Library {
     reading.checkTurned(shaped);
     if (!reading.sound) return undefined;
     const properties = new Map([...(material?.properties ?? []), ...shaped, ...given]);
+    const modulusAssumed = reading.modulusAssumed || !properties.has('modulus');
     derive(properties);
     const description = statement.items
       .map(this.#wordsOf)
       .join(', ')
       .replace(/ x /g, ' × ');
-    return { properties, material: material?.name, description, statement };
+    return { properties, material: material?.name, modulusAssumed, description, statement };
   }
 
   #materialOf(
@@ -223,6 +229,7 @@ export class Library {
       reading.sound = false;
       this.#report.error('bad-statement', item.range, `${item.section.text} is of ${base.material} already, not of ${material.name}.`);
     }
+    reading.modulusAssumed = base.modulusAssumed && base.properties.has('modulus');
     for (const [key, { value, dimension }] of base.properties) {
       if (key === 'width' && item.count > 1) continue;
       into.set(key, ADDED.has(key) ? { value: value * item.count, dimension } : { value, dimension });
@@ -233,6 +240,8 @@ export class Library {
 /** One section's statement while its parts are read. */
 class SectionReading {
   sound = true;
+  /** The section that it is made of takes its modulus for that of a symmetrical one. */
+  modulusAssumed = false;
   readonly figures: Figures;
   readonly #statement: StatementOf<'section'>;
   readonly #definition: Definition;
@@ -301,6 +310,12 @@ class SectionReading {
   }
 }
 
+export function assumedModulus(section: string): string {
+  return `${section} gives no modulus: 2 I / depth is taken, that of a symmetrical section.`;
+}
+
+export const ASSUMED_MODULUS_REMEDY = { hint: 'give its smaller modulus: modulus 351 cm3' } as const;
+
 const MAY_BE_ZERO = new Set(['density', 'alpha']);
 
 function inBounds(key: string, value: number): boolean {
@@ -324,4 +339,8 @@ function derive(properties: Map<string, Quantity>): void {
   set('EA', 'E', 'A', FORCE);
   set('GAs', 'G', 'shear-area', FORCE);
   set('mass', 'density', 'A', MASS_PER_LENGTH);
+  const [inertia, depth] = [properties.get('I'), properties.get('depth')];
+  if (!properties.has('modulus') && inertia !== undefined && depth !== undefined) {
+    properties.set('modulus', { value: (2 * inertia.value) / depth.value, dimension: SECTION_MODULUS });
+  }
 }

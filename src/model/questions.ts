@@ -4,6 +4,7 @@ import type { Dimension } from '../quantity/dimension.ts';
 import { ANGLE, FORCE, LENGTH, MOMENT, STRESS } from '../quantity/dimension.ts';
 import type { Figures } from './figures.ts';
 import { distanceOf, type Geometry } from './geometry.ts';
+import { ASSUMED_MODULUS_REMEDY, assumedModulus } from './library.ts';
 import { endsAt, membersNamed, readPlace, readStretch } from './loads.ts';
 import type { ResolvedMeasure } from './question.ts';
 import type { Report } from './report.ts';
@@ -180,7 +181,11 @@ class MeasureReader {
       const member = this.#structure.members[index]!;
       for (const leg of member.legs) {
         const section = this.#structure.sections[leg.section]!;
-        const missing = section.area === undefined ? 'area A' : section.sectionModulus === undefined && member.kind === 'member' ? 'modulus' : undefined;
+        const needsModulus = member.kind === 'member';
+        if (needsModulus && section.sectionModulusAssumed && section.sectionModulus !== undefined) {
+          this.#report.hint('assumed-modulus', this.#measure.range, assumedModulus(section.name), ASSUMED_MODULUS_REMEDY);
+        }
+        const missing = section.area === undefined ? 'area A' : section.sectionModulus === undefined && needsModulus ? 'modulus' : undefined;
         if (missing === undefined || !sound) continue;
         sound = false;
         this.#report.error('missing-property', this.#measure.range, `A stress in ${member.name} needs an area and a section modulus, and ${section.name} has no ${missing}.`, {

@@ -43,6 +43,8 @@ export interface Section {
   readonly massPerLength: number | undefined;
   /** The smaller elastic modulus, m³. */
   readonly sectionModulus: number | undefined;
+  /** It is neither given nor a shape's, but 2 I / depth. */
+  readonly sectionModulusAssumed?: boolean;
   /** m². */
   readonly area: number | undefined;
   /** m⁴, about the axis of bending. */

@@ -89,7 +89,7 @@ export class NoteEvaluation {
     }
     const structures = this.#states.map((state, index) => this.#structureResult(state, index, answers));
     this.#reportHead();
-    for (const state of this.#states) remarksOn(state, this.#inputs.scopes.head, answers, this.#states.indexOf(state));
+    for (const state of this.#states) remarksOn(state, this.#inputs.scopes.head);
     return { structures, answers, values };
   }
 

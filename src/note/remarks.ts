@@ -2,13 +2,15 @@
 // up, a limit without a source.
 import type { Under } from '../language/syntax.ts';
 import type { Scope } from '../model/scope.ts';
-import type { Answer } from './result.ts';
 import type { StructureState } from './structure-state.ts';
 
-export function remarksOn(state: StructureState, head: Scope, answers: readonly Answer[], index: number): void {
+export function remarksOn(state: StructureState, head: Scope): void {
   limitsWithoutSource(state);
+  showsNotDrawn(state);
   // Where something is missing from the structure, what is used and what is not cannot be told.
-  if (!state.report.flawed) unusedCases(state, head, answers, index);
+  if (state.withheld !== undefined) return;
+  unusedCases(state, head);
+  casesWithoutLoad(state);
 }
 
 function limitsWithoutSource({ scope, report }: StructureState): void {
@@ -20,34 +22,61 @@ function limitsWithoutSource({ scope, report }: StructureState): void {
   }
 }
 
-/** A case is used by a combination of its structure or of the head, by a question of its own, or as the only case there is. */
-function unusedCases(state: StructureState, head: Scope, answers: readonly Answer[], index: number): void {
-  const { scope, report } = state;
+/**
+ * A case is used by a combination of its structure or of the head, or by a question of its own. Without a combination and
+ * without a question there is nothing yet that it could be used by.
+ */
+function unusedCases({ scope, report }: StructureState, head: Scope): void {
+  const statements = [...head.statements, ...scope.statements];
   const used = new Set<string>();
   let combined = false;
-  for (const statement of [...head.statements, ...scope.statements]) {
+  let asked = false;
+  let askedAtLarge = false;
+  for (const statement of statements) {
     if (statement.kind === 'combine') {
       combined = true;
       for (const term of statement.terms) used.add(term.case.text);
     }
-    const under = statement.kind === 'find' || statement.kind === 'require' ? statement.under : undefined;
-    for (const name of caseAsked(under)) used.add(name);
-    if (statement.kind === 'show' && 'under' in statement.show) for (const name of caseAsked(statement.show.under)) used.add(name);
+    if (statement.kind === 'show' && 'under' in statement.show) useCase(statement.show.under, used);
+    if (statement.kind !== 'find' && statement.kind !== 'require') continue;
+    asked = true;
+    askedAtLarge ||= statement.under === undefined;
+    useCase(statement.under, used);
   }
-  for (const answer of answers) if (answer.structure === index && answer.under !== null) used.add(answer.under);
-  const named = new Map(scope.statements.flatMap(statement => (statement.kind === 'load' ? [[statement.case.text, statement.case.range] as const] : [])).reverse());
-  for (const [name, range] of [...named].reverse()) {
-    if (used.has(name)) continue;
+  if (combined ? false : !asked || askedAtLarge) return;
+  const told = new Set<string>();
+  for (const statement of statements) {
+    if (statement.kind !== 'load' || used.has(statement.case.text) || told.has(statement.case.text)) continue;
+    const { text, range } = statement.case;
+    told.add(text);
     const what = combined ? 'is in no combination, and nothing asks about it alone' : 'is asked about by nothing';
-    report.warn('unused-case', range, `${name} ${what}: its loads count nowhere.`, { hint: `add it to a combination, or ask under ${name}` });
-  }
-  for (const statement of scope.statements) {
-    if (statement.kind === 'case' && !named.has(statement.name.text)) {
-      report.warn('unused-case', statement.name.range, `${statement.name.text} has no load.`, { hint: 'give it one, or take the line out' });
-    }
+    report.warn('unused-case', range, `${text} ${what}: its loads count nowhere.`, {
+      hint: `add it to a combination, or ask under ${text}`,
+    });
   }
 }
 
-function caseAsked(under: Under | undefined): string[] {
-  return under?.kind === 'named' ? [under.name.text] : [];
+/** A case that has a title and no load, in the structure that names it. */
+function casesWithoutLoad({ scope, report }: StructureState): void {
+  const loaded = new Set(scope.statements.flatMap(statement => (statement.kind === 'load' ? [statement.case.text] : [])));
+  for (const statement of scope.statements) {
+    if (statement.kind !== 'case' || loaded.has(statement.name.text)) continue;
+    report.warn('unused-case', statement.name.range, `${statement.name.text} has no load.`, {
+      hint: 'give it one, or take the line out',
+    });
+  }
+}
+
+/** What a page is asked to show and this version does not work out yet. */
+function showsNotDrawn({ scope, report }: StructureState): void {
+  for (const statement of scope.statements) {
+    if (statement.kind !== 'show') continue;
+    const what = { working: 'The working', contributions: 'The table of contributions' }[statement.show.kind as string];
+    if (what === undefined) continue;
+    report.hint('not-evaluated-yet', statement.show.range, `${what} is not drawn by this version; the page leaves it out.`);
+  }
+}
+
+function useCase(under: Under | undefined, used: Set<string>): void {
+  if (under?.kind === 'named') used.add(under.name.text);
 }
