@@ -35,10 +35,21 @@ export function buildStructure(building: Building): Structure {
   for (const { only, name } of geometry.members) {
     if (only === undefined) continue;
     report.flawed = true;
-    report.error('not-evaluated-yet', only.range, `That ${name} ${only.kind} only is read but not evaluated by this version: its answers are withheld.`);
+    report.error(
+      'not-evaluated-yet',
+      only.range,
+      `That ${name} ${only.kind} only is read but not evaluated by this version: its answers are withheld.`,
+    );
   }
-  const sectionOf = (member: number, leg: number): Section | undefined => sections.list[members[member]!.legs[leg]!.section];
-  const { cases, loads } = readLoads(scope, building.titles, { geometry, supports, hinges, sectionOf }, figures, report);
+  const sectionOf = (member: number, leg: number): Section | undefined =>
+    sections.list[members[member]!.legs[leg]!.section];
+  const { cases, loads } = readLoads(
+    scope,
+    building.titles,
+    { geometry, supports, hinges, sectionOf },
+    figures,
+    report,
+  );
   const title = scope.structure?.title?.text;
   return {
     name: scope.name ?? '',
@@ -105,14 +116,25 @@ class Sections {
   #onlySection(member: LaidMember): Definition | undefined {
     const { names, scope, report } = this.#building;
     const inReach = names.entries.filter(
-      ({ namespace, structure, scope: owner }) => namespace === 'section' && (owner === scope || structure === undefined),
+      ({ namespace, structure, scope: owner }) =>
+        namespace === 'section' && (owner === scope || structure === undefined),
     );
     const [only, another] = inReach;
     if (only !== undefined && another === undefined) return only;
     if (this.#told.has(member.name) || scope.broken.some(({ keyword }) => keyword === 'section')) return undefined;
     this.#told.add(member.name);
-    const hint = only === undefined ? 'describe one: section S: solid 50 mm x 200 mm, E 11 GPa' : `write ${member.kind} ${member.name}, ${only.name}: …`;
-    report.error('missing-property', member.range, only === undefined ? `${member.name} has no section, and there is none to take.` : `There are several sections: say which ${member.name} has.`, { hint });
+    const hint =
+      only === undefined
+        ? 'describe one: section S: solid 50 mm x 200 mm, E 11 GPa'
+        : `write ${member.kind} ${member.name}, ${only.name}: …`;
+    report.error(
+      'missing-property',
+      member.range,
+      only === undefined
+        ? `${member.name} has no section, and there is none to take.`
+        : `There are several sections: say which ${member.name} has.`,
+      { hint },
+    );
     return undefined;
   }
 
@@ -121,10 +143,15 @@ class Sections {
     this.#told.add(definition.name);
     this.#building.report.flawed = true;
     const missing = !properties.has('E') && !properties.has('I') ? 'E and I, or EI' : properties.has('E') ? 'I' : 'E';
-    this.#building.report.error('missing-property', definition.definition, `${definition.name} has no bending stiffness, and ${member.name} bends: ${missing} is missing.`, {
-      hint: missing === 'E' ? 'name a material with an E, or give EI' : 'give EI, or I and a material with an E',
-      related: [{ range: member.range, message: `${member.name} has this section.` }],
-    });
+    this.#building.report.error(
+      'missing-property',
+      definition.definition,
+      `${definition.name} has no bending stiffness, and ${member.name} bends: ${missing} is missing.`,
+      {
+        hint: missing === 'E' ? 'name a material with an E, or give EI' : 'give EI, or I and a material with an E',
+        related: [{ range: member.range, message: `${member.name} has this section.` }],
+      },
+    );
   }
 }
 
@@ -143,7 +170,10 @@ const UNKNOWN_SECTION: Section = {
   range: { start: 0, end: 0 },
 };
 
-function toSection(definition: Definition, { properties, material, modulusAssumed, description }: SectionFigures): Section {
+function toSection(
+  definition: Definition,
+  { properties, material, modulusAssumed, description }: SectionFigures,
+): Section {
   const value = (key: string): number | undefined => properties.get(key)?.value;
   return {
     name: definition.name,
@@ -174,7 +204,11 @@ function readHinges({ scope, geometry, report }: Building): Hinge[] {
     }
     if (member !== undefined && distanceOf(geometry.members[member]!, point) === undefined) {
       report.flawed = true;
-      report.error('bad-geometry', statement.member!.range, `${statement.member!.text} does not run through ${statement.point.text}.`);
+      report.error(
+        'bad-geometry',
+        statement.member!.range,
+        `${statement.member!.text} does not run through ${statement.point.text}.`,
+      );
       continue;
     }
     hinges.push({ point, range: statement.point.range, ...(member === undefined ? {} : { member }) });

@@ -55,7 +55,9 @@ export function readCombinations(
   const combinations: CombinationModel[] = [];
   for (const [name, statements] of lines) {
     const read = statements.map(statement => readLine(statement, cases, figures, wordsOf, report));
-    const broken = scope.broken.some(line => line.keyword === 'combine' && (line.name === undefined || line.name === name));
+    const broken = scope.broken.some(
+      line => line.keyword === 'combine' && (line.name === undefined || line.name === name),
+    );
     combinations.push({
       name,
       kind: 'combination',
@@ -89,9 +91,14 @@ function readLine(
   }
   const doubled = statement.terms.filter(term => term.sign === '+-').length;
   if (2 ** doubled > MOST_ALTERNATIVES) {
-    report.error('too-large', statement.range, `${doubled} signs +- make ${2 ** doubled} alternatives; at most ${MOST_ALTERNATIVES} are worked.`, {
-      hint: 'write the alternatives that matter as lines of their own',
-    });
+    report.error(
+      'too-large',
+      statement.range,
+      `${doubled} signs +- make ${2 ** doubled} alternatives; at most ${MOST_ALTERNATIVES} are worked.`,
+      {
+        hint: 'write the alternatives that matter as lines of their own',
+      },
+    );
     return undefined;
   }
   const sum = wordsOf({ start: statement.terms[0]!.range.start, end: statement.terms.at(-1)!.range.end });
@@ -109,7 +116,13 @@ function signs(doubled: number, choice: number): string {
   return text;
 }
 
-function alternative(statement: Line, factors: readonly number[], cases: readonly LoadCase[], sum: string, chosen: string): AlternativeModel {
+function alternative(
+  statement: Line,
+  factors: readonly number[],
+  cases: readonly LoadCase[],
+  sum: string,
+  chosen: string,
+): AlternativeModel {
   const name = statement.name.text;
   const line = statement.label?.text;
   const label = `${line ?? ''}${chosen}`;
@@ -135,7 +148,9 @@ function signOf(term: Term, chosen: string | undefined): 1 | -1 {
 }
 
 /** What `under` asks for, or why it asks for nothing. */
-export type Asked = { readonly alternatives: readonly AlternativeModel[]; readonly sound: boolean } | { readonly problem: string; readonly hint: string };
+export type Asked =
+  | { readonly alternatives: readonly AlternativeModel[]; readonly sound: boolean }
+  | { readonly problem: string; readonly hint: string };
 
 /**
  * The alternatives behind `under`, or those that are meant where it is left out: the only combination, or the only case
@@ -145,16 +160,28 @@ export function alternativesUnder(under: Under | undefined, combinations: readon
   const summed = combinations.filter(({ kind }) => kind === 'combination');
   if (under === undefined) return leftOut(combinations, summed);
   if (under.kind === 'all') {
-    if (summed.length === 0) return { problem: 'There is no combination.', hint: 'write one: combine service: dead + …' };
-    return { alternatives: summed.flatMap(({ alternatives }) => alternatives), sound: summed.every(({ sound }) => sound) };
+    if (summed.length === 0)
+      return { problem: 'There is no combination.', hint: 'write one: combine service: dead + …' };
+    return {
+      alternatives: summed.flatMap(({ alternatives }) => alternatives),
+      sound: summed.every(({ sound }) => sound),
+    };
   }
   const found = combinations.find(({ name }) => name === under.name.text);
-  if (found === undefined) return { problem: `This structure has no load of ${under.name.text}.`, hint: 'ask under a combination or a case that it has' };
+  if (found === undefined)
+    return {
+      problem: `This structure has no load of ${under.name.text}.`,
+      hint: 'ask under a combination or a case that it has',
+    };
   if (under.label === undefined) return found;
   const label = under.label.text;
-  const alternatives = found.alternatives.filter(alternative => alternative.label === label || alternative.line === label);
+  const alternatives = found.alternatives.filter(
+    alternative => alternative.label === label || alternative.line === label,
+  );
   if (alternatives.length > 0) return { alternatives, sound: found.sound };
-  const labels = found.alternatives.flatMap(alternative => (alternative.label === undefined ? [] : [`(${alternative.label})`]));
+  const labels = found.alternatives.flatMap(alternative =>
+    alternative.label === undefined ? [] : [`(${alternative.label})`],
+  );
   return {
     problem: `${found.name} has no alternative (${label}).`,
     hint: labels.length === 0 ? `${found.name} has one line, without a label` : `it has ${labels.join(', ')}`,

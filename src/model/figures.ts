@@ -3,18 +3,18 @@
 import type { Operand, Value } from '../language/syntax.ts';
 import {
   type Dimension,
+  divideDimensions,
   FORCE,
   FORCE_PER_LENGTH,
   LENGTH,
-  multiplyDimensions,
-  divideDimensions,
   MOMENT,
+  multiplyDimensions,
   sameDimension,
 } from '../quantity/dimension.ts';
+import { dimensionName } from '../quantity/dimension-names.ts';
 import { evaluate } from '../quantity/evaluate.ts';
 import type { Problem } from '../quantity/problem.ts';
 import type { Quantity } from '../quantity/quantity.ts';
-import { dimensionName } from '../quantity/dimension-names.ts';
 import type { Report } from './report.ts';
 
 /** What a figure must be, for its check and for the message. */

@@ -120,7 +120,9 @@ class Layout {
     const [first] = strands;
     if (first === undefined || this.#pointNamed.has(first.chain.first.text)) return;
     const name = first.chain.first.text;
-    const onMember = this.#scope.statements.some(statement => statement.kind === 'point' && statement.name.text === name);
+    const onMember = this.#scope.statements.some(
+      statement => statement.kind === 'point' && statement.name.text === name,
+    );
     if (!onMember) this.#place(first.chain.first, { x: 0, y: 0 });
   }
 
@@ -149,7 +151,10 @@ class Layout {
     const { statement, passed } = progress;
     const { chain } = statement;
     if (progress.next < 0) {
-      if (!this.#pointNamed.has(chain.first.text)) return this.#wait(progress, chain.first);
+      if (!this.#pointNamed.has(chain.first.text)) {
+        this.#wait(progress, chain.first);
+        return;
+      }
       passed.add(chain.first.text);
       progress.next = 0;
     }
@@ -166,7 +171,11 @@ class Layout {
   /** Brings the leg's far point to stand; false where it has to wait or cannot be. */
   #layLeg(leg: ChainLeg, from: Name, passed: Set<string>, progress: Progress): boolean {
     if (passed.has(leg.to.text)) {
-      this.#fault(leg.to.range, `${leg.to.text} stands twice in this chain.`, 'end the chain here and begin another member');
+      this.#fault(
+        leg.to.range,
+        `${leg.to.text} stands twice in this chain.`,
+        'end the chain here and begin another member',
+      );
       return false;
     }
     const start = this.#points[this.#pointNamed.get(from.text)!]!;
@@ -251,8 +260,7 @@ class Layout {
     const [dx, dy] = [placed.x - start.x, placed.y - start.y];
     const length = Math.hypot(to.x - start.x, to.y - start.y);
     const along = ((to.x - start.x) * dx + (to.y - start.y) * dy) / length;
-    const needed =
-      Math.abs(along - Math.hypot(dx, dy)) <= CLOSING_TOLERANCE * size ? metres(along) : headings(dx, dy);
+    const needed = Math.abs(along - Math.hypot(dx, dy)) <= CLOSING_TOLERANCE * size ? metres(along) : headings(dx, dy);
     const short = along > length ? 'short of' : along < length ? 'past' : 'beside';
     this.#report.error(
       'chain-gap',
@@ -271,10 +279,15 @@ class Layout {
     if (statement.kind === 'bar' && statement.chain.legs.length > 1) {
       const keyword = statement.keyword;
       this.#report.flawed = true;
-      this.#report.error('bad-geometry', statement.chain.range, `A bar runs between two points; this chain has ${statement.chain.legs.length + 1}.`, {
-        hint: `write bars ${statement.name.text} for a chain of bars, or member`,
-        fix: { title: 'Make it a chain of bars', edits: [{ range: keyword, text: 'bars' }] },
-      });
+      this.#report.error(
+        'bad-geometry',
+        statement.chain.range,
+        `A bar runs between two points; this chain has ${statement.chain.legs.length + 1}.`,
+        {
+          hint: `write bars ${statement.name.text} for a chain of bars, or member`,
+          fix: { title: 'Make it a chain of bars', edits: [{ range: keyword, text: 'bars' }] },
+        },
+      );
       return;
     }
     if (statement.kind === 'bars') {
@@ -288,7 +301,13 @@ class Layout {
     this.#addMember(statement.name.text, statement.kind, statement, statement.chain.first, statement.chain.legs);
   }
 
-  #addMember(name: string, kind: 'member' | 'bar', statement: Strand, first: Name, chainLegs: readonly ChainLeg[]): number {
+  #addMember(
+    name: string,
+    kind: 'member' | 'bar',
+    statement: Strand,
+    first: Name,
+    chainLegs: readonly ChainLeg[],
+  ): number {
     const legs: LaidLeg[] = [];
     let from = this.#pointNamed.get(first.text)!;
     let start = 0;
@@ -346,7 +365,12 @@ class Layout {
       return;
     }
     if (member.kind === 'bar') {
-      return this.#fault(at.range, `${member.name} is a bar and runs straight between its two points.`, 'make it a member, or two bars');
+      this.#fault(
+        at.range,
+        `${member.name} is a bar and runs straight between its two points.`,
+        'make it a member, or two bars',
+      );
+      return;
     }
     const cut = member.legs.findIndex(leg => distance <= leg.start + leg.length);
     const leg = member.legs[cut] ?? member.legs.at(-1)!;
@@ -355,7 +379,8 @@ class Layout {
     const near = offset <= slack ? leg.from : leg.length - offset <= slack ? leg.to : undefined;
     if (near !== undefined) {
       const other = this.#points[near]!.name;
-      return this.#fault(name.range, `${name.text} would stand on ${other}.`, `use ${other} instead`);
+      this.#fault(name.range, `${name.text} would stand on ${other}.`, `use ${other} instead`);
+      return;
     }
     const base = this.#points[leg.from]!;
     const point = this.#place(name, { x: base.x + offset * leg.cosine, y: base.y + offset * leg.sine });
@@ -401,7 +426,11 @@ class Layout {
     const name = next < 0 ? chain.first : chain.legs[next]!.to;
     // Where another chain could not be laid, and that was told, this one only follows from it.
     const placer = this.#scope.statements.some(
-      other => other !== statement && isStrand(other) && !this.#laid.has(other) && other.chain.legs.some(leg => leg.to.text === name.text && leg.dimension !== undefined),
+      other =>
+        other !== statement &&
+        isStrand(other) &&
+        !this.#laid.has(other) &&
+        other.chain.legs.some(leg => leg.to.text === name.text && leg.dimension !== undefined),
     );
     const onMember = this.#scope.statements.some(other => isOnMember(other) && other.name.text === name.text);
     if (placer || onMember) return;
@@ -409,7 +438,9 @@ class Layout {
     this.#report.error(
       'point-not-placed',
       name.range,
-      start ? `${name.text} is not placed, so this chain has nowhere to start.` : `${name.text} is not placed, and no dimension leads to it.`,
+      start
+        ? `${name.text} is not placed, so this chain has nowhere to start.`
+        : `${name.text} is not placed, and no dimension leads to it.`,
       {
         hint: start
           ? `start at a point that stands already, or place this one: point ${name.text}: 0 m, 0 m`
@@ -430,10 +461,15 @@ class Layout {
         }
         const names = [this.#points[leg.from]!.name, this.#points[leg.to]!.name];
         this.#report.flawed = true;
-        this.#report.error('bad-geometry', member.range, `${member.name} and ${first.name} lie on the same line between ${names[0]} and ${names[1]}.`, {
-          hint: 'take one away, or make it 2 x the section',
-          related: [{ range: first.range, message: `${first.name} stands here.` }],
-        });
+        this.#report.error(
+          'bad-geometry',
+          member.range,
+          `${member.name} and ${first.name} lie on the same line between ${names[0]} and ${names[1]}.`,
+          {
+            hint: 'take one away, or make it 2 x the section',
+            related: [{ range: first.range, message: `${first.name} stands here.` }],
+          },
+        );
       }
     }
     const places = new Map<string, Point>();
@@ -443,10 +479,15 @@ class Layout {
       const first = places.get(cell);
       if (first === undefined) places.set(cell, point);
       else {
-        this.#report.warn('bad-geometry', point.range, `${point.name} stands where ${first.name} stands, and the two are not joined.`, {
-          hint: `use ${first.name} for both where they are one joint`,
-          related: [{ range: first.range, message: `${first.name} is placed here.` }],
-        });
+        this.#report.warn(
+          'bad-geometry',
+          point.range,
+          `${point.name} stands where ${first.name} stands, and the two are not joined.`,
+          {
+            hint: `use ${first.name} for both where they are one joint`,
+            related: [{ range: first.range, message: `${first.name} is placed here.` }],
+          },
+        );
       }
     }
   }
@@ -463,7 +504,21 @@ class Layout {
 }
 
 /** Keywords that place nothing: a broken line of theirs leaves the geometry whole. */
-const HARMLESS = new Set(['load', 'case', 'combine', 'find', 'require', 'show', 'display', 'assume', 'material', 'section', 'support', 'hinge', 'let']);
+const HARMLESS = new Set([
+  'load',
+  'case',
+  'combine',
+  'find',
+  'require',
+  'show',
+  'display',
+  'assume',
+  'material',
+  'section',
+  'support',
+  'hinge',
+  'let',
+]);
 
 /** A place `2.4 m from A on R1` as a distance from the member's first point; undefined where it is none (reported). */
 export function locateOnMember(
@@ -478,13 +533,17 @@ export function locateOnMember(
   if (distance === undefined || from === undefined) return undefined;
   const start = distanceOf(member, from);
   if (start === undefined) {
-    report.error('bad-geometry', at.from.range, `${at.from.text} is not on ${member.name}.`, { hint: `measure from a point of ${member.name}` });
+    report.error('bad-geometry', at.from.range, `${at.from.text} is not on ${member.name}.`, {
+      hint: `measure from a point of ${member.name}`,
+    });
     return undefined;
   }
   const sense = senseOf(at, member, start, pointNamed, report);
   if (sense === undefined) return undefined;
   if (distance < 0) {
-    report.error('bad-geometry', at.distance.range, `A distance along ${member.name} is never negative.`, { hint: 'say towards which point it is measured' });
+    report.error('bad-geometry', at.distance.range, `A distance along ${member.name} is never negative.`, {
+      hint: 'say towards which point it is measured',
+    });
     return undefined;
   }
   const room = sense > 0 ? member.length - start : start;
@@ -512,7 +571,13 @@ function senseOf(
   const point = pointNamed.get(at.towards.text);
   const towards = point === undefined ? undefined : distanceOf(member, point);
   if (point !== undefined && (towards === undefined || towards === start)) {
-    report.error('bad-geometry', at.towards.range, towards === undefined ? `${at.towards.text} is not on ${member.name}.` : `${at.towards.text} gives no direction from itself.`);
+    report.error(
+      'bad-geometry',
+      at.towards.range,
+      towards === undefined
+        ? `${at.towards.text} is not on ${member.name}.`
+        : `${at.towards.text} gives no direction from itself.`,
+    );
   }
   if (towards === undefined || towards === start) return undefined;
   return towards > start ? 1 : -1;

@@ -5,26 +5,26 @@ import {
   AREA,
   BENDING_STIFFNESS,
   DENSITY,
-  type Dimension,
   DIMENSIONLESS,
+  type Dimension,
   FORCE,
   LENGTH,
   MASS_PER_LENGTH,
   PER_TEMPERATURE,
-  sameDimension,
   SECOND_MOMENT_OF_AREA,
   SECTION_MODULUS,
   STRESS,
+  sameDimension,
   UNIT_WEIGHT,
 } from '../quantity/dimension.ts';
 import { nearest } from '../quantity/nearest.ts';
 import type { Quantity } from '../quantity/quantity.ts';
-import { type Due, Figures } from './figures.ts';
+import type { Due, Figures } from './figures.ts';
 import { A_LENGTH } from './geometry.ts';
 import { STANDARD_GRAVITY } from './gravity.ts';
 import type { Definition, Names } from './names.ts';
 import type { Report } from './report.ts';
-import { shapeProblem, shapeProperties, SHAPE_DIMENSIONS } from './shapes.ts';
+import { SHAPE_DIMENSIONS, shapeProblem, shapeProperties } from './shapes.ts';
 
 /** Figures by the writer's words for them: `E`, `I`, `modulus`, `fy` …; SI. */
 export type Properties = ReadonlyMap<string, Quantity>;
@@ -107,7 +107,8 @@ export class Library {
   /** `NAME of X` for a section or a material. */
   property(definition: Definition, property: Name): Quantity | undefined {
     const section = definition.namespace === 'section' ? this.section(definition) : undefined;
-    const properties = section?.properties ?? (definition.namespace === 'material' ? this.material(definition) : undefined);
+    const properties =
+      section?.properties ?? (definition.namespace === 'material' ? this.material(definition) : undefined);
     if (properties === undefined) return undefined;
     const found = properties.get(property.text);
     if (found !== undefined && property.text === 'modulus' && section?.modulusAssumed) {
@@ -116,7 +117,10 @@ export class Library {
     if (found !== undefined) return found;
     const close = nearest(property.text, properties.keys());
     this.#report.error('missing-property', property.range, `${definition.name} has no ${property.text}.`, {
-      hint: close === undefined ? `give it in the ${definition.namespace} line: ${property.text} …` : `did you mean ${close}?`,
+      hint:
+        close === undefined
+          ? `give it in the ${definition.namespace} line: ${property.text} …`
+          : `did you mean ${close}?`,
       related: [{ range: definition.definition, message: `${definition.name} is described here.` }],
     });
     return undefined;
@@ -132,7 +136,11 @@ export class Library {
       if (item.kind === 'property') sound = this.#readProperty(item, figures, properties) && sound;
       else {
         sound = false;
-        this.#report.error('bad-statement', item.range, 'A material is described by words with a figure, such as E 210 GPa.');
+        this.#report.error(
+          'bad-statement',
+          item.range,
+          'A material is described by words with a figure, such as E 210 GPa.',
+        );
       }
     }
     return sound ? properties : undefined;
@@ -157,7 +165,12 @@ export class Library {
       return false;
     }
     if (!inBounds(key.text, quantity.value)) {
-      const bound = key.text === 'nu' ? 'lies between -1 and 0.5' : MAY_BE_ZERO.has(key.text) ? 'is never negative' : 'must be greater than zero';
+      const bound =
+        key.text === 'nu'
+          ? 'lies between -1 and 0.5'
+          : MAY_BE_ZERO.has(key.text)
+            ? 'is never negative'
+            : 'must be greater than zero';
       this.#report.error('bad-value', value.range, `${key.text} ${bound}.`);
       return false;
     }
@@ -178,7 +191,11 @@ export class Library {
       if (item.kind === 'multiple') this.#multiply(item, definition, reading, shaped, material);
       if (item.kind === 'wanted') {
         reading.sound = false;
-        this.#report.error('not-evaluated-yet', item.range, `A section that is still to be chosen is read but not evaluated by this version: give ${item.key.text} a figure.`);
+        this.#report.error(
+          'not-evaluated-yet',
+          item.range,
+          `A section that is still to be chosen is read but not evaluated by this version: give ${item.key.text} a figure.`,
+        );
       }
     }
     reading.checkTurned(shaped);
@@ -186,10 +203,7 @@ export class Library {
     const properties = new Map([...(material?.properties ?? []), ...shaped, ...given]);
     const modulusAssumed = reading.modulusAssumed || !properties.has('modulus');
     derive(properties);
-    const description = statement.items
-      .map(this.#wordsOf)
-      .join(', ')
-      .replace(/ x /g, ' × ');
+    const description = statement.items.map(this.#wordsOf).join(', ').replace(/ x /g, ' × ');
     return { properties, material: material?.name, modulusAssumed, description, statement };
   }
 
@@ -202,7 +216,11 @@ export class Library {
     const [first, second] = named;
     if (second !== undefined) {
       reading.sound = false;
-      this.#report.error('bad-statement', second.range, `A section has one material; ${first!.name.text} is given already.`);
+      this.#report.error(
+        'bad-statement',
+        second.range,
+        `A section has one material; ${first!.name.text} is given already.`,
+      );
     }
     if (first === undefined) return undefined;
     const found = this.#names.find(definition.scope, ['material'], first.name.text);
@@ -227,7 +245,11 @@ export class Library {
     }
     if (base.material !== undefined && material !== undefined && base.material !== material.name) {
       reading.sound = false;
-      this.#report.error('bad-statement', item.range, `${item.section.text} is of ${base.material} already, not of ${material.name}.`);
+      this.#report.error(
+        'bad-statement',
+        item.range,
+        `${item.section.text} is of ${base.material} already, not of ${material.name}.`,
+      );
     }
     reading.modulusAssumed = base.modulusAssumed && base.properties.has('modulus');
     for (const [key, { value, dimension }] of base.properties) {
@@ -257,13 +279,21 @@ class SectionReading {
   shape(item: Extract<Item, { kind: 'shape' }>, into: Map<string, Quantity>): void {
     if (item.taper !== undefined) {
       this.sound = false;
-      this.#report.error('not-evaluated-yet', item.range, 'A tapered section is read but not evaluated by this version: give one depth, or a section to each leg.');
+      this.#report.error(
+        'not-evaluated-yet',
+        item.range,
+        'A tapered section is read but not evaluated by this version: give one depth, or a section to each leg.',
+      );
       return;
     }
     const names = SHAPE_DIMENSIONS[item.shape];
     if (item.dimensions.length !== names.length) {
       this.sound = false;
-      this.#report.error('bad-statement', item.range, `A ${item.shape} has ${names.length === 1 ? 'one dimension' : `${names.length} dimensions`}: ${names.join(' x ')}.`);
+      this.#report.error(
+        'bad-statement',
+        item.range,
+        `A ${item.shape} has ${names.length === 1 ? 'one dimension' : `${names.length} dimensions`}: ${names.join(' x ')}.`,
+      );
       return;
     }
     const sizes: number[] = [];
@@ -278,7 +308,9 @@ class SectionReading {
     const problem = shapeProblem(item.shape, sizes);
     if (problem !== undefined) {
       this.sound = false;
-      this.#report.error('bad-value', item.range, `This is no ${item.shape}: ${problem}.`, { hint: `the order is ${names.join(' x ')}` });
+      this.#report.error('bad-value', item.range, `This is no ${item.shape}: ${problem}.`, {
+        hint: `the order is ${names.join(' x ')}`,
+      });
       return;
     }
     const turned = this.#turned() !== undefined;
@@ -298,7 +330,9 @@ class SectionReading {
     const isShape = this.#statement.items.some(item => item.kind === 'shape');
     if (isShape && shaped.size > 0) return;
     this.sound = false;
-    this.#report.error('bad-statement', turned.range, `${this.#definition.name} has no shape to turn.`, { hint: 'give the figures of the other axis' });
+    this.#report.error('bad-statement', turned.range, `${this.#definition.name} has no shape to turn.`, {
+      hint: 'give the figures of the other axis',
+    });
   }
 
   #turned(): Item | undefined {

@@ -3,8 +3,8 @@
 import type { End, LoadBody, Name, Place, StatementOf, Stretch, Turn, Value } from '../language/syntax.ts';
 import {
   ANGLE,
-  type Dimension,
   DIMENSIONLESS,
+  type Dimension,
   FORCE,
   FORCE_PER_LENGTH,
   MOMENT,
@@ -12,7 +12,17 @@ import {
 } from '../quantity/dimension.ts';
 import type { Range } from '../quantity/range.ts';
 import type { Due, Figures } from './figures.ts';
-import { A_LENGTH, AN_ANGLE, cleanCosine, cleanSine, distanceOf, type Geometry, type LaidMember, locateOnMember, metres } from './geometry.ts';
+import {
+  A_LENGTH,
+  AN_ANGLE,
+  cleanCosine,
+  cleanSine,
+  distanceOf,
+  type Geometry,
+  type LaidMember,
+  locateOnMember,
+  metres,
+} from './geometry.ts';
 import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
 import type { Hinge, LineDirection, Load, LoadCase, Location, Restraint, Section, Support } from './structure.ts';
@@ -113,7 +123,11 @@ class LoadReader {
   }
 
   #notYet(range: Range, what: string): false {
-    this.#report.error('not-evaluated-yet', range, `${what} is read but not evaluated by this version: answers with this case are withheld.`);
+    this.#report.error(
+      'not-evaluated-yet',
+      range,
+      `${what} is read but not evaluated by this version: answers with this case are withheld.`,
+    );
     return false;
   }
 
@@ -127,15 +141,22 @@ class LoadReader {
     for (const index of members) {
       this.#ground.geometry.members[index]!.legs.forEach((_, leg) => {
         const section = this.#ground.sectionOf(index, leg);
-        if (section !== undefined && section.massPerLength === undefined) weightless.set(section.name, section);
+        // A section without a name could not be read, and that was told.
+        if (section !== undefined && section.name !== '' && section.massPerLength === undefined)
+          weightless.set(section.name, section);
       });
     }
     for (const section of weightless.values()) {
       const missing = section.area === undefined ? 'area A' : 'density';
-      this.#report.error('missing-property', common.range, `Self-weight needs a mass per length, and ${section.name} has no ${missing}.`, {
-        hint: section.area === undefined ? `give ${section.name} an A` : 'give its material a density',
-        related: [{ range: section.range, message: `${section.name} is described here.` }],
-      });
+      this.#report.error(
+        'missing-property',
+        common.range,
+        `Self-weight needs a mass per length, and ${section.name} has no ${missing}.`,
+        {
+          hint: section.area === undefined ? `give ${section.name} an A` : 'give its material a density',
+          related: [{ range: section.range, message: `${section.name} is described here.` }],
+        },
+      );
     }
     if (weightless.size > 0) return false;
     this.#loads.push({ ...common, kind: 'self-weight', members, factor });
@@ -151,14 +172,26 @@ class LoadReader {
     let sound = true;
     for (const index of members) {
       const member = this.#ground.geometry.members[index]!;
-      const stretch = body.stretch === undefined ? { start: 0, end: member.length, reversed: false } : this.#stretch(body.stretch, member);
+      const stretch =
+        body.stretch === undefined
+          ? { start: 0, end: member.length, reversed: false }
+          : this.#stretch(body.stretch, member);
       const direction = stretch === undefined ? undefined : this.#direction(body, member, stretch);
       if (stretch === undefined || direction === undefined || !this.#mayAct(member, direction, body.range)) {
         sound = false;
         continue;
       }
       const [startIntensity, endIntensity] = stretch.reversed ? [to, from] : [from, to];
-      this.#loads.push({ ...common, kind: 'line', member: index, start: stretch.start, end: stretch.end, startIntensity, endIntensity, direction });
+      this.#loads.push({
+        ...common,
+        kind: 'line',
+        member: index,
+        start: stretch.start,
+        end: stretch.end,
+        startIntensity,
+        endIntensity,
+        direction,
+      });
     }
     return sound;
   }
@@ -167,9 +200,14 @@ class LoadReader {
     const quantity = this.#figures.quantity(value);
     if (quantity === undefined) return undefined;
     if (sameDimension(quantity.dimension, FORCE)) {
-      this.#report.error('bad-load', value.range, 'A load on a stretch of a member is a force per length; this is a force.', {
-        hint: 'write kN/m, or put the force at a place: … at P',
-      });
+      this.#report.error(
+        'bad-load',
+        value.range,
+        'A load on a stretch of a member is a force per length; this is a force.',
+        {
+          hint: 'write kN/m, or put the force at a place: … at P',
+        },
+      );
       return undefined;
     }
     if (sameDimension(quantity.dimension, FORCE_PER_LENGTH)) return quantity.value;
@@ -177,7 +215,11 @@ class LoadReader {
     return undefined;
   }
 
-  #direction(body: Extract<LoadBody, { kind: 'line' }>, member: LaidMember, stretch: { readonly start: number; readonly end: number }): LineDirection | undefined {
+  #direction(
+    body: Extract<LoadBody, { kind: 'line' }>,
+    member: LaidMember,
+    stretch: { readonly start: number; readonly end: number },
+  ): LineDirection | undefined {
     const { direction } = body;
     switch (direction.kind) {
       case 'heading':
@@ -188,11 +230,21 @@ class LoadReader {
       }
       case 'square': {
         const heading = HEADINGS[direction.heading];
-        const parallel = member.legs.find(leg => overlaps(leg, stretch) && Math.abs(heading.y * leg.cosine - heading.x * leg.sine) < 1e-9);
+        const parallel = member.legs.find(
+          leg => overlaps(leg, stretch) && Math.abs(heading.y * leg.cosine - heading.x * leg.sine) < 1e-9,
+        );
         if (parallel === undefined) return { kind: 'square', ...heading };
-        this.#report.error('bad-load', body.range, `${member.name} runs ${direction.heading === 'up' || direction.heading === 'down' ? 'upright' : 'level'} there, so ${direction.heading} names no side of it.`, {
-          hint: direction.heading === 'up' || direction.heading === 'down' ? 'write square left or square right' : 'write square up or square down',
-        });
+        this.#report.error(
+          'bad-load',
+          body.range,
+          `${member.name} runs ${direction.heading === 'up' || direction.heading === 'down' ? 'upright' : 'level'} there, so ${direction.heading} names no side of it.`,
+          {
+            hint:
+              direction.heading === 'up' || direction.heading === 'down'
+                ? 'write square left or square right'
+                : 'write square up or square down',
+          },
+        );
         return undefined;
       }
       case 'along': {
@@ -203,9 +255,16 @@ class LoadReader {
         if (at !== undefined && at >= stretch.end - slack) return { kind: 'along', sense: 1 };
         if (at !== undefined && at <= stretch.start + slack) return { kind: 'along', sense: -1 };
         const name = direction.towards.text;
-        this.#report.error('bad-load', direction.towards.range, at === undefined ? `${name} is not on ${member.name}.` : `${name} stands within the loaded part of ${member.name}.`, {
-          hint: 'name a point at an end of the loaded part, or beyond it',
-        });
+        this.#report.error(
+          'bad-load',
+          direction.towards.range,
+          at === undefined
+            ? `${name} is not on ${member.name}.`
+            : `${name} stands within the loaded part of ${member.name}.`,
+          {
+            hint: 'name a point at an end of the loaded part, or beyond it',
+          },
+        );
         return undefined;
       }
     }
@@ -216,9 +275,14 @@ class LoadReader {
     if (member.kind === 'member' || direction.kind === 'along') return true;
     const { cosine, sine } = member.legs[0]!;
     if (direction.kind === 'global' && Math.abs(direction.y * cosine - direction.x * sine) < 1e-12) return true;
-    this.#report.error('bad-load', range, `${member.name} is a bar: it carries axial force only, and no load across it.`, {
-      hint: 'make it a member, or put the load at its ends',
-    });
+    this.#report.error(
+      'bad-load',
+      range,
+      `${member.name} is a bar: it carries axial force only, and no load across it.`,
+      {
+        hint: 'make it a member, or put the load at its ends',
+      },
+    );
     return false;
   }
 
@@ -248,7 +312,12 @@ class LoadReader {
     const length = stretch.end - stretch.start;
     const steps = Math.floor(length / every + 1e-9);
     if (steps + 1 > MOST_IN_A_ROW) {
-      this.#report.error('too-large', body.every.range, `This row has ${steps + 1} loads; at most ${MOST_IN_A_ROW} are taken.`, { hint: 'write a load per length instead' });
+      this.#report.error(
+        'too-large',
+        body.every.range,
+        `This row has ${steps + 1} loads; at most ${MOST_IN_A_ROW} are taken.`,
+        { hint: 'write a load per length instead' },
+      );
       return false;
     }
     const row = this.#rows++;
@@ -262,14 +331,26 @@ class LoadReader {
   }
 
   /** A force or a couple in global components; the amount must be of the kind that its direction says. */
-  #action(body: Amount): { readonly kind: 'force'; readonly x: number; readonly y: number } | { readonly kind: 'couple'; readonly moment: number } | undefined {
+  #action(
+    body: Amount,
+  ):
+    | { readonly kind: 'force'; readonly x: number; readonly y: number }
+    | { readonly kind: 'couple'; readonly moment: number }
+    | undefined {
     const { direction } = body;
     const quantity = this.#figures.quantity(body.amount);
     if (quantity === undefined) return undefined;
     const amount = quantity.value;
     if (direction.kind === 'turn' && (direction.turn === 'clockwise' || direction.turn === 'anticlockwise')) {
-      if (sameDimension(quantity.dimension, MOMENT)) return { kind: 'couple', moment: direction.turn === 'clockwise' ? -amount : amount };
-      this.#misplaced(body, quantity.dimension, FORCE, 'A force does not turn clockwise or anticlockwise.', 'write down, up, left or right');
+      if (sameDimension(quantity.dimension, MOMENT))
+        return { kind: 'couple', moment: direction.turn === 'clockwise' ? -amount : amount };
+      this.#misplaced(
+        body,
+        quantity.dimension,
+        FORCE,
+        'A force does not turn clockwise or anticlockwise.',
+        'write down, up, left or right',
+      );
       if (!sameDimension(quantity.dimension, FORCE)) this.#figures.wrongKind(body.amount, quantity, A_MOMENT);
       return undefined;
     }
@@ -279,8 +360,20 @@ class LoadReader {
       const way = direction.kind === 'turn' ? HEADINGS[direction.turn as keyof typeof HEADINGS] : unit(angle!);
       return { kind: 'force', x: 0 + way.x * amount, y: 0 + way.y * amount };
     }
-    const isLine = this.#misplaced(body, quantity.dimension, FORCE_PER_LENGTH, 'A force per length cannot act at one place.', 'put it on a member: … on R1');
-    const isMoment = this.#misplaced(body, quantity.dimension, MOMENT, 'A moment stands where a force belongs.', 'write clockwise or anticlockwise');
+    const isLine = this.#misplaced(
+      body,
+      quantity.dimension,
+      FORCE_PER_LENGTH,
+      'A force per length cannot act at one place.',
+      'put it on a member: … on R1',
+    );
+    const isMoment = this.#misplaced(
+      body,
+      quantity.dimension,
+      MOMENT,
+      'A moment stands where a force belongs.',
+      'write clockwise or anticlockwise',
+    );
     if (!isLine && !isMoment) this.#figures.wrongKind(body.amount, quantity, A_FORCE);
     return undefined;
   }
@@ -302,7 +395,8 @@ class LoadReader {
       return false;
     }
     const here = hinges.filter(hinge => hinge.point === at.point);
-    const freed = (member: number): boolean => here.some(hinge => hinge.member === undefined || hinge.member === member);
+    const freed = (member: number): boolean =>
+      here.some(hinge => hinge.member === undefined || hinge.member === member);
     if (at.member === undefined) {
       const rigid = ends.filter(end => !freed(end));
       if (rigid.length > 0 || ends.length === 1) return true;
@@ -313,9 +407,14 @@ class LoadReader {
     }
     if (!freed(at.member) || ends.filter(end => end === at.member).length < 2) return true;
     const member = geometry.members[at.member]!.name;
-    this.#report.error('bad-load', body.range, `${member} has a hinge at ${name}, and runs on both sides of it: the couple could act on either.`, {
-      hint: `put it a little to one side: … at 1 mm from ${name} on ${member}`,
-    });
+    this.#report.error(
+      'bad-load',
+      body.range,
+      `${member} has a hinge at ${name}, and runs on both sides of it: the couple could act on either.`,
+      {
+        hint: `put it a little to one side: … at 1 mm from ${name} on ${member}`,
+      },
+    );
     return false;
   }
 
@@ -332,9 +431,16 @@ class LoadReader {
       this.#loads.push({ ...common, kind: 'movement', point, freedom, amount });
       return true;
     }
-    this.#report.error('bad-load', body.point.range, support === undefined ? `${body.point.text} has no support to move.` : `The support at ${body.point.text} does not hold it that way, so it cannot move it ${body.turn}.`, {
-      hint: 'only a held or a sprung direction of a support can be moved',
-    });
+    this.#report.error(
+      'bad-load',
+      body.point.range,
+      support === undefined
+        ? `${body.point.text} has no support to move.`
+        : `The support at ${body.point.text} does not hold it that way, so it cannot move it ${body.turn}.`,
+      {
+        hint: 'only a held or a sprung direction of a support can be moved',
+      },
+    );
     return false;
   }
 
@@ -346,13 +452,19 @@ class LoadReader {
 
   #isMember(member: LaidMember, range: Range): boolean {
     if (member.kind === 'member') return true;
-    this.#report.error('bad-load', range, `${member.name} is a bar: it carries axial force only, and no load between its ends.`, { hint: 'make it a member, or put the load at its ends' });
+    this.#report.error(
+      'bad-load',
+      range,
+      `${member.name} is a bar: it carries axial force only, and no load between its ends.`,
+      { hint: 'make it a member, or put the load at its ends' },
+    );
     return false;
   }
 
   #location(place: Place, within: Name | undefined): Location | undefined {
     const location = readPlace(place, within, this.#ground.geometry, this.#figures, this.#report, 'bad-load');
-    if (location?.kind === 'along' && !this.#isMember(this.#ground.geometry.members[location.member]!, place.range)) return undefined;
+    if (location?.kind === 'along' && !this.#isMember(this.#ground.geometry.members[location.member]!, place.range))
+      return undefined;
     return location;
   }
 
@@ -379,10 +491,15 @@ function unit(angle: number): { readonly x: number; readonly y: number } {
 }
 
 function freedomOf(turn: Turn): Restraint['freedom'] {
-  return turn === 'clockwise' || turn === 'anticlockwise' ? { kind: 'rotation' } : { kind: 'movement', ...HEADINGS[turn] };
+  return turn === 'clockwise' || turn === 'anticlockwise'
+    ? { kind: 'rotation' }
+    : { kind: 'movement', ...HEADINGS[turn] };
 }
 
-function overlaps(leg: { readonly start: number; readonly length: number }, stretch: { readonly start: number; readonly end: number }): boolean {
+function overlaps(
+  leg: { readonly start: number; readonly length: number },
+  stretch: { readonly start: number; readonly end: number },
+): boolean {
   return leg.start < stretch.end && leg.start + leg.length > stretch.start;
 }
 
@@ -398,7 +515,9 @@ function holds(restraints: readonly Restraint[], freedom: Restraint['freedom']):
 /** The members that have an end, or run through, at a point: one entry for each leg end, bars left out. */
 export function endsAt(geometry: Geometry, point: number): number[] {
   return geometry.members.flatMap((member, index) =>
-    member.kind === 'bar' ? [] : member.legs.flatMap(leg => [leg.from, leg.to].flatMap(end => (end === point ? [index] : []))),
+    member.kind === 'bar'
+      ? []
+      : member.legs.flatMap(leg => [leg.from, leg.to].flatMap(end => (end === point ? [index] : []))),
   );
 }
 
@@ -430,7 +549,8 @@ export function readPlace(
     if (within === undefined) return { kind: 'point', point };
     const member = geometry.memberNamed.get(within.text);
     if (member === undefined) {
-      if (geometry.groups.some(group => group.name === within.text)) report.error(code, within.range, `${within.text} is a group: name the member that is meant.`);
+      if (geometry.groups.some(group => group.name === within.text))
+        report.error(code, within.range, `${within.text} is a group: name the member that is meant.`);
       return undefined;
     }
     if (distanceOf(geometry.members[member]!, point) !== undefined) return { kind: 'point', point, member };
@@ -474,7 +594,14 @@ export function readStretch(
   return from < to ? { start: from, end: to, reversed: false } : { start: to, end: from, reversed: true };
 }
 
-function readEnd(end: End, member: LaidMember, geometry: Geometry, figures: Figures, report: Report, code: 'bad-load' | 'bad-question'): number | undefined {
+function readEnd(
+  end: End,
+  member: LaidMember,
+  geometry: Geometry,
+  figures: Figures,
+  report: Report,
+  code: 'bad-load' | 'bad-question',
+): number | undefined {
   if (end.kind === 'point') {
     const point = geometry.pointNamed.get(end.point.text);
     if (point === undefined) return undefined;
@@ -485,7 +612,13 @@ function readEnd(end: End, member: LaidMember, geometry: Geometry, figures: Figu
   const distance = figures.number(end.distance, A_LENGTH);
   if (distance === undefined) return undefined;
   if (distance < 0 || distance > member.length * (1 + 1e-6)) {
-    report.error(code, end.range, distance < 0 ? `A distance along ${member.name} is never negative.` : `${metres(distance)} along ${member.name} is past its end (${metres(member.length)}).`);
+    report.error(
+      code,
+      end.range,
+      distance < 0
+        ? `A distance along ${member.name} is never negative.`
+        : `${metres(distance)} along ${member.name} is past its end (${metres(member.length)}).`,
+    );
     return undefined;
   }
   return Math.min(distance, member.length);

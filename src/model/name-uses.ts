@@ -1,6 +1,7 @@
 // Every use of a name in a statement, and what kind of thing it must name there.
 import type {
   CarryBody,
+  ChainLeg,
   End,
   Item,
   LoadBody,
@@ -11,11 +12,22 @@ import type {
   ShowBody,
   Statement,
   Stretch,
+  SupportItem,
   Under,
   Value,
 } from '../language/syntax.ts';
+import { operandsOf } from './operands.ts';
 
-export type Sought = 'point' | 'member' | 'section' | 'material' | 'case' | 'combination or case' | 'value or result' | 'result' | 'owner';
+export type Sought =
+  | 'point'
+  | 'member'
+  | 'section'
+  | 'material'
+  | 'case'
+  | 'combination or case'
+  | 'value or result'
+  | 'result'
+  | 'owner';
 
 export interface NameUse {
   readonly sought: Sought;
@@ -25,248 +37,212 @@ export interface NameUse {
 }
 
 export function usesIn(statement: Statement): NameUse[] {
-  const uses: NameUse[] = [];
-  collect(statement, uses);
-  return uses;
-}
-
-export function usesInValue(value: Value): NameUse[] {
-  const uses: NameUse[] = [];
-  inValue(value, uses);
-  return uses;
-}
-
-function collect(statement: Statement, uses: NameUse[]): void {
   switch (statement.kind) {
     case 'structure':
     case 'case':
     case 'use':
     case 'display':
     case 'assume':
-      return;
+      return [];
     case 'let':
-      return inValue(statement.value, uses);
+      return usesInValue(statement.value);
     case 'hinge':
-      use('point', statement.point, uses);
-      return useIf('member', statement.member, uses);
+      return [...name('point', statement.point), ...name('member', statement.member)];
     case 'material':
     case 'section':
-      for (const item of statement.items) inItem(item, uses);
-      return;
+      return statement.items.flatMap(inItem);
     case 'member':
     case 'bar':
     case 'bars':
-      useIf('section', statement.section, uses);
-      for (const leg of statement.chain.legs) {
-        useIf('section', leg.section, uses);
-        const { dimension } = leg;
-        if (dimension?.kind === 'parts') for (const part of dimension.parts) inValue(part.distance, uses);
-        if (dimension?.kind === 'polar') inValues([dimension.length, dimension.angle], uses);
-        if (dimension?.kind === 'pitched') inValues([dimension.run, dimension.pitch], uses);
-      }
-      return;
+      return [...name('section', statement.section), ...statement.chain.legs.flatMap(inLeg)];
     case 'group':
-      return useAll('member', statement.members, uses);
+      return names('member', statement.members);
     case 'point':
-      if (statement.at.kind === 'coordinates') return inValues([statement.at.x, statement.at.y], uses);
-      return inPlace(statement.at, uses);
+      return statement.at.kind === 'coordinates' ? inValues([statement.at.x, statement.at.y]) : inPlace(statement.at);
     case 'connection':
-      use('point', statement.point, uses);
-      use('member', statement.member, uses);
-      return inValue(statement.stiffness, uses);
+      return [
+        ...name('point', statement.point),
+        ...name('member', statement.member),
+        ...usesInValue(statement.stiffness),
+      ];
     case 'release':
-      use('point', statement.point, uses);
-      return use('member', statement.member, uses);
+      return [...name('point', statement.point), ...name('member', statement.member)];
     case 'support':
-      use('point', statement.point, uses);
-      for (const item of statement.items) {
-        if (item.kind === 'spring') inValue(item.stiffness, uses);
-        if (item.kind === 'roller' && item.on !== undefined) inValue(item.on, uses);
-      }
-      return;
+      return [...name('point', statement.point), ...statement.items.flatMap(inSupportItem)];
     case 'load':
-      use('case', statement.case, uses);
-      return inLoad(statement.body, uses);
+      return [...name('case', statement.case), ...inLoad(statement.body)];
     case 'combine':
-      for (const term of statement.terms) {
-        use('case', term.case, uses);
-        if (term.factor !== undefined) inValue(term.factor, uses);
-      }
-      return;
+      return statement.terms.flatMap(term => [...name('case', term.case), ...inOptional(term.factor)]);
     case 'find':
+      return [...usesInValue(statement.what), ...inUnder(statement.under)];
     case 'require':
-      inValue(statement.what, uses);
-      inUnder(statement.under, uses);
-      if (statement.kind === 'require') inValue(statement.limit, uses);
-      return;
+      return [...usesInValue(statement.what), ...inUnder(statement.under), ...usesInValue(statement.limit)];
     case 'show':
-      return inShow(statement.show, uses);
+      return inShow(statement.show);
     case 'carry':
-      return inCarry(statement.carry, uses);
+      return inCarry(statement.carry);
   }
 }
 
-function inValue(value: Value, uses: NameUse[]): void {
-  switch (value.kind) {
-    case 'operand':
-      return inOperand(value.operand, uses);
-    case 'negate':
-      return inValue(value.of, uses);
-    case 'binary':
-      return inValues([value.left, value.right], uses);
-    case 'call':
-      return inValues(value.arguments, uses);
-  }
+export function usesInValue(value: Value): NameUse[] {
+  return operandsOf(value).flatMap(inOperand);
 }
 
-function inValues(values: readonly Value[], uses: NameUse[]): void {
-  for (const value of values) inValue(value, uses);
-}
-
-function inOperand(operand: Operand, uses: NameUse[]): void {
+function inOperand(operand: Operand): NameUse[] {
   switch (operand.kind) {
     case 'quantity':
     case 'constant':
     case 'span':
-      return;
+      return [];
     case 'name':
-      return use('value or result', operand.name, uses);
+      return name('value or result', operand.name);
     case 'property':
-      uses.push({ sought: 'owner', name: operand.of, property: operand.property });
-      return;
+      return [{ sought: 'owner', name: operand.of, property: operand.property }];
     case 'extent': {
-      const [only] = operand.arguments;
-      if (operand.function === 'span') return useIf('result', only, uses);
-      if (operand.function === 'length' && operand.arguments.length === 1) return useIf('member', only, uses);
-      return useAll('point', operand.arguments, uses);
+      if (operand.function === 'span') return names('result', operand.arguments);
+      const isMember = operand.function === 'length' && operand.arguments.length === 1;
+      return names(isMember ? 'member' : 'point', operand.arguments);
     }
     case 'measure':
-      return inMeasure(operand.measure, uses);
+      return inMeasure(operand.measure);
   }
 }
 
-function inMeasure(measure: Measure, uses: NameUse[]): void {
-  if (measure.at !== undefined) inPlace(measure.at, uses);
-  useIf('member', measure.in, uses);
-  inStretch(measure.between, uses);
+function inLeg({ section, dimension }: ChainLeg): NameUse[] {
+  return [...name('section', section), ...inValues(figuresOf(dimension))];
 }
 
-function inPlace(place: Place, uses: NameUse[]): void {
-  if (place.kind === 'point') return use('point', place.point, uses);
-  inValue(place.distance, uses);
-  use('point', place.from, uses);
-  useIf('point', place.towards, uses);
-  use('member', place.member, uses);
+function figuresOf(dimension: ChainLeg['dimension']): readonly Value[] {
+  switch (dimension?.kind) {
+    case undefined:
+      return [];
+    case 'parts':
+      return dimension.parts.map(({ distance }) => distance);
+    case 'polar':
+      return [dimension.length, dimension.angle];
+    case 'pitched':
+      return [dimension.run, dimension.pitch];
+  }
 }
 
-function inStretch(stretch: Stretch | undefined, uses: NameUse[]): void {
-  if (stretch === undefined) return;
-  inEnd(stretch.from, uses);
-  inEnd(stretch.to, uses);
+function inSupportItem(item: SupportItem): NameUse[] {
+  if (item.kind === 'spring') return usesInValue(item.stiffness);
+  return item.kind === 'roller' ? inOptional(item.on) : [];
 }
 
-function inEnd(end: End, uses: NameUse[]): void {
-  if (end.kind === 'point') use('point', end.point, uses);
-  else inValue(end.distance, uses);
+function inMeasure(measure: Measure): NameUse[] {
+  return [
+    ...(measure.at === undefined ? [] : inPlace(measure.at)),
+    ...name('member', measure.in),
+    ...inStretch(measure.between),
+  ];
 }
 
-function inUnder(under: Under | undefined, uses: NameUse[]): void {
-  if (under?.kind === 'named') use('combination or case', under.name, uses);
+function inPlace(place: Place): NameUse[] {
+  if (place.kind === 'point') return name('point', place.point);
+  const { distance, from, towards, member } = place;
+  return [...usesInValue(distance), ...name('point', from), ...name('point', towards), ...name('member', member)];
 }
 
-function inItem(item: Item, uses: NameUse[]): void {
+function inStretch(stretch: Stretch | undefined): NameUse[] {
+  return stretch === undefined ? [] : [...inEnd(stretch.from), ...inEnd(stretch.to)];
+}
+
+function inEnd(end: End): NameUse[] {
+  return end.kind === 'point' ? name('point', end.point) : usesInValue(end.distance);
+}
+
+function inUnder(under: Under | undefined): NameUse[] {
+  return under?.kind === 'named' ? name('combination or case', under.name) : [];
+}
+
+function inItem(item: Item): NameUse[] {
   switch (item.kind) {
     case 'turned':
     case 'wanted':
-      return;
+      return [];
     case 'material':
-      return use('material', item.name, uses);
+      return name('material', item.name);
     case 'multiple':
-      return use('section', item.section, uses);
+      return name('section', item.section);
     case 'shape':
-      inValues(item.dimensions, uses);
-      return inValues(item.taper ?? [], uses);
+      return inValues([...item.dimensions, ...(item.taper ?? [])]);
     case 'property':
-      return inValue(item.value, uses);
+      return usesInValue(item.value);
   }
 }
 
-function inLoad(body: LoadBody, uses: NameUse[]): void {
+function inLoad(body: LoadBody): NameUse[] {
   switch (body.kind) {
     case 'self-weight':
-      inValues(body.factor === undefined ? [] : [body.factor], uses);
-      return useAll('member', body.of ?? [], uses);
-    case 'heat':
-      inValues(body.factor === undefined ? [] : [body.factor], uses);
-      useAll('member', body.on, uses);
-      return inValues(body.by.kind === 'uniform' ? [body.by.rise] : [body.by.above, body.by.below], uses);
+      return [...inOptional(body.factor), ...names('member', body.of ?? [])];
+    case 'heat': {
+      const amounts = body.by.kind === 'uniform' ? [body.by.rise] : [body.by.above, body.by.below];
+      return [...inOptional(body.factor), ...names('member', body.on), ...inValues(amounts)];
+    }
     case 'move':
-      inValues(body.factor === undefined ? [] : [body.factor], uses);
-      use('point', body.point, uses);
-      return inValue(body.by, uses);
+      return [...inOptional(body.factor), ...name('point', body.point), ...usesInValue(body.by)];
     case 'lengthen':
     case 'shorten':
-      inValues(body.factor === undefined ? [] : [body.factor], uses);
-      useAll('member', body.members, uses);
-      return inValue(body.by, uses);
+      return [...inOptional(body.factor), ...names('member', body.members), ...usesInValue(body.by)];
     case 'line':
-      inValues(body.to === undefined ? [body.intensity] : [body.intensity, body.to], uses);
-      if (body.direction.kind === 'angle') inValue(body.direction.angle, uses);
-      if (body.direction.kind === 'along') use('point', body.direction.towards, uses);
-      useAll('member', body.on, uses);
-      return inStretch(body.stretch, uses);
+      return [
+        ...usesInValue(body.intensity),
+        ...inOptional(body.to),
+        ...(body.direction.kind === 'angle' ? usesInValue(body.direction.angle) : []),
+        ...(body.direction.kind === 'along' ? name('point', body.direction.towards) : []),
+        ...names('member', body.on),
+        ...inStretch(body.stretch),
+      ];
     case 'point':
-      inValue(body.amount, uses);
-      if (body.direction.kind === 'angle') inValue(body.direction.angle, uses);
-      inPlace(body.at, uses);
-      return useIf('member', body.in, uses);
+      return [...inAction(body), ...inPlace(body.at), ...name('member', body.in)];
     case 'row':
-      inValue(body.amount, uses);
-      if (body.direction.kind === 'angle') inValue(body.direction.angle, uses);
-      inValue(body.every, uses);
-      inStretch(body.stretch, uses);
-      return use('member', body.on, uses);
+      return [...inAction(body), ...usesInValue(body.every), ...inStretch(body.stretch), ...name('member', body.on)];
   }
 }
 
-function inShow(show: ShowBody, uses: NameUse[]): void {
+function inAction({ amount, direction }: Extract<LoadBody, { kind: 'point' | 'row' }>): NameUse[] {
+  return [...usesInValue(amount), ...(direction.kind === 'angle' ? usesInValue(direction.angle) : [])];
+}
+
+function inShow(show: ShowBody): NameUse[] {
   switch (show.kind) {
     case 'inputs':
     case 'drawing':
     case 'results':
-      return;
+      return [];
     case 'reactions':
-      return inUnder(show.under, uses);
+      return inUnder(show.under);
     case 'working':
-      return use('result', show.of, uses);
+      return name('result', show.of);
     case 'contributions':
-      return use('result', show.to, uses);
+      return name('result', show.to);
     case 'field':
-      inMeasure(show.measure, uses);
-      return inUnder(show.under, uses);
+      return [...inMeasure(show.measure), ...inUnder(show.under)];
   }
 }
 
 /** What is carried may come from another note, so its names are looked for there; only the place is ours. */
-function inCarry(carry: CarryBody, uses: NameUse[]): void {
-  if (carry.factor !== undefined) inValue(carry.factor, uses);
-  if (carry.every !== undefined) inValue(carry.every, uses);
-  if (carry.onto.kind === 'member') {
-    use('member', carry.onto.member, uses);
-    return inStretch(carry.onto.stretch, uses);
-  }
-  inPlace(carry.onto.place, uses);
-  useIf('member', carry.onto.in, uses);
+function inCarry({ factor, every, onto }: CarryBody): NameUse[] {
+  const place =
+    onto.kind === 'member'
+      ? [...name('member', onto.member), ...inStretch(onto.stretch)]
+      : [...inPlace(onto.place), ...name('member', onto.in)];
+  return [...inOptional(factor), ...inOptional(every), ...place];
 }
 
-function use(sought: Sought, name: Name, uses: NameUse[]): void {
-  uses.push({ sought, name });
+function inValues(values: readonly Value[]): NameUse[] {
+  return values.flatMap(usesInValue);
 }
 
-function useIf(sought: Sought, name: Name | undefined, uses: NameUse[]): void {
-  if (name !== undefined) uses.push({ sought, name });
+function inOptional(value: Value | undefined): NameUse[] {
+  return value === undefined ? [] : usesInValue(value);
 }
 
-function useAll(sought: Sought, names: readonly Name[], uses: NameUse[]): void {
-  for (const name of names) uses.push({ sought, name });
+function name(sought: Sought, used: Name | undefined): NameUse[] {
+  return used === undefined ? [] : [{ sought, name: used }];
+}
+
+function names(sought: Sought, used: readonly Name[]): NameUse[] {
+  return used.map(each => ({ sought, name: each }));
 }

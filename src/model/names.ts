@@ -7,7 +7,16 @@ import type { Range } from '../quantity/range.ts';
 import { type NameUse, type Sought, usesIn } from './name-uses.ts';
 import type { Scope, Scopes } from './scope.ts';
 
-export type Namespace = 'structure' | 'point' | 'member' | 'section' | 'material' | 'case' | 'combination' | 'value' | 'result';
+export type Namespace =
+  | 'structure'
+  | 'point'
+  | 'member'
+  | 'section'
+  | 'material'
+  | 'case'
+  | 'combination'
+  | 'value'
+  | 'result';
 
 /** One name with all its places: what hover, completion, go-to-definition and rename read. */
 export interface NameEntry {
@@ -68,7 +77,6 @@ const SOUGHT = {
   result: ['result'],
   owner: ['section', 'material', 'structure'],
 } as const satisfies Record<Sought, readonly Namespace[]>;
-
 
 class NameTable {
   readonly entries: Definition[] = [];
@@ -144,30 +152,39 @@ class NameTable {
   #defineIn(scope: Scope, statement: Statement): void {
     switch (statement.kind) {
       case 'structure':
-        if (this.#structure(statement.name.text) !== undefined) this.#twice(this.#structure(statement.name.text)!, statement.name);
+        if (this.#structure(statement.name.text) !== undefined)
+          this.#twice(this.#structure(statement.name.text)!, statement.name);
         else this.#clash(scope, statement.name, ['section', 'material'], 'a structure and a section or material');
-        return this.#add(scope, 'structure', statement.name, statement);
+        this.#add(scope, 'structure', statement.name, statement);
+        return;
       case 'case':
         this.#clash(scope, statement.name, ['combination'], 'a case and a combination');
-        return this.#addOnce(scope, 'case', statement.name, statement);
+        this.#addOnce(scope, 'case', statement.name, statement);
+        return;
       case 'material':
         this.#clash(scope, statement.name, ['section', 'structure'], 'a material and a section or structure');
-        return this.#addOnce(scope, 'material', statement.name, statement);
+        this.#addOnce(scope, 'material', statement.name, statement);
+        return;
       case 'section':
         this.#clash(scope, statement.name, ['material', 'structure'], 'a section and a material or structure');
-        return this.#addOnce(scope, 'section', statement.name, statement);
+        this.#addOnce(scope, 'section', statement.name, statement);
+        return;
       case 'let':
         this.#clash(scope, statement.name, ['result'], 'a value and a result', true);
-        return this.#addOnce(scope, 'value', statement.name, statement);
+        this.#addOnce(scope, 'value', statement.name, statement);
+        return;
       case 'find':
       case 'require':
         this.#clash(scope, statement.name, ['value'], 'a result and a value', true);
-        return this.#addOnce(scope, 'result', statement.name, statement);
+        this.#addOnce(scope, 'result', statement.name, statement);
+        return;
       case 'combine':
         this.#clash(scope, statement.name, ['case'], 'a combination and a case');
-        return this.#defineCombination(scope, statement);
+        this.#defineCombination(scope, statement);
+        return;
       case 'group':
-        return this.#addOnce(scope, 'member', statement.name, statement);
+        this.#addOnce(scope, 'member', statement.name, statement);
+        return;
       case 'member':
       case 'bar':
       case 'bars':
@@ -183,7 +200,8 @@ class NameTable {
         }
         return;
       case 'point':
-        return this.#definePoint(scope, statement.name, statement);
+        this.#definePoint(scope, statement.name, statement);
+        return;
       case 'use':
       case 'hinge':
       case 'connection':
@@ -201,7 +219,8 @@ class NameTable {
   #definePoint(scope: Scope, name: Name, statement: Statement): void {
     const found = this.#tables.get(scope)!.get(key('point', name.text));
     const placed = scope.statements.find(other => other.kind === 'point' && other.name.text === name.text);
-    if (placed !== undefined && placed !== statement && placed.kind === 'point') this.#twice({ definition: placed.name.range, name: name.text }, name);
+    if (placed !== undefined && placed !== statement && placed.kind === 'point')
+      this.#twice({ definition: placed.name.range, name: name.text }, name);
     else if (found !== undefined) found.uses.push(name.range);
     else this.#add(scope, 'point', name, statement);
   }
@@ -209,7 +228,10 @@ class NameTable {
   #defineCombination(scope: Scope, statement: Extract<Statement, { kind: 'combine' }>): void {
     const { name, label } = statement;
     const first = scope.statements.find(
-      other => other.kind === 'combine' && other.name.text === name.text && (other.label?.text === label?.text || other.label === undefined || label === undefined),
+      other =>
+        other.kind === 'combine' &&
+        other.name.text === name.text &&
+        (other.label?.text === label?.text || other.label === undefined || label === undefined),
     );
     if (first !== undefined && first !== statement && first.kind === 'combine') {
       const same = first.label?.text === label?.text;
@@ -232,7 +254,15 @@ class NameTable {
     const at = key(namespace, name.text);
     if (table.has(at)) return;
     const structure = scope === this.#scopes.head ? undefined : scope.name;
-    const definition: Definition = { namespace, name: name.text, structure, definition: name.range, uses: [], scope, statement };
+    const definition: Definition = {
+      namespace,
+      name: name.text,
+      structure,
+      definition: name.range,
+      uses: [],
+      scope,
+      statement,
+    };
     table.set(at, definition);
     this.entries.push(definition);
   }
@@ -280,10 +310,12 @@ class NameTable {
   #unknown(scope: Scope, sought: Sought, name: Name): void {
     if (this.#mayBeBroken(scope, sought, name.text)) return;
     const reach = [this.#tables.get(scope)!, this.#tables.get(this.#scopes.head)!];
-    if (sought === 'owner' || sought === 'case') reach.push(...this.#scopes.structures.map(other => this.#tables.get(other)!));
+    if (sought === 'owner' || sought === 'case')
+      reach.push(...this.#scopes.structures.map(other => this.#tables.get(other)!));
     const wanted: readonly Namespace[] = SOUGHT[sought];
     const known = new Set<string>();
-    for (const table of reach) for (const entry of table.values()) if (wanted.includes(entry.namespace)) known.add(entry.name);
+    for (const table of reach)
+      for (const entry of table.values()) if (wanted.includes(entry.namespace)) known.add(entry.name);
     const close = nearest(name.text, [...known]);
     const word = sought === 'owner' ? 'section, material or structure' : sought;
     this.diagnostics.push({
@@ -291,14 +323,18 @@ class NameTable {
       severity: 'error',
       range: name.range,
       message: `No ${word} named ${name.text}.${close === undefined ? '' : ` Did you mean ${close}?`}`,
-      ...(close === undefined ? {} : { fix: { title: `Change to ${close}`, edits: [{ range: name.range, text: close }] } }),
+      ...(close === undefined
+        ? {}
+        : { fix: { title: `Change to ${close}`, edits: [{ range: name.range, text: close }] } }),
     });
   }
 
   /** Whether a line that could not be read may have defined the name; then that line's own diagnostic is enough. */
   #mayBeBroken(scope: Scope, sought: Sought, name: string): boolean {
     const scopes = scope === this.#scopes.head ? [scope] : [scope, this.#scopes.head];
-    const brought = [this.#scopes.head, ...this.#scopes.structures].some(other => other.statements.some(({ kind }) => kind === 'use' || kind === 'carry'));
+    const brought = [this.#scopes.head, ...this.#scopes.structures].some(other =>
+      other.statements.some(({ kind }) => kind === 'use' || kind === 'carry'),
+    );
     if (brought) return true;
     const wide = sought === 'owner' || sought === 'case' ? [this.#scopes.head, ...this.#scopes.structures] : scopes;
     return wide.some(({ broken }) =>

@@ -88,7 +88,14 @@ class MeasureReader {
   #atPlace(): ResolvedMeasure | undefined {
     const { kind, at, in: within } = this.#measure;
     const isGroup = within !== undefined && this.#geometry.groups.some(group => group.name === within.text);
-    const location = readPlace(at!, isGroup ? undefined : within, this.#geometry, this.#figures, this.#report, 'bad-question');
+    const location = readPlace(
+      at!,
+      isGroup ? undefined : within,
+      this.#geometry,
+      this.#figures,
+      this.#report,
+      'bad-question',
+    );
     if (location === undefined) return undefined;
     switch (kind) {
       case 'deflection':
@@ -113,16 +120,28 @@ class MeasureReader {
     if (member !== undefined) {
       const legs = ends.filter(end => end === member).length;
       if (legs === 2 && this.#freed(point, member)) {
-        return this.#fault(this.#measure.range, `${this.#structure.members[member]!.name} has a hinge at ${name}, and turns on each side of it by another amount.`, `ask a little to one side: rotation at 1 mm from ${name} on ${this.#structure.members[member]!.name}`);
+        return this.#fault(
+          this.#measure.range,
+          `${this.#structure.members[member]!.name} has a hinge at ${name}, and turns on each side of it by another amount.`,
+          `ask a little to one side: rotation at 1 mm from ${name} on ${this.#structure.members[member]!.name}`,
+        );
       }
       return { kind: 'rotation', at: location };
     }
     if (ends.length === 0) {
-      return this.#fault(this.#measure.range, `Only bars meet at ${name}: it has no rotation of its own.`, 'say in which bar: rotation at P in d1');
+      return this.#fault(
+        this.#measure.range,
+        `Only bars meet at ${name}: it has no rotation of its own.`,
+        'say in which bar: rotation at P in d1',
+      );
     }
     const rigid = ends.filter(end => !this.#freed(point, end));
     if (rigid.length === 0 && ends.length > 1) {
-      return this.#fault(this.#measure.range, `${name} is a hinge: its members turn by different amounts.`, `say in which: rotation at ${name} in ${this.#structure.members[ends[0]!]!.name}`);
+      return this.#fault(
+        this.#measure.range,
+        `${name} is a hinge: its members turn by different amounts.`,
+        `say in which: rotation at ${name} in ${this.#structure.members[ends[0]!]!.name}`,
+      );
     }
     // One member alone ends here: its rotation is meant, hinge or not.
     if (rigid.length === 0) return { kind: 'rotation', at: { kind: 'point', point, member: ends[0]! } };
@@ -130,25 +149,41 @@ class MeasureReader {
   }
 
   #freed(point: number, member: number): boolean {
-    return this.#structure.hinges.some((hinge: Hinge) => hinge.point === point && (hinge.member === undefined || hinge.member === member));
+    return this.#structure.hinges.some(
+      (hinge: Hinge) => hinge.point === point && (hinge.member === undefined || hinge.member === member),
+    );
   }
 
   /** Forces are of a member: the one that is said, or the only one at the point. */
   #onMember(location: Location, kind: string): Extract<Location, { kind: 'along' }> | undefined {
     if (location.kind === 'along') return location;
     const { point } = location;
-    const through = this.#structure.members.flatMap((member, index) => (distanceOf(member, point) === undefined ? [] : [index]));
+    const through = this.#structure.members.flatMap((member, index) =>
+      distanceOf(member, point) === undefined ? [] : [index],
+    );
     const within = this.#measure.in;
     const group = within === undefined ? undefined : this.#geometry.groups.find(other => other.name === within.text);
-    const candidates = location.member !== undefined ? [location.member] : group === undefined ? through : through.filter(index => group.members.includes(index));
+    const candidates =
+      location.member !== undefined
+        ? [location.member]
+        : group === undefined
+          ? through
+          : through.filter(index => group.members.includes(index));
     const [only, another] = candidates;
     const name = this.#structure.points[point]!.name;
     if (only === undefined) {
-      this.#fault(this.#measure.range, group === undefined ? `No member runs to ${name}.` : `No member of ${group.name} runs to ${name}.`);
+      this.#fault(
+        this.#measure.range,
+        group === undefined ? `No member runs to ${name}.` : `No member of ${group.name} runs to ${name}.`,
+      );
       return undefined;
     }
     if (another !== undefined) {
-      this.#fault(this.#measure.range, `Several members meet at ${name}.`, `say in which: ${kind} at ${name} in ${this.#structure.members[only]!.name}`);
+      this.#fault(
+        this.#measure.range,
+        `Several members meet at ${name}.`,
+        `say in which: ${kind} at ${name} in ${this.#structure.members[only]!.name}`,
+      );
       return undefined;
     }
     return { kind: 'along', member: only, distance: distanceOf(this.#structure.members[only]!, point)! };
@@ -156,7 +191,8 @@ class MeasureReader {
 
   #along(): ResolvedMeasure | undefined {
     const { kind, in: within, between, range } = this.#measure;
-    if (within === undefined) return this.#fault(range, 'This asks of nothing: say at which point, or of which member.');
+    if (within === undefined)
+      return this.#fault(range, 'This asks of nothing: say at which point, or of which member.');
     const along = membersNamed([within], this.#geometry);
     if (along === undefined) return undefined;
     if (along.length === 0) return this.#fault(within.range, `${within.text} has no members.`);
@@ -165,7 +201,17 @@ class MeasureReader {
     if (between !== undefined && another !== undefined) {
       return this.#fault(between.range, `A stretch is of one member; ${within.text} is a group.`);
     }
-    const stretch = between === undefined ? undefined : readStretch(between, this.#geometry.members[first!]!, this.#geometry, this.#figures, this.#report, 'bad-question');
+    const stretch =
+      between === undefined
+        ? undefined
+        : readStretch(
+            between,
+            this.#geometry.members[first!]!,
+            this.#geometry,
+            this.#figures,
+            this.#report,
+            'bad-question',
+          );
     if (between !== undefined && stretch === undefined) return undefined;
     const part = stretch === undefined ? {} : { stretch: { start: stretch.start, end: stretch.end } };
     if (kind === 'sag') return { kind, along, reversed: stretch?.reversed ?? false, ...part };
@@ -183,15 +229,30 @@ class MeasureReader {
         const section = this.#structure.sections[leg.section]!;
         const needsModulus = member.kind === 'member';
         if (needsModulus && section.sectionModulusAssumed && section.sectionModulus !== undefined) {
-          this.#report.hint('assumed-modulus', this.#measure.range, assumedModulus(section.name), ASSUMED_MODULUS_REMEDY);
+          this.#report.hint(
+            'assumed-modulus',
+            this.#measure.range,
+            assumedModulus(section.name),
+            ASSUMED_MODULUS_REMEDY,
+          );
         }
-        const missing = section.area === undefined ? 'area A' : section.sectionModulus === undefined && needsModulus ? 'modulus' : undefined;
+        const missing =
+          section.area === undefined
+            ? 'area A'
+            : section.sectionModulus === undefined && needsModulus
+              ? 'modulus'
+              : undefined;
         if (missing === undefined || !sound) continue;
         sound = false;
-        this.#report.error('missing-property', this.#measure.range, `A stress in ${member.name} needs an area and a section modulus, and ${section.name} has no ${missing}.`, {
-          hint: `give ${section.name} its ${missing}`,
-          related: [{ range: section.range, message: `${section.name} is described here.` }],
-        });
+        this.#report.error(
+          'missing-property',
+          this.#measure.range,
+          `A stress in ${member.name} needs an area and a section modulus, and ${section.name} has no ${missing}.`,
+          {
+            hint: `give ${section.name} its ${missing}`,
+            related: [{ range: section.range, message: `${section.name} is described here.` }],
+          },
+        );
       }
     }
     return sound;

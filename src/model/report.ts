@@ -1,6 +1,7 @@
 // Where the builders of a model put what is wrong, and what an error costs: a case, or the whole structure.
-import type { Diagnostic } from '../language/diagnostic.ts';
+
 import type { DiagnosticCode } from '../language/codes.ts';
+import type { Diagnostic } from '../language/diagnostic.ts';
 import type { Range } from '../quantity/range.ts';
 
 export type Details = Pick<Diagnostic, 'hint' | 'related' | 'fix'>;

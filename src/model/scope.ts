@@ -35,9 +35,11 @@ export type Part =
  * `fallbackName`, with an empty head; one that has values only is a head and no structure.
  */
 export function divide(parts: readonly Part[], fallbackName: string): Scopes {
-  const scopes: { structure: StatementOf<'structure'> | undefined; statements: Statement[]; broken: BrokenStatement[] }[] = [
-    { structure: undefined, statements: [], broken: [] },
-  ];
+  const scopes: {
+    structure: StatementOf<'structure'> | undefined;
+    statements: Statement[];
+    broken: BrokenStatement[];
+  }[] = [{ structure: undefined, statements: [], broken: [] }];
   for (const part of parts) {
     if (part.kind === 'statement' && part.statement.kind === 'structure') {
       scopes.push({ structure: part.statement, statements: [part.statement], broken: [] });

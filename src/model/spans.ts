@@ -25,7 +25,11 @@ export function spansAt(structure: Structure, place: Location, within?: MemberSt
 }
 
 /** Coordinates of a place along a member. */
-export function positionAlong(structure: Structure, member: Member, distance: number): { readonly x: number; readonly y: number } {
+export function positionAlong(
+  structure: Structure,
+  member: Member,
+  distance: number,
+): { readonly x: number; readonly y: number } {
   const leg = member.legs.find(({ start, length }) => distance <= start + length) ?? member.legs.at(-1)!;
   const from = structure.points[leg.from]!;
   const to = structure.points[leg.to]!;
@@ -34,7 +38,12 @@ export function positionAlong(structure: Structure, member: Member, distance: nu
   return { x: from.x + part * (to.x - from.x), y: from.y + part * (to.y - from.y) };
 }
 
-function spansOfMember(structure: Structure, member: Member, distance: number, within: MemberStretch | undefined): Span[] {
+function spansOfMember(
+  structure: Structure,
+  member: Member,
+  distance: number,
+  within: MemberStretch | undefined,
+): Span[] {
   const slack = PLACE_TOLERANCE * member.length;
   const bounds = boundsOf(structure, member, within, slack);
   const spans: Span[] = [];
@@ -59,7 +68,10 @@ function boundsOf(structure: Structure, member: Member, within: MemberStretch | 
   const start = within?.start ?? 0;
   const end = within?.end ?? member.length;
   const named = (distance: number): Bound =>
-    all.find(other => Math.abs(other.distance - distance) <= slack) ?? { distance, name: `${Number(distance.toPrecision(4))} m` };
+    all.find(other => Math.abs(other.distance - distance) <= slack) ?? {
+      distance,
+      name: `${Number(distance.toPrecision(4))} m`,
+    };
   const inner = all.filter(
     ({ point, distance }) => distance > start + slack && distance < end - slack && bounds(structure, member, point),
   );

@@ -110,7 +110,9 @@ export interface Support {
 /** One held or sprung freedom. Several at one point may repeat or lie askew; together they span what is held. */
 export interface Restraint {
   /** A unit vector for a movement that is resisted, or the rotation. */
-  readonly freedom: { readonly kind: 'movement'; readonly x: number; readonly y: number } | { readonly kind: 'rotation' };
+  readonly freedom:
+    | { readonly kind: 'movement'; readonly x: number; readonly y: number }
+    | { readonly kind: 'rotation' };
   /** N/m or N m/rad; Infinity where held. */
   readonly stiffness: number;
 }

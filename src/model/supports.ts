@@ -7,7 +7,10 @@ import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
 import type { Restraint, Support, SupportSymbol } from './structure.ts';
 
-const MOVEMENT_STIFFNESS: Due = { dimension: divideDimensions(FORCE, LENGTH), words: 'a stiffness in force per length' };
+const MOVEMENT_STIFFNESS: Due = {
+  dimension: divideDimensions(FORCE, LENGTH),
+  words: 'a stiffness in force per length',
+};
 const ROTATION_STIFFNESS: Due = { dimension: MOMENT, words: 'a stiffness in moment per radian' };
 
 const X: Restraint = { freedom: { kind: 'movement', x: 1, y: 0 }, stiffness: Infinity };
@@ -41,7 +44,12 @@ export function readSupports(scope: Scope, geometry: Geometry, figures: Figures,
   return supports;
 }
 
-function readSupport(statement: StatementOf<'support'>, point: number, figures: Figures, report: Report): Support | undefined {
+function readSupport(
+  statement: StatementOf<'support'>,
+  point: number,
+  figures: Figures,
+  report: Report,
+): Support | undefined {
   const restraints: Restraint[] = [];
   const springs: ('x' | 'y' | 'rotation')[] = [];
   let kind: SupportSymbol['kind'] = 'held';
@@ -86,16 +94,25 @@ function readSupport(statement: StatementOf<'support'>, point: number, figures: 
       }
       case 'bears-only':
         sound = false;
-        report.error('not-evaluated-yet', item.range, 'A support that bears only is read but not evaluated by this version: its answers are withheld.', {
-          hint: 'leave `bears only` out, and check the sign of the reaction with >=',
-        });
+        report.error(
+          'not-evaluated-yet',
+          item.range,
+          'A support that bears only is read but not evaluated by this version: its answers are withheld.',
+          {
+            hint: 'leave `bears only` out, and check the sign of the reaction with >=',
+          },
+        );
         break;
     }
   }
   return sound ? { point, restraints, symbol: { kind, angle, springs }, range: statement.point.range } : undefined;
 }
 
-function readSpring(item: Extract<SupportItem, { kind: 'spring' }>, figures: Figures, report: Report): Restraint | undefined {
+function readSpring(
+  item: Extract<SupportItem, { kind: 'spring' }>,
+  figures: Figures,
+  report: Report,
+): Restraint | undefined {
   const due = item.freedom === 'rotation' ? ROTATION_STIFFNESS : MOVEMENT_STIFFNESS;
   const stiffness = figures.number(item.stiffness, due);
   if (stiffness === undefined) return undefined;
@@ -117,12 +134,21 @@ function readSpring(item: Extract<SupportItem, { kind: 'spring' }>, figures: Fig
 export function reportUnevaluatedJoints(statement: Statement, report: Report): void {
   if (statement.kind === 'connection') {
     report.flawed = true;
-    report.error('not-evaluated-yet', statement.keyword, 'A semi-rigid connection is read but not evaluated by this version: answers of this structure are withheld.');
+    report.error(
+      'not-evaluated-yet',
+      statement.keyword,
+      'A semi-rigid connection is read but not evaluated by this version: answers of this structure are withheld.',
+    );
   }
   if (statement.kind === 'release') {
     report.flawed = true;
-    report.error('not-evaluated-yet', statement.keyword, 'A release is read but not evaluated by this version: answers of this structure are withheld.', {
-      hint: `for a freed moment, write hinge ${statement.point.text} in ${statement.member.text}`,
-    });
+    report.error(
+      'not-evaluated-yet',
+      statement.keyword,
+      'A release is read but not evaluated by this version: answers of this structure are withheld.',
+      {
+        hint: `for a freed moment, write hinge ${statement.point.text} in ${statement.member.text}`,
+      },
+    );
   }
 }

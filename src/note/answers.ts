@@ -1,23 +1,25 @@
 // A worked question as an answer: the value in words, its place, the limit spelt out, met or not, and the two checks that
 // stand behind it. A number that the checks do not bear out is not shown.
-import { dimensionOf, isMovement } from '../model/questions.ts';
+
+import type { Under, Value } from '../language/syntax.ts';
+import { operandsOf } from '../model/operands.ts';
 import type { ResolvedMeasure } from '../model/question.ts';
+import { dimensionOf, isMovement } from '../model/questions.ts';
 import type { Report } from '../model/report.ts';
 import { type Span, spansAt } from '../model/spans.ts';
 import type { Structure } from '../model/structure.ts';
 import { LENGTH, sameDimension } from '../quantity/dimension.ts';
 import { dimensionName, siUnit } from '../quantity/dimension-names.ts';
-import type { DisplayUnits } from '../quantity/display.ts';
+import type { DisplayKind, DisplayUnits } from '../quantity/display.ts';
 import { significant } from '../quantity/number.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
-import type { Operand, Under, Value } from '../language/syntax.ts';
 import { answerInWords, displayKind, show } from './phrases.ts';
 import type { Alternative, Answer, AnswerPlace, Check } from './result.ts';
 import { differenceOf, MOST_DIFFERENCE } from './second-road.ts';
 import type { Question, Series } from './series.ts';
-import type { StructureState } from './structure-state.ts';
 import { stiffnessFactor } from './stiffness.ts';
+import type { StructureState } from './structure-state.ts';
 
 export interface AnswerInputs {
   readonly question: Question;
@@ -85,7 +87,11 @@ function unitOf(what: Value): string {
   return what.kind === 'operand' && what.operand.kind === 'measure' ? siUnit(dimensionOf(what.operand.measure)) : '';
 }
 
-function underInWords(question: Question, series: Series | undefined, wordsOf: (range: Range) => string): string | null {
+function underInWords(
+  question: Question,
+  series: Series | undefined,
+  wordsOf: (range: Range) => string,
+): string | null {
   if (question.under !== undefined) return underWords(question.under, wordsOf);
   if (series?.measure === undefined) return null;
   return series.alternatives[0]!.text.replace(/( \(.*?\))?:.*$/s, '');
@@ -108,8 +114,15 @@ function asked(series: Series): { readonly measure: ResolvedMeasure; readonly al
 function inWords({ state, units }: AnswerInputs, series: Series): string {
   const value = series.values[series.governing]!;
   const structure = state.structure(() => undefined);
-  if (series.measure === undefined || structure === undefined) return show(value, units);
+  if (series.measure === undefined || structure === undefined) return show(value, units, kindOf(series, value));
   return answerInWords(series.measure, value, units, structure, placeInMember(series));
+}
+
+/** How a value of the question is shown: as its measure, or as a movement where it is a length worked from movements. */
+function kindOf({ measure, taken }: Series, { dimension }: Quantity): DisplayKind | undefined {
+  if (measure !== undefined) return displayKind(measure);
+  const moves = taken.some(({ measure: { kind } }) => isMovement(kind));
+  return moves && sameDimension(dimension, LENGTH) ? 'deflection' : undefined;
 }
 
 function placeInMember(series: Series): { readonly member: number; readonly distance: number } | undefined {
@@ -132,7 +145,9 @@ function sidesInWords({ state, units }: AnswerInputs, series: Series): string | 
   const structure = state.structure(() => undefined);
   if (sides === undefined || series.measure === undefined || structure === undefined) return undefined;
   const { dimension } = series.values[series.governing]!;
-  const words = sides.map(value => answerInWords(series.measure!, { value, dimension }, units, structure, placeInMember(series)));
+  const words = sides.map(value =>
+    answerInWords(series.measure!, { value, dimension }, units, structure, placeInMember(series)),
+  );
   return `${words[0]} before, ${words[1]} behind`;
 }
 
@@ -152,18 +167,29 @@ function readLimit(inputs: AnswerInputs, limit: Value, series: Series, value: Qu
   });
   if (quantity === undefined) return undefined;
   if (!sameDimension(quantity.dimension, value.dimension)) {
-    inputs.report.error('wrong-dimension', limit.range, `The limit is ${dimensionName(quantity.dimension)}, and what is asked is ${dimensionName(value.dimension)}.`);
+    inputs.report.error(
+      'wrong-dimension',
+      limit.range,
+      `The limit is ${dimensionName(quantity.dimension)}, and what is asked is ${dimensionName(value.dimension)}.`,
+    );
     return undefined;
   }
   return { quantity, display: limitInWords(inputs, limit, quantity, used, series) };
 }
 
 /** The span through the place of a measure; undefined where there is none, or two meet (reported). */
-export function spanOf(series: Series, structure: Structure | undefined, range: Range, report: Report): Span | undefined {
+export function spanOf(
+  series: Series,
+  structure: Structure | undefined,
+  range: Range,
+  report: Report,
+): Span | undefined {
   const { measure } = series;
   if (structure === undefined) return undefined;
   if (measure === undefined || measure.kind === 'reaction') {
-    report.error('bad-question', range, `${measure === undefined ? 'An expression' : 'A reaction'} has no span.`, { hint: 'say length(P, Q)' });
+    report.error('bad-question', range, `${measure === undefined ? 'An expression' : 'A reaction'} has no span.`, {
+      hint: 'say length(P, Q)',
+    });
     return undefined;
   }
   const place = series.measured[series.governing]?.place;
@@ -172,17 +198,32 @@ export function spanOf(series: Series, structure: Structure | undefined, range: 
   const spans = spansAt(structure, at, 'stretch' in measure ? measure.stretch : undefined);
   const [only, another] = spans;
   if (only !== undefined && another === undefined) return only;
-  report.error('bad-question', range, only === undefined ? 'No member runs through this place, so it has no span.' : `${spans.length === 2 ? 'Two spans meet' : 'Several spans meet'} at this place: ${spans.map(({ from, to }) => `${from}–${to}`).join(', ')}.`, {
-    hint: only === undefined ? 'say length(P, Q)' : `say which is meant: length(${only.from}, ${only.to})`,
-  });
+  report.error(
+    'bad-question',
+    range,
+    only === undefined
+      ? 'No member runs through this place, so it has no span.'
+      : `${spans.length === 2 ? 'Two spans meet' : 'Several spans meet'} at this place: ${spans.map(({ from, to }) => `${from}–${to}`).join(', ')}.`,
+    {
+      hint: only === undefined ? 'say length(P, Q)' : `say which is meant: length(${only.from}, ${only.to})`,
+    },
+  );
   return undefined;
 }
 
-function limitInWords({ wordsOf, units }: AnswerInputs, limit: Value, quantity: Quantity, span: Span | undefined, series: Series): string {
-  const kind = series.measure === undefined ? undefined : displayKind(series.measure);
-  const shown = show(quantity, units, kind);
+function limitInWords(
+  { wordsOf, units }: AnswerInputs,
+  limit: Value,
+  quantity: Quantity,
+  span: Span | undefined,
+  series: Series,
+): string {
+  const shown = show(quantity, units, kindOf(series, quantity));
   if (isPlain(limit)) return wordsOf(limit.range).replace('-', '−');
-  const spanWords = span === undefined ? '' : `span ${span.from}–${span.to} ${show({ value: span.length, dimension: LENGTH }, units, 'length')}`;
+  const spanWords =
+    span === undefined
+      ? ''
+      : `span ${span.from}–${span.to} ${show({ value: span.length, dimension: LENGTH }, units, 'length')}`;
   return `${replaceSpans(limit, spanWords, wordsOf)} = ${shown}`;
 }
 
@@ -192,8 +233,7 @@ function isPlain(limit: Value): boolean {
 
 /** The limit as written, with the bare word `span` spelt out. */
 function replaceSpans(limit: Value, words: string, wordsOf: (range: Range) => string): string {
-  const spans: Operand[] = [];
-  collectSpans(limit, spans);
+  const spans = operandsOf(limit).filter(({ kind }) => kind === 'span');
   let text = '';
   let from = limit.range.start;
   for (const { range } of spans) {
@@ -201,26 +241,34 @@ function replaceSpans(limit: Value, words: string, wordsOf: (range: Range) => st
     from = range.end;
   }
   text += wordsOf({ start: from, end: limit.range.end });
-  return (spans.length > 0 ? text.replace(/^ /, '').replace(/ \/(?=\S)/g, ' / ').replace(/ {2,}/g, ' ') : text).trim();
-}
-
-function collectSpans(value: Value, spans: Operand[]): void {
-  if (value.kind === 'operand' && value.operand.kind === 'span') spans.push(value.operand);
-  if (value.kind === 'negate') collectSpans(value.of, spans);
-  if (value.kind === 'binary') {
-    collectSpans(value.left, spans);
-    collectSpans(value.right, spans);
-  }
-  if (value.kind === 'call') for (const argument of value.arguments) collectSpans(argument, spans);
+  return (
+    spans.length > 0
+      ? text
+          .replace(/^ /, '')
+          .replace(/ \/(?=\S)/g, ' / ')
+          .replace(/ {2,}/g, ' ')
+      : text
+  ).trim();
 }
 
 // Judgement
 
 type Judgement = Pick<Answer, 'limit' | 'limitDisplay' | 'utilisation' | 'status' | 'stiffnessFactor'>;
 
-function judge(inputs: AnswerInputs, series: Series, { value, dimension }: Quantity, limit: Limit | undefined): Judgement {
+function judge(
+  inputs: AnswerInputs,
+  series: Series,
+  { value, dimension }: Quantity,
+  limit: Limit | undefined,
+): Judgement {
   const { question } = inputs;
-  const none = { limit: undefined, limitDisplay: undefined, utilisation: undefined, status: 'none', stiffnessFactor: undefined } as const;
+  const none = {
+    limit: undefined,
+    limitDisplay: undefined,
+    utilisation: undefined,
+    status: 'none',
+    stiffnessFactor: undefined,
+  } as const;
   if (question.kind === 'find' || limit === undefined) return none;
   const most = limit.quantity.value;
   const shown = { limit: limit.quantity, limitDisplay: limit.display };
@@ -243,7 +291,13 @@ function judge(inputs: AnswerInputs, series: Series, { value, dimension }: Quant
   return { ...shown, utilisation, status: met ? 'ok' : 'fails', stiffnessFactor: factor };
 }
 
-function reportAbove(inputs: AnswerInputs, value: Quantity, series: Series, limit: Limit, factor: number | undefined): void {
+function reportAbove(
+  inputs: AnswerInputs,
+  value: Quantity,
+  series: Series,
+  limit: Limit,
+  factor: number | undefined,
+): void {
   const { question } = inputs;
   const words = enoughDigits(inputs, value, limit.quantity, series);
   const movement = series.measure !== undefined && isMovement(series.measure.kind);
@@ -253,19 +307,32 @@ function reportAbove(inputs: AnswerInputs, value: Quantity, series: Series, limi
       : movement
         ? ' More stiffness alone does not mend it: what is imposed passes the limit by itself.'
         : '';
-  inputs.report.warn('limit-exceeded', question.name.range, `${question.name.text} is over its limit: ${words.value}, limit ${words.limit}${limitSource(limit, words.limit)}.${stiffness}`);
+  inputs.report.warn(
+    'limit-exceeded',
+    question.name.range,
+    `${question.name.text} is over its limit: ${words.value}, limit ${words.limit}${limitSource(limit, words.limit)}.${stiffness}`,
+  );
 }
 
 function reportBelow(inputs: AnswerInputs, series: Series, limit: Limit): void {
   const { question } = inputs;
   const value = series.values[series.governing]!;
   const words = enoughDigits(inputs, value, limit.quantity, series);
-  inputs.report.warn('limit-exceeded', question.name.range, `${question.name.text} is under its limit: ${inWords(inputs, series)}, where at least ${words.limit} is asked.`);
+  inputs.report.warn(
+    'limit-exceeded',
+    question.name.range,
+    `${question.name.text} is under its limit: ${inWords(inputs, series)}, where at least ${words.limit} is asked.`,
+  );
 }
 
 /** More digits where rounding to four would hide that a limit is not met. */
-function enoughDigits({ units }: AnswerInputs, value: Quantity, limit: Quantity, series: Series): { readonly value: string; readonly limit: string } {
-  const kind = series.measure === undefined ? undefined : displayKind(series.measure);
+function enoughDigits(
+  { units }: AnswerInputs,
+  value: Quantity,
+  limit: Quantity,
+  series: Series,
+): { readonly value: string; readonly limit: string } {
+  const kind = kindOf(series, value);
   const size = { ...value, value: Math.abs(value.value) };
   const short = { value: show(size, units, kind), limit: show(limit, units, kind) };
   if (short.value !== short.limit || limit.value === 0) return short;
@@ -293,8 +360,13 @@ function check(inputs: AnswerInputs, series: Series): Check | undefined {
     difference > MOST_DIFFERENCE
       ? `the two methods differ by ${significant(difference, 2)} of it`
       : `equilibrium leaves ${significant(residual, 2)} of the loads`;
-  report.error('answer-withheld', question.name.range, `${question.name.text} is withheld: ${why}, and at most ${MOST_DIFFERENCE} is accepted.`, {
-    hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
-  });
+  report.error(
+    'answer-withheld',
+    question.name.range,
+    `${question.name.text} is withheld: ${why}, and at most ${MOST_DIFFERENCE} is accepted.`,
+    {
+      hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
+    },
+  );
   return undefined;
 }

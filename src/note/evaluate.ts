@@ -1,8 +1,9 @@
 // From a note's text to all that it says: the one function that server, page and command line are faces of. Pure: the same
 // text gives the same result, and no text makes it fail.
+
+import type { Diagnostic } from '../language/diagnostic.ts';
 import { wordsOf } from '../language/lines.ts';
 import { parseProse, parseStatements } from '../language/parse.ts';
-import type { Diagnostic } from '../language/diagnostic.ts';
 import type { Statement } from '../language/syntax.ts';
 import { resolveNames } from '../model/names.ts';
 import { divide, type Part } from '../model/scope.ts';
@@ -79,7 +80,17 @@ interface FenceRead {
 function readFence(fence: SourceFence, text: string): FenceRead {
   if (fence.kind !== 'calculation') {
     const what = fence.kind === 'record' ? 'A record' : 'A signature';
-    return { statements: [], parts: [], diagnostics: [error('not-evaluated-yet', firstLine(fence, text), `${what} is read but not evaluated by this version: what it says is neither written nor checked.`)] };
+    return {
+      statements: [],
+      parts: [],
+      diagnostics: [
+        error(
+          'not-evaluated-yet',
+          firstLine(fence, text),
+          `${what} is read but not evaluated by this version: what it says is neither written nor checked.`,
+        ),
+      ],
+    };
   }
   const size = fence.range.end - fence.range.start;
   if (size > MOST_FENCE) {
@@ -95,7 +106,8 @@ function readFence(fence: SourceFence, text: string): FenceRead {
     parts.push({ kind: 'broken', broken: { keyword, name: names[0]?.text, start: range.start } });
   }
   for (const { code, range } of diagnostics) {
-    if (code === 'stray-continuation') parts.push({ kind: 'broken', broken: { keyword: '', name: undefined, start: range.start } });
+    if (code === 'stray-continuation')
+      parts.push({ kind: 'broken', broken: { keyword: '', name: undefined, start: range.start } });
   }
   parts.sort((a, b) => startOf(a) - startOf(b));
   return { statements, parts, diagnostics };

@@ -3,25 +3,27 @@
 import type { Diagnostic } from '../language/diagnostic.ts';
 import type { Item, Operand, Statement, StatementOf, Value } from '../language/syntax.ts';
 import { Library } from '../model/library.ts';
-import type { Definition, Names } from '../model/names.ts';
 import { usesInValue } from '../model/name-uses.ts';
+import type { Definition, Names } from '../model/names.ts';
+import { operandsOf } from '../model/operands.ts';
+import { isMovement } from '../model/questions.ts';
 import { Report } from '../model/report.ts';
 import { belongsToStructure, type Scope, type Scopes } from '../model/scope.ts';
+import { LENGTH, sameDimension } from '../quantity/dimension.ts';
 import { siUnit } from '../quantity/dimension-names.ts';
 import { type DisplayUnits, METRIC, readDisplay } from '../quantity/display.ts';
-import { LENGTH } from '../quantity/dimension.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { answerTo, spanOf } from './answers.ts';
 import type { SourceSpan } from './fences.ts';
 import { Once } from './once.ts';
 import { show } from './phrases.ts';
+import { remarksOn } from './remarks.ts';
 import type { Answer, Combination, NamedValue, ProseValue, StructureResult } from './result.ts';
 import { type Question, type Series, seriesOf } from './series.ts';
 import type { Memory } from './solved.ts';
 import { StructureState } from './structure-state.ts';
 import { Values } from './values.ts';
-import { remarksOn } from './remarks.ts';
 
 export interface EvaluationInputs {
   readonly text: string;
@@ -47,7 +49,8 @@ export class NoteEvaluation {
     const { names, scopes } = inputs;
     this.#values = new Values(names, this.#report, {
       geometry: (scope, range) => this.#geometry(scope, range),
-      supported: scope => scope.statements.flatMap(statement => (statement.kind === 'support' ? [statement.point.text] : [])),
+      supported: scope =>
+        scope.statements.flatMap(statement => (statement.kind === 'support' ? [statement.point.text] : [])),
       result: (definition, range) => this.#result(definition, range),
       span: (definition, range) => this.#spanOfResult(definition, range),
     });
@@ -96,14 +99,18 @@ export class NoteEvaluation {
   /** A value in prose, as the structure last spoken of above it sees names. */
   prose(span: SourceSpan, value: Value | undefined, diagnostics: readonly Diagnostic[]): ProseValue {
     this.#report.diagnostics.push(...diagnostics);
-    const common = { line: span.line + 1, text: this.#inputs.wordsOf({ start: span.start, end: span.start + span.text.length }), range: span.range };
+    const common = {
+      line: span.line + 1,
+      text: this.#inputs.wordsOf({ start: span.start, end: span.start + span.text.length }),
+      range: span.range,
+    };
     const scope = this.#scopeAbove(span.range.start);
     if (value === undefined) return { ...common, quantity: undefined, unit: '', display: '' };
     this.#useNames(scope, value);
     const quantity = this.#values.figures(scope, this.#report).quantity(value);
     if (quantity === undefined) return { ...common, quantity, unit: '', display: '' };
     const answer = this.#answerNamed(scope, value);
-    const display = answer?.quantity === undefined ? show(quantity, this.#unitsOf(scope)) : answer.display;
+    const display = answer?.quantity === undefined ? this.#show(scope, value, quantity) : answer.display;
     return { ...common, quantity, unit: siUnit(quantity.dimension), display };
   }
 
@@ -114,7 +121,9 @@ export class NoteEvaluation {
   /** Indices of the structures that statements are of. */
   structuresIn(statements: readonly Statement[]): number[] {
     const wanted = new Set(statements);
-    return this.#states.flatMap((state, index) => (state.scope.statements.some(statement => wanted.has(statement)) ? [index] : []));
+    return this.#states.flatMap((state, index) =>
+      state.scope.statements.some(statement => wanted.has(statement)) ? [index] : [],
+    );
   }
 
   // Structures
@@ -126,9 +135,14 @@ export class NoteEvaluation {
   #geometry(scope: Scope, range: Range) {
     const state = this.#stateOf(scope);
     if (state === undefined) {
-      this.#report.error('bad-value', range, 'A length between points is that of a structure; this stands before the first.', {
-        hint: 'move the value behind the structure line',
-      });
+      this.#report.error(
+        'bad-value',
+        range,
+        'A length between points is that of a structure; this stands before the first.',
+        {
+          hint: 'move the value behind the structure line',
+        },
+      );
       return undefined;
     }
     return state.geometry(() => {
@@ -148,7 +162,12 @@ export class NoteEvaluation {
       .map(({ name, kind, alternatives }) => ({
         name,
         kind,
-        alternatives: alternatives.map(({ label, text, factors }) => ({ label, text, factors, solution: () => this.#solution(state, factors) })),
+        alternatives: alternatives.map(({ label, text, factors }) => ({
+          label,
+          text,
+          factors,
+          solution: () => this.#solution(state, factors),
+        })),
       }));
     return {
       structure,
@@ -167,7 +186,8 @@ export class NoteEvaluation {
 
   #solution(state: StructureState, factors: readonly number[]) {
     const solved = state.solved(() => undefined);
-    if (solved === undefined) throw new Error('a combination of a structure without a solution was asked for its solution');
+    if (solved === undefined)
+      throw new Error('a combination of a structure without a solution was asked for its solution');
     return solved.solution(factors);
   }
 
@@ -205,7 +225,12 @@ export class NoteEvaluation {
     if (operand.kind !== 'property') return undefined;
     const owner = names.find(scope, ['section', 'material', 'structure'], operand.of.text);
     if (owner?.namespace !== 'structure') return undefined;
-    return names.entries.find(entry => entry.namespace === 'result' && entry.name === operand.property.text && entry.scope.structure === owner.statement);
+    return names.entries.find(
+      entry =>
+        entry.namespace === 'result' &&
+        entry.name === operand.property.text &&
+        entry.scope.structure === owner.statement,
+    );
   }
 
   #result(definition: Definition, range: Range): { readonly quantity: Quantity; readonly chosen: boolean } | undefined {
@@ -218,7 +243,12 @@ export class NoteEvaluation {
     const series = this.#seriesOf(definition, range);
     const state = this.#stateOf(definition.scope);
     if (series === undefined || state === undefined) return undefined;
-    const span = spanOf(series, state.structure(() => undefined), range, state.report);
+    const span = spanOf(
+      series,
+      state.structure(() => undefined),
+      range,
+      state.report,
+    );
     return span === undefined ? undefined : { value: span.length, dimension: LENGTH };
   }
 
@@ -263,10 +293,23 @@ export class NoteEvaluation {
       name: owner === undefined ? name : `${owner}.${name}`,
       quantity,
       unit: quantity === undefined ? '' : siUnit(quantity.dimension),
-      display: quantity === undefined ? '' : show(quantity, this.#unitsOf(scope)),
+      display: quantity === undefined || statement.kind !== 'let' ? '' : this.#show(scope, statement.value, quantity),
       range: statement.range,
       nameRange: definition.definition,
     };
+  }
+
+  /** A length that is worked from movements is shown as one. */
+  #show(scope: Scope, value: Value, quantity: Quantity): string {
+    const movement = operandsOf(value).some(operand => {
+      const result = this.#resultNamed(scope, operand);
+      return (
+        result !== undefined &&
+        this.#seriesOf(result, operand.range)?.taken.some(({ measure }) => isMovement(measure.kind))
+      );
+    });
+    const asMovement = movement && sameDimension(quantity.dimension, LENGTH);
+    return show(quantity, this.#unitsOf(scope), asMovement ? 'deflection' : undefined);
   }
 
   #unitsOf(scope: Scope): DisplayUnits {
@@ -281,7 +324,8 @@ export class NoteEvaluation {
         if (statement.kind !== 'display') continue;
         const read = readDisplay(statement.setting, units);
         units = read.units;
-        for (const { code, range, message, hint } of read.problems) this.#report.error(code, range, message, hint === undefined ? {} : { hint });
+        for (const { code, range, message, hint } of read.problems)
+          this.#report.error(code, range, message, hint === undefined ? {} : { hint });
       }
       this.#display.set(scope, units);
     }
@@ -301,17 +345,33 @@ export class NoteEvaluation {
 
   /** Statements of a structure in the head of a note with structures, and what the head holds that is not evaluated. */
   #reportHead(): void {
-    for (const statement of this.#inputs.scopes.head.statements) {
-      if (belongsToStructure(statement)) {
-        this.#report.error('bad-statement', statement.keyword, `This ${statement.kind} belongs to a structure, and none has begun.`, {
-          hint: 'move it behind a structure line',
-        });
-      }
+    const { statements } = this.#inputs.scopes.head;
+    // A structure line is missing, or stands too far down: one mistake, told at the first line that it concerns.
+    const misplaced = statements.find(belongsToStructure);
+    if (misplaced !== undefined) {
+      this.#report.error(
+        'bad-statement',
+        misplaced.keyword,
+        `This ${misplaced.kind} belongs to a structure, and none has begun.`,
+        {
+          hint: 'write a structure line above it',
+        },
+      );
+    }
+    for (const statement of statements) {
       if (statement.kind === 'use') {
-        this.#report.error('not-evaluated-yet', statement.range, 'Another note or table is read but not evaluated by this version: answers that may depend on it are withheld.');
+        this.#report.error(
+          'not-evaluated-yet',
+          statement.range,
+          'Another note or table is read but not evaluated by this version: answers that may depend on it are withheld.',
+        );
       }
       if (statement.kind === 'assume' && statement.assumption.kind === 'shear deformation') {
-        this.#report.error('not-evaluated-yet', statement.range, 'Shear deformation is read but not evaluated by this version: answers of every structure are withheld.');
+        this.#report.error(
+          'not-evaluated-yet',
+          statement.range,
+          'Shear deformation is read but not evaluated by this version: answers of every structure are withheld.',
+        );
       }
     }
   }

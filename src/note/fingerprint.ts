@@ -7,16 +7,33 @@ import { solutionKey } from './solved.ts';
 const SOLVER = 1;
 
 /** `3f9c-a20b-771e`: 48 bits, enough to tell states of one note apart; no defence against forgery. */
-export function fingerprintOf(structures: readonly StructureResult[], answers: readonly Answer[], values: readonly NamedValue[]): string {
+export function fingerprintOf(
+  structures: readonly StructureResult[],
+  answers: readonly Answer[],
+  values: readonly NamedValue[],
+): string {
   const state = JSON.stringify([
     SOLVER,
     structures.map(({ name, structure, combinations }) => [
       name,
       structure === undefined ? '' : solutionKey(structure),
-      structure === undefined ? [] : [structure.points, structure.members, structure.cases].map(all => all.map(({ name }) => name)),
-      combinations.map(({ name, alternatives }) => [name, alternatives.map(({ label, factors }) => [label ?? '', factors])]),
+      structure === undefined
+        ? []
+        : [structure.points, structure.members, structure.cases].map(all => all.map(({ name }) => name)),
+      combinations.map(({ name, alternatives }) => [
+        name,
+        alternatives.map(({ label, factors }) => [label ?? '', factors]),
+      ]),
     ]),
-    answers.map(({ structure, name, kind, measure, under, comparison, limit }) => [structure, name, kind, measure, under, comparison ?? '', limit?.value ?? '']),
+    answers.map(({ structure, name, kind, measure, under, comparison, limit }) => [
+      structure,
+      name,
+      kind,
+      measure,
+      under,
+      comparison ?? '',
+      limit?.value ?? '',
+    ]),
     values.map(({ name, quantity }) => [name, quantity?.value ?? '', quantity?.dimension ?? '']),
   ]);
   const digits = hash(state);

@@ -60,14 +60,15 @@ function describe(structure: Structure, mechanism: Mechanism): string {
   const [way] = ways;
   const names = pointsNamed(structure, mechanism.points);
   const many = mechanism.points.length > 1;
-  if (all && ways.size === 1 && sameMovement(mechanism)) {
+  if (all && isTranslation(structure, mechanism)) {
     return `Nothing holds ${what} ${isLevel(movementOf(mechanism, mechanism.points[0]!)) ? 'sideways' : 'that way'}: ${names} can move ${way}${many ? ' together' : ''}.`;
   }
   if (all) {
     const centre = centreOf(structure, mechanism);
     return `Nothing stops ${what} from turning${centre === undefined ? '' : ` about ${centre}`}: ${names} can move.`;
   }
-  if (ways.size === 1) return `${names} can move ${way}${many ? ' together' : ''}: nothing holds this part, a mechanism of ${what}.`;
+  if (ways.size === 1)
+    return `${names} can move ${way}${many ? ' together' : ''}: nothing holds this part, a mechanism of ${what}.`;
   const each = mechanism.points
     .slice(0, MOST_NAMED)
     .map(point => `${structure.points[point]!.name} ${direction(movementOf(mechanism, point))}`);
@@ -76,7 +77,10 @@ function describe(structure: Structure, mechanism: Mechanism): string {
 
 function describeTurning(structure: Structure, { turning, members }: Mechanism): string {
   const names = pointsNamed(structure, turning);
-  const what = members.length > 0 ? `${list(members.map(index => structure.members[index]!.name))} can turn in place` : `the joint at ${names} can turn`;
+  const what =
+    members.length > 0
+      ? `${list(members.map(index => structure.members[index]!.name))} can turn in place`
+      : `the joint at ${names} can turn`;
   return `Nothing holds the rotation at ${names}: ${what}.`;
 }
 
@@ -99,9 +103,14 @@ function sizeOf({ movements }: Mechanism, point: number): number {
   return Math.hypot(movements[2 * point]!, movements[2 * point + 1]!);
 }
 
-function sameMovement(mechanism: Mechanism): boolean {
-  const [first, ...rest] = mechanism.points.map(point => movementOf(mechanism, point));
-  return rest.every(({ x, y }) => Math.hypot(x - first!.x, y - first!.y) < 1e-6);
+/** Whether every point of the members that move does so by the same amount. */
+function isTranslation(structure: Structure, mechanism: Mechanism): boolean {
+  const first = movementOf(mechanism, mechanism.points[0]!);
+  const body = mechanism.members.flatMap(index => structure.members[index]!.legs.flatMap(({ from, to }) => [from, to]));
+  return [...mechanism.points, ...body].every(point => {
+    const { x, y } = movementOf(mechanism, point);
+    return Math.hypot(x - first.x, y - first.y) < 1e-6;
+  });
 }
 
 /** The point about which a rigid body turns: a named one where it stands there, else its place. */
@@ -137,7 +146,9 @@ function pointsNamed(structure: Structure, points: readonly number[]): string {
 }
 
 function shorten(names: readonly string[]): readonly string[] {
-  return names.length <= MOST_NAMED ? names : [...names.slice(0, MOST_NAMED - 1), `${names.length - MOST_NAMED + 1} more`];
+  return names.length <= MOST_NAMED
+    ? names
+    : [...names.slice(0, MOST_NAMED - 1), `${names.length - MOST_NAMED + 1} more`];
 }
 
 export function list(words: readonly string[]): string {

@@ -1,8 +1,9 @@
 // How large a solution is, by kind: what an answer is noise against. Rounding leaves some 1e-13 of the largest movement
 // or force where the true answer is nothing; a reaction of that size must not fail `>= 0 kN`.
-import type { Solution } from '../mechanics/solution.ts';
-import { evaluate, type Polynomial } from '../mechanics/polynomial.ts';
+
 import type { MeasureKind } from '../language/syntax.ts';
+import { evaluate, type Polynomial } from '../mechanics/polynomial.ts';
+import type { Solution } from '../mechanics/solution.ts';
 
 /** Largest sizes at joints, ends, middles and supports, SI. */
 export interface Magnitudes {

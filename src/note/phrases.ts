@@ -49,7 +49,11 @@ export function answerInWords(
   }
 }
 
-export function reactionInWords(component: 'vertical' | 'horizontal' | 'moment', size: string, positive: boolean): string {
+export function reactionInWords(
+  component: 'vertical' | 'horizontal' | 'moment',
+  size: string,
+  positive: boolean,
+): string {
   switch (component) {
     case 'vertical':
       return positive ? `${size} up` : `${size}, holds down`;
@@ -85,7 +89,11 @@ export function displayKind(measure: ResolvedMeasure): DisplayKind {
 }
 
 /** Below, above, left or right of the member as it stands: the underside is to the right of its travel. */
-function sideInTension(structure: Structure, place: { readonly member: number; readonly distance: number }, underside: boolean): string {
+function sideInTension(
+  structure: Structure,
+  place: { readonly member: number; readonly distance: number },
+  underside: boolean,
+): string {
   const { legs } = structure.members[place.member]!;
   const leg = legs.find(({ start, length }) => place.distance <= start + length) ?? legs.at(-1)!;
   const sign = underside ? 1 : -1;

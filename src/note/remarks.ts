@@ -58,7 +58,9 @@ function unusedCases({ scope, report }: StructureState, head: Scope): void {
 
 /** A case that has a title and no load, in the structure that names it. */
 function casesWithoutLoad({ scope, report }: StructureState): void {
-  const loaded = new Set(scope.statements.flatMap(statement => (statement.kind === 'load' ? [statement.case.text] : [])));
+  const loaded = new Set(
+    scope.statements.flatMap(statement => (statement.kind === 'load' ? [statement.case.text] : [])),
+  );
   for (const statement of scope.statements) {
     if (statement.kind !== 'case' || loaded.has(statement.name.text)) continue;
     report.warn('unused-case', statement.name.range, `${statement.name.text} has no load.`, {
@@ -73,7 +75,11 @@ function showsNotDrawn({ scope, report }: StructureState): void {
     if (statement.kind !== 'show') continue;
     const what = { working: 'The working', contributions: 'The table of contributions' }[statement.show.kind as string];
     if (what === undefined) continue;
-    report.hint('not-evaluated-yet', statement.show.range, `${what} is not drawn by this version; the page leaves it out.`);
+    report.hint(
+      'not-evaluated-yet',
+      statement.show.range,
+      `${what} is not drawn by this version; the page leaves it out.`,
+    );
   }
 }
 

@@ -163,7 +163,16 @@ export interface ProseValue {
   readonly range: Range;
 }
 
-export type Namespace = 'structure' | 'point' | 'member' | 'section' | 'material' | 'case' | 'combination' | 'value' | 'result';
+export type Namespace =
+  | 'structure'
+  | 'point'
+  | 'member'
+  | 'section'
+  | 'material'
+  | 'case'
+  | 'combination'
+  | 'value'
+  | 'result';
 
 /** One name with all its places: what hover, completion, go-to-definition and rename read. */
 export interface NameEntry {

@@ -45,9 +45,14 @@ export function differenceOf({ measure, place, value, factors, solved }: Taken):
 }
 
 /** The virtual loads of a movement, in the sense in which the measure is positive; undefined for what is no movement. */
-function unitActions(measure: ResolvedMeasure, place: Place | undefined, structure: Structure): readonly UnitAction[] | undefined {
+function unitActions(
+  measure: ResolvedMeasure,
+  place: Place | undefined,
+  structure: Structure,
+): readonly UnitAction[] | undefined {
   if (!isMovement(measure.kind)) return undefined;
-  const at: Location | undefined = place !== undefined ? { kind: 'along', ...place } : 'at' in measure ? measure.at : undefined;
+  const at: Location | undefined =
+    place !== undefined ? { kind: 'along', ...place } : 'at' in measure ? measure.at : undefined;
   if (at === undefined) return undefined;
   switch (measure.kind) {
     case 'deflection':

@@ -1,10 +1,11 @@
 // A question worked one alternative at a time: a measure, or an expression of measures, earlier results and values. Never
 // a mixture of two alternatives.
-import type { Measure, Operand, StatementOf, Value } from '../language/syntax.ts';
+import type { Measure, Operand, StatementOf } from '../language/syntax.ts';
 import { measure as takeMeasure } from '../mechanics/measure.ts';
 import { type AlternativeModel, alternativesUnder } from '../model/combinations.ts';
 import type { Figures } from '../model/figures.ts';
 import type { Definition } from '../model/names.ts';
+import { operandsOf } from '../model/operands.ts';
 import type { Measured, ResolvedMeasure, Seek } from '../model/question.ts';
 import { dimensionOf, resolveMeasure } from '../model/questions.ts';
 import type { Quantity } from '../quantity/quantity.ts';
@@ -36,7 +37,10 @@ export interface SeriesInputs {
   readonly state: StructureState;
   /** The series of an earlier result, of this or of another structure. */
   readonly seriesOf: (definition: Definition, range: Range) => Series | undefined;
-  readonly figures: (frame: { readonly measure: (measure: Measure) => Quantity | undefined; readonly result: (definition: Definition, range: Range) => Quantity | undefined }) => Figures;
+  readonly figures: (frame: {
+    readonly measure: (measure: Measure) => Quantity | undefined;
+    readonly result: (definition: Definition, range: Range) => Quantity | undefined;
+  }) => Figures;
   readonly plain: Figures;
   readonly resultNamed: (operand: Operand) => Definition | undefined;
 }
@@ -57,9 +61,12 @@ class SeriesReader {
   read(): Series | undefined {
     const { state } = this.#inputs;
     const { what } = this.#question;
-    const measures: Measure[] = [];
-    const results: { readonly definition: Definition; readonly range: Range }[] = [];
-    this.#collect(what, measures, results);
+    const operands = operandsOf(what);
+    const measures = operands.flatMap(operand => (operand.kind === 'measure' ? [operand.measure] : []));
+    const results = operands.flatMap(operand => {
+      const definition = this.#inputs.resultNamed(operand);
+      return definition === undefined ? [] : [{ definition, range: operand.range }];
+    });
     const earlier = results.map(({ definition, range }) => this.#inputs.seriesOf(definition, range));
     if (earlier.some(series => series === undefined)) return undefined;
     // Without a measure of its own there is nothing that `under` could go for.
@@ -72,14 +79,23 @@ class SeriesReader {
     if (own.some(({ cases }) => cases.some(name => state.report.flawedCases.has(name)))) return undefined;
     const running = this.#running(own, earlier as Series[], results);
     if (running === undefined) return undefined;
-    return this.#work(running, own, resolved, solved, (earlier as Series[]).flatMap(series => series.taken));
+    return this.#work(
+      running,
+      own,
+      resolved,
+      solved,
+      (earlier as Series[]).flatMap(series => series.taken),
+    );
   }
 
   /** The alternatives that `under` asks for; an empty list is never returned. */
   #alternatives(): readonly AlternativeModel[] | undefined {
     const { state } = this.#inputs;
     if (state.report.flawed) return undefined;
-    const asked = alternativesUnder(this.#question.under, state.combinations(() => this.#circle()));
+    const asked = alternativesUnder(
+      this.#question.under,
+      state.combinations(() => this.#circle()),
+    );
     if (state.report.flawed) return undefined;
     if ('problem' in asked) {
       const range = this.#question.under?.range ?? this.#question.what.range;
@@ -90,7 +106,11 @@ class SeriesReader {
   }
 
   #circle(): void {
-    this.#inputs.state.report.error('circular-value', this.#question.name.range, `${this.#question.name.text} depends on itself.`);
+    this.#inputs.state.report.error(
+      'circular-value',
+      this.#question.name.range,
+      `${this.#question.name.text} depends on itself.`,
+    );
   }
 
   #resolve(measures: readonly Measure[]): ReadonlyMap<Measure, ResolvedMeasure> | undefined {
@@ -119,9 +139,14 @@ class SeriesReader {
       if (series.alternatives.length < 2) continue;
       const { name } = results[i]!.definition;
       if (running.length > 1 && setOf(running) !== series.set) {
-        this.#inputs.state.report.error('bad-question', results[i]!.range, `${name} has alternatives of another combination than ${from}: one expression cannot run over both.`, {
-          hint: 'ask for the two in questions of their own, each with its limit',
-        });
+        this.#inputs.state.report.error(
+          'bad-question',
+          results[i]!.range,
+          `${name} has alternatives of another combination than ${from}: one expression cannot run over both.`,
+          {
+            hint: 'ask for the two in questions of their own, each with its limit',
+          },
+        );
         return undefined;
       }
       running = series.alternatives;
@@ -163,7 +188,8 @@ class SeriesReader {
     before: readonly Taken[],
   ): Series | undefined {
     const { what } = this.#question;
-    const alone = what.kind === 'operand' && what.operand.kind === 'measure' ? resolved.get(what.operand.measure) : undefined;
+    const alone =
+      what.kind === 'operand' && what.operand.kind === 'measure' ? resolved.get(what.operand.measure) : undefined;
     const values: Quantity[] = [];
     const measured: Measured[] = [];
     const taken: Taken[][] = [];
@@ -198,7 +224,10 @@ class SeriesReader {
     const solution = solved.solution(factors);
     const found = takeMeasure(solved.analysis.structure, solution, resolved, seek);
     const isMoment = asked.kind === 'reaction' && asked.component === 'moment';
-    return { ...found, value: withoutNoise(found.value, magnitudeFor(asked.kind, isMoment, solved.magnitudes(solution))) };
+    return {
+      ...found,
+      value: withoutNoise(found.value, magnitudeFor(asked.kind, isMoment, solved.magnitudes(solution))),
+    };
   }
 
   #evaluate(index: number, measure: (measure: Measure) => Quantity | undefined): Quantity | undefined {
@@ -220,31 +249,15 @@ class SeriesReader {
   /** Among alternatives: the least for `>=`, the greatest for a reaction with `<=`, otherwise the largest in size; the first among equals. */
   #governing(values: readonly Quantity[]): number {
     const { what } = this.#question;
-    const isReaction = what.kind === 'operand' && what.operand.kind === 'measure' && what.operand.measure.kind === 'reaction';
+    const isReaction =
+      what.kind === 'operand' && what.operand.kind === 'measure' && what.operand.measure.kind === 'reaction';
     let [best, rank] = [0, -Infinity];
     for (const [i, { value }] of values.entries()) {
-      const score = this.#seek() === 'least' ? -value : this.#question.kind === 'require' && isReaction ? value : Math.abs(value);
+      const score =
+        this.#seek() === 'least' ? -value : this.#question.kind === 'require' && isReaction ? value : Math.abs(value);
       if (score > rank + 1e-12 * Math.abs(rank) || rank === -Infinity) [best, rank] = [i, score];
     }
     return best;
-  }
-
-  #collect(value: Value, measures: Measure[], results: { definition: Definition; range: Range }[]): void {
-    switch (value.kind) {
-      case 'operand': {
-        if (value.operand.kind === 'measure') measures.push(value.operand.measure);
-        const definition = this.#inputs.resultNamed(value.operand);
-        if (definition !== undefined) results.push({ definition, range: value.operand.range });
-        return;
-      }
-      case 'negate':
-        return this.#collect(value.of, measures, results);
-      case 'binary':
-        this.#collect(value.left, measures, results);
-        return this.#collect(value.right, measures, results);
-      case 'call':
-        for (const argument of value.arguments) this.#collect(argument, measures, results);
-    }
   }
 }
 

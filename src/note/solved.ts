@@ -1,8 +1,8 @@
 // A structure with what it does: its analysis, the solutions of combinations and the second road, each worked once, when
 // first asked for. A structure that did not change is taken from memory with all of them.
 import { analyse } from '../mechanics/analyse.ts';
-import { combine } from '../mechanics/superposition.ts';
 import type { Analysis, Solution } from '../mechanics/solution.ts';
+import { combine } from '../mechanics/superposition.ts';
 import type { Structure } from '../model/structure.ts';
 import { type ForceMethod, prepare } from '../virtual-work/index.ts';
 import { type Magnitudes, magnitudesOf } from './magnitudes.ts';
@@ -78,7 +78,10 @@ export function solutionKey(structure: Structure): string {
     ]),
     members.map(({ kind, legs }) => [kind, ...legs.map(({ from, to, section }) => [from, to, section])]),
     hinges.map(({ point, member }) => [point, member ?? '']),
-    supports.map(({ point, restraints }) => [point, restraints.map(({ freedom, stiffness }) => [freedom, String(stiffness)])]),
+    supports.map(({ point, restraints }) => [
+      point,
+      restraints.map(({ freedom, stiffness }) => [freedom, String(stiffness)]),
+    ]),
     cases.length,
     loads.map(({ range: _range, source: _source, ...load }) => load),
   ]);

@@ -19,7 +19,8 @@ export function stiffnessFactor(
 ): number | undefined {
   if (!isMovement(asked.kind) || limit <= 0) return undefined;
   const { analysis } = solved;
-  if (!analysis.structure.loads.some(load => load.kind === 'movement' && factors[load.case] !== 0)) return Math.abs(value) / limit;
+  if (!analysis.structure.loads.some(load => load.kind === 'movement' && factors[load.case] !== 0))
+    return Math.abs(value) / limit;
   const [loads, imposed] = [loadPart(analysis, factors), imposedPart(analysis, factors)];
   const sizeAt = (factor: number): number => {
     const solution = superpose(analysis, [loads, imposed], [1 / factor, 1]);

@@ -1,21 +1,22 @@
 // One structure of a note on its way from statements to a solution. Each stage is worked out when it is first asked for;
 // a value that asks for a later stage than it may is a circle, and told as one.
+
+import { MAX_FREEDOMS } from '../mechanics/analyse.ts';
+import type { Analysis, Conflict } from '../mechanics/solution.ts';
 import { buildStructure } from '../model/build.ts';
-import { caseAlone, type CombinationModel, readCombinations } from '../model/combinations.ts';
+import { type CombinationModel, caseAlone, readCombinations } from '../model/combinations.ts';
 import { type Geometry, layOut } from '../model/geometry.ts';
 import type { Library } from '../model/library.ts';
 import type { Names } from '../model/names.ts';
 import { Report } from '../model/report.ts';
 import type { BrokenStatement, Scope } from '../model/scope.ts';
 import type { Structure } from '../model/structure.ts';
-import { MAX_FREEDOMS } from '../mechanics/analyse.ts';
-import type { Analysis, Conflict } from '../mechanics/solution.ts';
 import { nearest } from '../quantity/nearest.ts';
 import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
 import { describeInstability } from './instability.ts';
 import { Once } from './once.ts';
-import { type Memory, solutionKey, type Solved } from './solved.ts';
+import { type Memory, type Solved, solutionKey } from './solved.ts';
 import type { Values } from './values.ts';
 
 export interface StateInputs {
@@ -84,7 +85,8 @@ export class StructureState {
     this.#checkUnevaluated();
     const titles = new Map<string, string>();
     for (const statement of [...head.statements, ...scope.statements]) {
-      if (statement.kind === 'case' && statement.title !== undefined) titles.set(statement.name.text, statement.title.text);
+      if (statement.kind === 'case' && statement.title !== undefined)
+        titles.set(statement.name.text, statement.title.text);
     }
     const assumed = [...head.statements, ...scope.statements].some(
       statement => statement.kind === 'assume' && statement.assumption.kind === 'axially stiff',
@@ -108,17 +110,32 @@ export class StructureState {
       const own = this.scope.statements.includes(statement);
       if (statement.kind === 'use') {
         this.report.flawed = true;
-        if (own) this.report.error('not-evaluated-yet', statement.range, 'Another note or table is read but not evaluated by this version: answers that may depend on it are withheld.');
+        if (own)
+          this.report.error(
+            'not-evaluated-yet',
+            statement.range,
+            'Another note or table is read but not evaluated by this version: answers that may depend on it are withheld.',
+          );
       }
       if (statement.kind === 'carry') {
         this.report.flawed = true;
-        this.report.error('not-evaluated-yet', statement.range, 'A carried reaction is read but not evaluated by this version: answers of this structure are withheld.', {
-          hint: 'put the reaction on as a load, from its result: load dead: (seat of Rafter) down at D',
-        });
+        this.report.error(
+          'not-evaluated-yet',
+          statement.range,
+          'A carried reaction is read but not evaluated by this version: answers of this structure are withheld.',
+          {
+            hint: 'put the reaction on as a load, from its result: load dead: (seat of Rafter) down at D',
+          },
+        );
       }
       if (statement.kind === 'assume' && statement.assumption.kind === 'shear deformation') {
         this.report.flawed = true;
-        if (own) this.report.error('not-evaluated-yet', statement.range, 'Shear deformation is read but not evaluated by this version: answers of this structure are withheld.');
+        if (own)
+          this.report.error(
+            'not-evaluated-yet',
+            statement.range,
+            'Shear deformation is read but not evaluated by this version: answers of this structure are withheld.',
+          );
       }
     }
   }
@@ -130,9 +147,14 @@ export class StructureState {
     const { stability, tooLarge, conflict } = solved.analysis;
     if (tooLarge !== undefined) {
       this.#excuse = 'the structure is too large';
-      this.report.error('too-large', structure.range, `${structure.name} has more joints than are solved: about ${MAX_FREEDOMS} freedoms are taken, three a joint.`, {
-        hint: 'divide it into structures that hand reactions on',
-      });
+      this.report.error(
+        'too-large',
+        structure.range,
+        `${structure.name} has more joints than are solved: about ${MAX_FREEDOMS} freedoms are taken, three a joint.`,
+        {
+          hint: 'divide it into structures that hand reactions on',
+        },
+      );
       return undefined;
     }
     if (conflict !== undefined) return this.#conflict(structure, conflict);
@@ -148,9 +170,14 @@ export class StructureState {
     this.#excuse = 'an imposed movement contradicts members that keep their length';
     const { name } = structure.cases[index]!;
     const load = structure.loads.find(({ kind, case: of }) => kind === 'movement' && of === index);
-    this.report.error('bad-load', load?.range ?? structure.range, `In ${name} a support moves so that ${structure.members[member]!.name} would change its length by ${significant(Math.abs(amount) * 1000)} mm, and it is axially stiff: the force would be without bound.`, {
-      hint: 'give its section an area, or move the support across it',
-    });
+    this.report.error(
+      'bad-load',
+      load?.range ?? structure.range,
+      `In ${name} a support moves so that ${structure.members[member]!.name} would change its length by ${significant(Math.abs(amount) * 1000)} mm, and it is axially stiff: the force would be without bound.`,
+      {
+        hint: 'give its section an area, or move the support across it',
+      },
+    );
     return undefined;
   }
 
@@ -168,7 +195,19 @@ export class StructureState {
 }
 
 /** Keywords whose broken line costs less than the whole structure: what it would have defined is missed where it is used. */
-const CONTAINED = ['structure', 'case', 'material', 'section', 'let', 'combine', 'find', 'require', 'display', 'show', 'load'];
+const CONTAINED = [
+  'structure',
+  'case',
+  'material',
+  'section',
+  'let',
+  'combine',
+  'find',
+  'require',
+  'display',
+  'show',
+  'load',
+];
 
 /** Whether a line that could not be read may have been part of the structure itself. */
 function brokenBeyond(broken: readonly BrokenStatement[]): boolean {

@@ -30,7 +30,10 @@ export interface Structures {
   readonly geometry: (scope: Scope, range: Range) => Geometry | undefined;
   readonly supported: (scope: Scope) => readonly string[];
   /** The governing value, and whether it was chosen among alternatives. */
-  readonly result: (definition: Definition, range: Range) => { readonly quantity: Quantity; readonly chosen: boolean } | undefined;
+  readonly result: (
+    definition: Definition,
+    range: Range,
+  ) => { readonly quantity: Quantity; readonly chosen: boolean } | undefined;
   readonly span: (definition: Definition, range: Range) => Quantity | undefined;
 }
 
@@ -191,7 +194,12 @@ class Extent {
       return start === undefined || end === undefined ? [] : [Math.abs(end - start)];
     });
     const [first] = lengths;
-    if (first === undefined) return this.#fault(this.#range, `No member runs from ${from.text} to ${to.text}.`, 'write length(P, Q) for the straight length');
+    if (first === undefined)
+      return this.#fault(
+        this.#range,
+        `No member runs from ${from.text} to ${to.text}.`,
+        'write length(P, Q) for the straight length',
+      );
     if (lengths.every(length => Math.abs(length - first) <= 1e-9 * first)) return metre(first);
     return this.#fault(this.#range, `Several members run from ${from.text} to ${to.text}, and their lengths differ.`);
   }
@@ -203,7 +211,8 @@ class Extent {
       const index = this.#geometry.pointNamed.get(other);
       return index === undefined ? [] : [this.#geometry.points[index]!.y];
     });
-    if (levels.length === 0) return this.#fault(this.#range, 'A height is measured above the lowest support, and there is none.');
+    if (levels.length === 0)
+      return this.#fault(this.#range, 'A height is measured above the lowest support, and there is none.');
     return metre(point.y - Math.min(...levels));
   }
 

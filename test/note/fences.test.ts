@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { readFrontMatter } from '../../src/note/front-matter.ts';
 import { readSource } from '../../src/note/fences.ts';
+import { readFrontMatter } from '../../src/note/front-matter.ts';
 
 /** The lines of every fence as [text, the text at its place in the source]; they must agree. */
 function lines(text: string): string[] {
@@ -57,7 +57,10 @@ describe('values in prose', () => {
     });
   }
   test('code spans whose first word is tautline', () => {
-    expect(spans('tip `tautline tip`, ratio ``tautline tip / 2``, `tautline`, `tautlines x`')).toEqual(['tip', 'tip / 2']);
+    expect(spans('tip `tautline tip`, ratio ``tautline tip / 2``, `tautline`, `tautlines x`')).toEqual([
+      'tip',
+      'tip / 2',
+    ]);
   });
   test('not in code blocks, nor behind an escaped backtick', () => {
     expect(spans('\\`tautline a\\` and `tautline b`')).toEqual(['b']);
