@@ -7,7 +7,7 @@ import type { Preference } from './preference.ts';
 import { type ForceState, type PrimaryStructure, primaryForces, primaryStructure } from './primary.ts';
 import { flexibilityOf } from './statics.ts';
 import { addState, type UnitState, unitStates, workOf } from './unit-states.ts';
-import { strainsOf } from './work.ts';
+import { largestForce, strainsOf } from './work.ts';
 
 /** The response to one loading. */
 export interface Response {
@@ -21,6 +21,8 @@ export interface Response {
   readonly final: ForceState;
   /** Of `final`, as `strainsOf` in work.ts lays them out. */
   readonly strains: Float64Array;
+  /** The largest force, of `primary` or `final`, N; see `largestForce` in work.ts. */
+  readonly largest: number;
   /** An imposed movement would have to lengthen axially stiff members: there is no answer. */
   readonly contradicted: boolean;
 }
@@ -103,8 +105,9 @@ export class ForceMethod {
     let strains = strainsOf(statics, released);
     const contradicted = this.undeterminedStates.some(state => contradicts(state, strains));
     const gaps = gapsAt(states, strains);
+    const largest = largestForce(statics, released);
     if (states.length === 0) {
-      return { primary: released, gaps, redundants: gaps, final: released, strains, contradicted };
+      return { primary: released, gaps, redundants: gaps, final: released, strains, largest, contradicted };
     }
 
     const redundants = new Float64Array(states.length);
@@ -125,7 +128,8 @@ export class ForceMethod {
       if (settled) break;
       open = gapsAt(states, strains);
     }
-    return { primary: released, gaps, redundants, final, strains, contradicted };
+    const most = Math.max(largest, largestForce(statics, final));
+    return { primary: released, gaps, redundants, final, strains, largest: most, contradicted };
   }
 
   /** The cases with these factors, as one loading. */

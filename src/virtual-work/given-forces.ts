@@ -13,7 +13,7 @@ import { derivative, productIntegral, valueAt } from './polynomial.ts';
 import { type PrimaryStructure, virtualSystem } from './primary.ts';
 import type { SpanPiece } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, isUnknown, type StaticLeg, type Statics, unitOf } from './statics.ts';
-import { type RealForces, virtualWork, type Work } from './work.ts';
+import { type RealForces, virtualWork } from './work.ts';
 
 /** The strains that given forces cause, by unknown (see `strainsOf` in work.ts), with the forces themselves. */
 export interface GivenForces {
@@ -55,7 +55,7 @@ export function movementFromForces(
   primary: PrimaryStructure,
   { forces, strains }: GivenForces,
   actions: readonly UnitAction[],
-): Work {
+): number {
   const { statics } = primary;
   const virtual = virtualSystem(primary, actions);
   const spans = new Map<number, { pieces: readonly SpanPiece[] }>();

@@ -3,7 +3,7 @@
 import type { UnitAction } from '../model/question.ts';
 import type { ForceMethod } from './force-method.ts';
 import { type ForceState, virtualSystem } from './primary.ts';
-import { virtualWork, type Work } from './work.ts';
+import { virtualWork, workOfUnitForce, workOnGround } from './work.ts';
 
 /**
  * Σ action · movement, m or rad, under the cases with these factors (in the order of the structure's cases). NaN where
@@ -14,19 +14,32 @@ export function movement(forceMethod: ForceMethod, factors: readonly number[], a
   return movementOf(forceMethod, factors, virtualSystem(forceMethod.primary, actions)).value;
 }
 
+/** A movement, and the size below which it is nothing but rounding; m or rad. */
+export interface Movement {
+  readonly value: number;
+  readonly rounding: number;
+}
+
+/** Roundings of the largest force that a movement may have in it: some hundreds of terms, each of several steps. */
+const ROUNDING = 1e3 * Number.EPSILON;
+
 /**
- * The same with the virtual system at hand, for one question under many combinations, and with the size of its terms: a
- * movement that is nil by symmetry, or at a held point, is so to some 1e-13 of that size.
+ * The same with the virtual system at hand, for one question under many combinations, and with its rounding: what should
+ * be nil, by symmetry or as nothing bends, comes out below that on either road.
  */
-export function movementOf(forceMethod: ForceMethod, factors: readonly number[], virtual: ForceState): Work {
-  const sum = { value: forceMethod.wellConditioned ? 0 : Number.NaN, size: 0 };
+export function movementOf(forceMethod: ForceMethod, factors: readonly number[], virtual: ForceState): Movement {
+  const { statics } = forceMethod.primary;
+  let value = forceMethod.wellConditioned ? 0 : Number.NaN;
+  let force = 0;
+  let ground = 0;
   for (let index = 0; index < factors.length; index++) {
     const factor = factors[index]!;
     if (factor === 0) continue;
-    const { final, strains, contradicted } = forceMethod.case(index);
-    const { value, size } = virtualWork(forceMethod.primary.statics, virtual, final, strains);
-    sum.value += contradicted ? Number.NaN : factor * value;
-    sum.size += Math.abs(factor) * size;
+    const { final, strains, largest, contradicted } = forceMethod.case(index);
+    value += contradicted ? Number.NaN : factor * virtualWork(statics, virtual, final, strains);
+    force += Math.abs(factor) * largest;
+    ground += Math.abs(factor) * workOnGround(statics, virtual, final);
   }
-  return sum;
+  const size = force === 0 ? 0 : force * workOfUnitForce(statics, virtual);
+  return { value, rounding: ROUNDING * (size + ground) };
 }

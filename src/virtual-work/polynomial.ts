@@ -10,6 +10,14 @@ export function valueAt(coefficients: Polynomial, x: number): number {
   return value;
 }
 
+/** No value from 0 to `length` is larger in size. */
+export function bound(coefficients: Polynomial, length: number): number {
+  let value = 0;
+  for (let power = coefficients.length - 1; power >= 0; power--)
+    value = value * length + Math.abs(coefficients[power]!);
+  return value;
+}
+
 /** The same polynomial in y, where x = y + shift. */
 export function shifted(coefficients: Polynomial, shift: number): number[] {
   const result = coefficients.slice();

@@ -1,5 +1,5 @@
 // The work of one state of forces on the strains of another: the integrals of virtual work, leg by leg.
-import { productIntegral, shifted } from './polynomial.ts';
+import { bound, productIntegral, shifted } from './polynomial.ts';
 import type { ForceState } from './primary.ts';
 import type { SpanForces, SpanPiece } from './span.ts';
 import type { StaticLeg, Statics } from './statics.ts';
@@ -34,28 +34,64 @@ export function strainsOf(statics: Statics, { unknowns, spans, ground }: ForceSt
   return strains;
 }
 
-/** A sum beside the sum of the sizes of its terms, to which its rounding is relative. */
-export interface Work {
-  value: number;
-  size: number;
+/** Σ∫(N n/EA + M m/EI) dx + Σ R r/k − Σ r g of a virtual state on real forces, whose strains are given. */
+export function virtualWork(statics: Statics, virtual: ForceState, real: RealForces, strains: Float64Array): number {
+  let work = 0;
+  const { unknowns } = virtual;
+  for (let unknown = 0; unknown < unknowns.length; unknown++) work += unknowns[unknown]! * strains[unknown]!;
+  for (const [index, span] of virtual.spans) work += workWithin(statics.legs[index]!, index, span, real);
+  return work;
 }
 
-/** Σ∫(N n/EA + M m/EI) dx + Σ R r/k − Σ r g of a virtual state on real forces, whose strains are given. */
-export function virtualWork(statics: Statics, virtual: ForceState, real: RealForces, strains: Float64Array): Work {
-  let value = 0;
-  let size = 0;
-  const { unknowns } = virtual;
-  for (let unknown = 0; unknown < unknowns.length; unknown++) {
-    const term = unknowns[unknown]! * strains[unknown]!;
-    value += term;
-    size += Math.abs(term);
+/**
+ * The work of the virtual state if every unknown of the real one were as large as a force of 1 N makes it: what the
+ * rounding of a movement is relative to. It may be far more than the movement, as of a post that only its axial force,
+ * and no rounding, should shorten.
+ */
+export function workOfUnitForce({ legs, grounds, firstReaction }: Statics, { unknowns, spans }: ForceState): number {
+  let work = 0;
+  for (let index = 0; index < legs.length; index++) {
+    const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
+    const moments = Math.abs(unknowns[3 * index + 1]!) + Math.abs(unknowns[3 * index + 2]!);
+    work += axialFlexibility * length * Math.abs(unknowns[3 * index]!) + bendingFlexibility * length ** 2 * moments;
   }
-  for (const [index, span] of virtual.spans) {
-    const term = workWithin(statics.legs[index]!, index, span, real);
-    value += term;
-    size += Math.abs(term);
+  for (let index = 0; index < grounds.length; index++) {
+    work += grounds[index]!.flexibility * Math.abs(unknowns[firstReaction + index]!);
   }
-  return { value, size };
+  for (const [index, { startShear, endShear, endAxial }] of spans) {
+    const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
+    work += axialFlexibility * length * Math.abs(endAxial);
+    work += bendingFlexibility * length ** 3 * (Math.abs(startShear) + Math.abs(endShear));
+  }
+  return work;
+}
+
+/** The sizes of Σ r g, summed. */
+export function workOnGround({ firstReaction }: Statics, { unknowns }: ForceState, { ground }: ForceState): number {
+  let work = 0;
+  for (let index = 0; ground !== undefined && index < ground.length; index++) {
+    work += Math.abs(unknowns[firstReaction + index]! * ground[index]!);
+  }
+  return work;
+}
+
+/** The largest force of a state, N: of moments, with the leg's length for a lever. */
+export function largestForce({ legs, firstReaction }: Statics, { unknowns, spans }: ForceState): number {
+  let force = 0;
+  for (let index = 0; index < legs.length; index++) {
+    const moments = Math.max(Math.abs(unknowns[3 * index + 1]!), Math.abs(unknowns[3 * index + 2]!));
+    force = Math.max(force, Math.abs(unknowns[3 * index]!), moments / legs[index]!.length);
+  }
+  for (let reaction = firstReaction; reaction < unknowns.length; reaction++) {
+    force = Math.max(force, Math.abs(unknowns[reaction]!));
+  }
+  for (const [index, { pieces }] of spans) {
+    for (const { start, end, axialForce, bendingMoment } of pieces) {
+      const span = end - start;
+      force = Math.max(force, bound(axialForce, span), bound(bendingMoment, span) / legs[index]!.length);
+    }
+  }
+  return force;
 }
 
 /** What is read of a real state: see `ForceState`. */

@@ -14,7 +14,7 @@ support A: ${foot}
 support D: ${foot}
 load live: ${load}
 find thrust: reaction at A horizontal
-find up:     reaction at A
+find lift:   reaction at A
 find base:   moment at A in P1
 find knee:   moment at B in P1
 find far:    moment at C in G1
@@ -24,7 +24,7 @@ const KLEINLOGEL = 'Kleinlogel, Rigid Frame Formulas; Roark, Table 8.2 (from mem
 
 check('F01', 'pinned feet, load at the beam', KLEINLOGEL, portal('pinned', '5.2 kN right at B'), {
   thrust: -P / 2,
-  up: (-P * h) / L,
+  lift: (-P * h) / L,
   knee: (P * h) / 2,
   far: (-P * h) / 2,
   sway: (P * h ** 3 * (2 + 1 / k)) / (12 * EI),
@@ -46,7 +46,7 @@ check(
 check('F03', 'fixed feet, load at the beam', KLEINLOGEL, portal('fixed', '5.2 kN right at B'), {
   base: ((-P * h) / 2) * ((3 * k + 1) / (6 * k + 1)),
   knee: ((P * h) / 2) * ((3 * k) / (6 * k + 1)),
-  up: (-3 * P * h * k) / (L * (6 * k + 1)),
+  lift: (-3 * P * h * k) / (L * (6 * k + 1)),
   sway: (P * h ** 3 * (3 * k + 2)) / (12 * EI * (6 * k + 1)),
 });
 
