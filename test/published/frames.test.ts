@@ -27,7 +27,7 @@ check('F01', 'pinned feet, load at the beam', KLEINLOGEL, portal('pinned', '5.2 
   lift: (-P * h) / L,
   knee: (P * h) / 2,
   far: (-P * h) / 2,
-  sway: (P * h ** 3 * (2 + 1 / k)) / (12 * EI),
+  eaves: (P * h ** 3 * (2 + 1 / k)) / (12 * EI),
 });
 
 check(
@@ -38,7 +38,7 @@ check(
   {
     thrust: (w * L ** 2) / (4 * h * (2 * k + 3)),
     knee: (-w * L ** 2) / (4 * (2 * k + 3)),
-    sway: 0,
+    eaves: 0,
   },
   1e-3,
 );
@@ -47,7 +47,7 @@ check('F03', 'fixed feet, load at the beam', KLEINLOGEL, portal('fixed', '5.2 kN
   base: ((-P * h) / 2) * ((3 * k + 1) / (6 * k + 1)),
   knee: ((P * h) / 2) * ((3 * k) / (6 * k + 1)),
   lift: (-3 * P * h * k) / (L * (6 * k + 1)),
-  sway: (P * h ** 3 * (3 * k + 2)) / (12 * EI * (6 * k + 1)),
+  eaves: (P * h ** 3 * (3 * k + 2)) / (12 * EI * (6 * k + 1)),
 });
 
 check('F04', 'fixed feet, uniform load on the beam', KLEINLOGEL, portal('fixed', '2.75 kN/m down on G1'), {
