@@ -1,5 +1,6 @@
 // Loads, real or virtual, as the force method takes them: forces and couples on points, loads within legs, movements of
 // the ground.
+import { STANDARD_GRAVITY } from '../model/gravity.ts';
 import type { LineDirection, Load, Location } from '../model/structure.ts';
 import { emptySpanLoad, type SpanLoad } from './span.ts';
 import type { StaticLeg, Statics } from './statics.ts';
@@ -60,9 +61,6 @@ export function addAction(
   const [along, across] = inLocalAxes(leg, x, y);
   spanOf(loading, place.leg).forces.push({ at: place.distance, along, across, couple: moment });
 }
-
-/** m/s². */
-const STANDARD_GRAVITY = 9.80665;
 
 /** Places closer to an end of a leg than this share of its length stand at the point there. */
 const AT_THE_END = 1e-9;

@@ -24,7 +24,7 @@ export function check(
 ): void {
   test(`${id} ${what} [${source}]`, () => {
     const note = solved(SECTION + body.trim());
-    expect(codesOf(note)).toEqual([]);
+    expect(codesOf(note), JSON.stringify(note.diagnostics)).toEqual([]);
     checkAnswers(note, expected, scale);
   });
 }
@@ -39,7 +39,7 @@ export function checkLets(
 ): void {
   test(`${id} ${what} [${source}]`, () => {
     const note = solved(body.trim());
-    expect(codesOf(note)).toEqual([]);
+    expect(codesOf(note), JSON.stringify(note.diagnostics)).toEqual([]);
     checkValues(note, expected);
   });
 }

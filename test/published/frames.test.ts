@@ -18,7 +18,7 @@ find lift:   reaction at A
 find base:   moment at A in P1
 find knee:   moment at B in P1
 find far:    moment at C in G1
-find sway:   sway at B`;
+find eaves:  sway at B`;
 
 const KLEINLOGEL = 'Kleinlogel, Rigid Frame Formulas; Roark, Table 8.2 (from memory)';
 
