@@ -1,0 +1,205 @@
+// The fields of a level beam, stacked on its own horizontal scale: axial force where there is any, shear, moment, movement.
+import { evaluate } from '../mechanics/polynomial.ts';
+import type { Solution } from '../mechanics/solution.ts';
+import type { Structure } from '../model/structure.ts';
+import type { DisplayUnits } from '../quantity/display.ts';
+import { labelOf, toldReadings } from './beam-field-labels.ts';
+import { drawFieldOnLegs, FIELD_STYLES, type FieldName, sideOf, spotOfReading } from './field-curves.ts';
+import { asGiven, spaced, THIN, withUnit } from './figures.ts';
+import { path, type Spot } from './geometry.ts';
+import type { FillRole } from './ink.ts';
+import { roundedExaggeration } from './moved-shape.ts';
+import { type LabelRequest, placeLabels } from './placing.ts';
+import { largestSize, zeroCrossings } from './readings.ts';
+import type { Sheet } from './sheet.ts';
+import { type DrawnLeg, drawnLeg, segmentOf, spotOnLeg, type View, viewAt } from './view.ts';
+import { plain } from './words.ts';
+
+export interface BeamFieldsAt {
+  readonly view: View;
+  readonly units: DisplayUnits;
+  /** Of the combination or case. */
+  readonly name: string;
+  /** px: the first free height under what stands above. */
+  readonly top: number;
+}
+
+/** Largest ordinate, px. */
+const ORDINATE: Readonly<Record<FieldName, number>> = { axial: 26, shear: 33, moment: 31, movement: 30 };
+/** Beyond an extreme for its label, and between fields, px. */
+const LABEL_ROOM = 17;
+const BETWEEN = 8;
+/** The three lines of a title need this much over and under the axis, px. */
+const TITLE_UP = 20;
+const TITLE_DOWN = 26;
+/** Of the largest of its kind, a force smaller than this is rounding. */
+const NO_FORCE = 1e-9;
+
+const DOTS: Readonly<Record<FieldName, FillRole>> = { axial: 'ink', shear: 'bend', moment: 'bend', movement: 'move' };
+const TITLES: Readonly<Record<FieldName, string>> = {
+  axial: 'Axial force',
+  shear: 'Shear',
+  moment: 'Moment',
+  movement: 'Movement',
+};
+
+/** Draws them one under the other and returns the height at which they end. */
+export function drawBeamFields(sheet: Sheet, structure: Structure, solution: Solution, place: BeamFieldsAt): number {
+  let top = place.top;
+  const dots: { readonly field: FieldName; readonly axis: number; readonly spots: readonly Spot[] }[] = [];
+  for (const field of fieldsToDraw(structure, solution)) {
+    const drawn = drawField(sheet, structure, solution, field, { ...place, top });
+    dots.push({ field, axis: drawn.axis, spots: drawn.levels });
+    top = drawn.bottom + BETWEEN;
+  }
+  guideToExtremes(sheet, dots);
+  return top - BETWEEN;
+}
+
+function fieldsToDraw(structure: Structure, solution: Solution): FieldName[] {
+  const shear = largestSize(solution.members, 'shearForce');
+  const axial = largestSize(solution.members, 'axialForce');
+  const moment = largestSize(solution.members, 'bendingMoment');
+  const movement = largestSize(solution.members, 'transverseMovement');
+  const load = Math.max(shear, axial, Math.hypot(solution.applied.x, solution.applied.y));
+  const length = Math.max(...structure.members.map(member => member.length));
+  const fields: FieldName[] = [];
+  if (axial > NO_FORCE * load) fields.push('axial');
+  if (shear > NO_FORCE * load) fields.push('shear');
+  if (moment > NO_FORCE * load * length) fields.push('moment');
+  if (movement > 0) fields.push('movement');
+  return fields;
+}
+
+interface DrawnField {
+  readonly axis: number;
+  readonly bottom: number;
+  /** Dots of level extremes. */
+  readonly levels: readonly Spot[];
+}
+
+function drawField(
+  sheet: Sheet,
+  structure: Structure,
+  solution: Solution,
+  field: FieldName,
+  { view, units, name, top }: BeamFieldsAt,
+): DrawnField {
+  const style = FIELD_STYLES[field];
+  const largest = largestSize(solution.members, style.quantity);
+  const exaggeration = field === 'movement' ? roundedExaggeration(ORDINATE.movement / (largest * view.scale)) : 1;
+  const scale = field === 'movement' ? exaggeration * view.scale : ORDINATE[field] / largest;
+
+  // Find how far it reaches to either side, then set its axis on a half pixel.
+  const flat = legsOf(structure, axisView(structure, view, 0));
+  const told = solution.members.map(member => toldReadings(member, field, largest));
+  const heights = told.flatMap((list, m) =>
+    list.map(({ reading }) => spotOfReading(reading, flat[m] ?? [], style, scale).y),
+  );
+  const up = Math.max(TITLE_UP, -Math.min(0, ...heights) + (heights.some(y => y < 0) ? LABEL_ROOM : 0));
+  const down = Math.max(TITLE_DOWN, Math.max(0, ...heights) + (heights.some(y => y > 0) ? LABEL_ROOM : 0));
+  const axis = Math.ceil(top + up) + 0.5;
+
+  const legs = legsOf(structure, axisView(structure, view, axis));
+  const requests: LabelRequest[] = [];
+  const levels: Spot[] = [];
+  for (const [m, member] of solution.members.entries()) {
+    const drawn = legs[m] ?? [];
+    drawFieldOnLegs(sheet, member, drawn, style, scale);
+    for (const leg of drawn) {
+      sheet.line('outline', path(leg.from, leg.to));
+      sheet.obstacles.push(segmentOf(leg));
+    }
+    const from = structure.points[drawn[0]?.leg.from ?? 0]?.name ?? '';
+    for (const one of told[m] ?? []) {
+      const spot = spotOfReading(one.reading, drawn, style, scale);
+      const leg = drawn[one.reading.piece.leg];
+      if (leg === undefined) continue;
+      sheet.dot(DOTS[field], spot, 2.3);
+      if (one.reading.kind === 'level') levels.push(spot);
+      requests.push(labelOf(one, { field, spot, leg, from, units, largest }));
+    }
+    requests.push(...crossings(sheet, member, field, drawn, largest, units));
+  }
+  placeLabels(sheet, requests);
+  drawTitle(sheet, field, axis, name, units, exaggeration, everyTravelIsRight(structure));
+  return { axis, bottom: axis + down, levels };
+}
+
+/** The beam's points, set on the axis of a field. */
+function axisView(structure: Structure, view: View, axis: number): View {
+  const height = structure.points[0]?.y ?? 0;
+  return viewAt(structure, view.scale, view.spot(0, 0).x, axis + view.scale * height);
+}
+
+function legsOf(structure: Structure, view: View): DrawnLeg[][] {
+  return structure.members.map((member, m) => member.legs.map(leg => drawnLeg(m, leg, view)));
+}
+
+/** A tick where the value passes through zero, and for the moment its place on the empty side. */
+function crossings(
+  sheet: Sheet,
+  member: Solution['members'][number],
+  field: FieldName,
+  legs: readonly DrawnLeg[],
+  largest: number,
+  units: DisplayUnits,
+): LabelRequest[] {
+  if (field === 'movement' || field === 'axial') return [];
+  const style = FIELD_STYLES[field];
+  return zeroCrossings(member, style.quantity, largest).flatMap(distance => {
+    const leg = legs.find(({ leg: { start, length } }) => distance <= start + length);
+    if (leg === undefined) return [];
+    const spot = spotOnLeg(leg, distance);
+    sheet.line('tick', path({ x: spot.x, y: spot.y - 4 }, { x: spot.x, y: spot.y + 4 }));
+    if (field !== 'moment') return [];
+    const piece = member.pieces.find(({ end }) => distance < end);
+    const slope = piece === undefined ? 0 : evaluate(piece.shearForce, distance - piece.start);
+    // After the crossing the value has the sign of its slope.
+    const after = sideOf(slope, leg, style);
+    const onTheRight = { at: { x: spot.x + 5, y: spot.y + (after.y < 0 ? 13 : -6) }, anchor: 'start' as const };
+    const onTheLeft = { at: { x: spot.x - 5, y: spot.y + (after.y < 0 ? -6 : 13) }, anchor: 'end' as const };
+    const places = leg.along.x < 0 ? [onTheLeft, onTheRight] : [onTheRight, onTheLeft];
+    return [
+      { labels: [plain(withUnit(distance, units.length))], places, role: 'soft', size: 11, rank: -1, optional: true },
+    ];
+  });
+}
+
+function drawTitle(
+  sheet: Sheet,
+  field: FieldName,
+  axis: number,
+  name: string,
+  units: DisplayUnits,
+  exaggeration: number,
+  isRight: boolean,
+): void {
+  const unit = { axial: units.force, shear: units.force, moment: units.moment, movement: units.deflection }[field];
+  const note = {
+    axial: 'compression above',
+    shear: isRight ? '+ is up on the left' : '+ left of the travel',
+    moment: 'tension side',
+    movement: `drawn ×${THIN}${asGiven(exaggeration, { text: '', size: 1 })}`,
+  }[field];
+  sheet.words([{ text: TITLES[field], as: 'bold' }], { at: { x: 0, y: axis - 8 } });
+  sheet.words(plain(`${spaced(unit.text)}, ${name}`), { at: { x: 0, y: axis + 7 }, size: 11, role: 'soft' });
+  sheet.words(plain(note), { at: { x: 0, y: axis + 21 }, size: 11, role: 'soft' });
+}
+
+function everyTravelIsRight(structure: Structure): boolean {
+  return structure.members.every(({ legs }) => legs.every(({ cosine }) => cosine > 0));
+}
+
+/** Zero shear leads down to the moment's dot, and the movement's axis to its own. */
+function guideToExtremes(
+  sheet: Sheet,
+  drawn: readonly { readonly field: FieldName; readonly axis: number; readonly spots: readonly Spot[] }[],
+): void {
+  const shear = drawn.find(({ field }) => field === 'shear');
+  for (const { field, axis, spots } of drawn) {
+    if (field !== 'moment' && field !== 'movement') continue;
+    const from = field === 'moment' && shear !== undefined ? shear.axis : axis;
+    for (const spot of spots) sheet.line('guide', path({ x: spot.x, y: from }, spot), 'guide');
+  }
+}

@@ -1,0 +1,9 @@
+// The public face of the drawing room: structures, loads and fields as SVG.
+export type { Acting } from './acting.ts';
+export { caseSketch } from './case-sketch.ts';
+export type { Panel } from './frame-fields.ts';
+export type { Palette } from './ink.ts';
+export { mechanismDrawing } from './mechanism.ts';
+export { memberSketch } from './member-sketch.ts';
+export { type StructureDrawing, structureDrawing } from './structure-drawing.ts';
+export { escapeText } from './words.ts';
