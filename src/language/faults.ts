@@ -3,6 +3,7 @@
 import type { Diagnostic } from './diagnostic.ts';
 import { rangeOf } from './reader.ts';
 import type { Fault, Scanned, Token } from './tokens.ts';
+import { CURLY_QUOTES, LONG_DASHES } from './tokens.ts';
 
 /** What a fault of a line says. In a chain a long dash stands for `--`, elsewhere for a minus. */
 export function faultDiagnostic(fault: Fault, line: Scanned, inChain: boolean): Diagnostic {
@@ -53,9 +54,9 @@ function replaced(line: Scanned, which: (token: Token) => boolean, text: string)
 const MOST_EDITS = 100;
 
 function isLongDash(token: Token): boolean {
-  return token.kind === 'stray' && '–—‒―'.includes(token.text);
+  return token.kind === 'stray' && LONG_DASHES.includes(token.text[0]!);
 }
 
 function isCurlyQuote(token: Token): boolean {
-  return token.kind === 'stray' && '“”„‟«»'.includes(token.text);
+  return token.kind === 'stray' && CURLY_QUOTES.includes(token.text[0]!);
 }

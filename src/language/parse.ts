@@ -99,7 +99,7 @@ function readSource(reader: Reader): Quoted | undefined {
 /** Words stand behind what is complete. */
 function refuseRest(reader: Reader, what: 'statement' | 'value'): undefined {
   const token = reader.peek()!;
-  const hint = token.kind === 'string' ? undefined : HINTS_BEHIND[token.text];
+  const hint = token.kind === 'string' ? undefined : HINTS_BEHIND.get(token.text);
   const code = what === 'value' ? 'bad-value' : 'bad-statement';
   const message = `${asWritten(token)} means nothing here; the ${what} is complete before it.`;
   return reader.fail(code, token, message, hint ? { hint } : {});
@@ -108,15 +108,10 @@ function refuseRest(reader: Reader, what: 'statement' | 'value'): undefined {
 const IN_PARENTHESES = 'A distance or a factor that begins with a name and goes on stands in parentheses.';
 
 /** What words that stand behind a complete statement were likely meant for. */
-const HINTS_BEHIND: Readonly<Record<string, string>> = {
-  '--': '`--` joins the points of a chain.',
-  '+': IN_PARENTHESES,
-  '-': IN_PARENTHESES,
-  '*': IN_PARENTHESES,
-  '/': IN_PARENTHESES,
-  '^': IN_PARENTHESES,
-  from: IN_PARENTHESES,
-};
+const HINTS_BEHIND: ReadonlyMap<string, string> = new Map([
+  ['--', '`--` joins the points of a chain.'],
+  ...['+', '-', '*', '/', '^', 'from'].map(word => [word, IN_PARENTHESES] as const),
+]);
 
 function secondColon(tokens: readonly Token[]): Token | undefined {
   let seen = false;

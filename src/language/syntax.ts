@@ -343,7 +343,7 @@ export type Statement = Common &
     | { readonly kind: 'carry'; readonly carry: CarryBody }
   );
 
-/** `units` as written, blanks normalised: `kN m`. */
+/** `units` as written, blanks normalised: `kN m`; `range` is theirs, without the name. */
 export type DisplaySetting =
   | { readonly kind: 'metric' | 'us' }
   | {

@@ -141,8 +141,8 @@ const MARKS: Readonly<Record<string, string>> = {
 /** Marks of two characters. `+-` is put together only where a combination reads it. */
 const PAIRS: Readonly<Record<string, string>> = { '--': '--', '<=': '<=', '>=': '>=' };
 
-const LONG_DASHES = '–—‒―';
-const CURLY_QUOTES = '“”„‟«»';
+export const LONG_DASHES = '–—‒―';
+export const CURLY_QUOTES = '“”„‟«»';
 const MINUS_SIGN = '−';
 const BLANK = /^\s$/;
 const LETTER = /^\p{L}$/u;
@@ -211,9 +211,8 @@ function digitsEnd(text: string, from: number): number {
 
 /** One character that means nothing with those of its like behind it, so that noise makes few tokens. */
 function strayEnd(text: string, from: number): number {
-  const length = text.codePointAt(from)! > 0xffff ? 2 : 1;
-  let index = from + length;
-  if (length === 2 || LONG_DASHES.includes(text[from]!) || CURLY_QUOTES.includes(text[from]!)) return index;
+  if (text.codePointAt(from)! > 0xffff) return from + 2;
+  let index = from + 1;
   while (index < text.length && text[index] === text[from]) index++;
   return index;
 }

@@ -82,6 +82,11 @@ function collect(reader: Reader, context: ValueContext, single: boolean): Piece<
   for (let token = reader.peek(); token; token = reader.peek()) {
     if (complete && depth === 0 && (single || ends(token, context))) break;
     if (token.kind === 'mark') {
+      if (token.text === '--') {
+        return reader.fail('bad-value', token, '`--` stands only between the points of a chain.', {
+          hint: 'Two minus signs stand with a blank between them.',
+        });
+      }
       const piece = pieceOf(token, depth);
       // Nothing that a value is made of: it ends here, and what is missing or open is found among the pieces.
       if (!piece) break;

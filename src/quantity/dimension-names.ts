@@ -36,7 +36,14 @@ const KINDS: ReadonlyMap<string, Kind> = new Map([
 ]);
 
 const ANGLE: Kind = { name: 'an angle', si: 'rad' };
-const BASE = ['m', 'kg', 's', 'K'] as const;
+
+/** In the order of the SI: kilogram first. */
+const BASE = [
+  ['kg', 1],
+  ['m', 0],
+  ['s', 2],
+  ['K', 3],
+] as const;
 
 /** `a force`, `a length`, `an angle`; for a dimension without a name its SI unit: `a quantity in kg m2/s3`. */
 export function dimensionName(dimension: Dimension): string {
@@ -67,8 +74,8 @@ function kindOf(dimension: Dimension): Kind | undefined {
 function product(dimension: Dimension): string {
   const above: string[] = [];
   const below: string[] = [];
-  BASE.forEach((unit, index) => {
-    const power = dimension[index]!;
+  BASE.forEach(([unit, index]) => {
+    const power = dimension[index];
     const size = Math.abs(power);
     if (power === 0) return;
     (power > 0 ? above : below).push(size === 1 ? unit : `${unit}${Number(size.toFixed(4))}`);

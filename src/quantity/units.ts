@@ -100,7 +100,7 @@ export function unitNamed(word: string): Unit | undefined {
 
 /** Whether a unit takes `^` and raised digits; the power of `kNm` is the metre's and only 2. */
 export function unitRaised(word: string, power: number): Unit | undefined {
-  if (word in FORCE_TIMES_METRE) return power === 2 ? UNITS.get(`${word}2`) : undefined;
+  if (Object.hasOwn(FORCE_TIMES_METRE, word)) return power === 2 ? UNITS.get(`${word}2`) : undefined;
   const unit = UNITS.get(word);
   return unit && raiseUnit(unit, power);
 }

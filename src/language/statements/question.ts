@@ -116,7 +116,7 @@ function turnRound(reader: Reader, from: number, at: number): { fix?: { title: s
   const right = reader.tokens.slice(at + 1, end);
   const comparison = reader.tokens[at]!;
   const leftMeasures = left.some(
-    (token, index) => token.kind === 'word' && (left[index + 1]?.text ?? '') in PREPOSITIONS,
+    (token, index) => token.kind === 'word' && PREPOSITIONS.has(left[index + 1]?.text ?? ''),
   );
   if (leftMeasures || left.length === 0) return {};
   const text = `${print(right)} ${comparison.text === '<=' ? '>=' : '<='} ${print(left)}`;
@@ -124,7 +124,7 @@ function turnRound(reader: Reader, from: number, at: number): { fix?: { title: s
   return { fix: { title: 'Put the measure first', edits: [{ range, text }] } };
 }
 
-const PREPOSITIONS: Readonly<Record<string, true>> = { at: true, of: true, in: true };
+const PREPOSITIONS: ReadonlySet<string> = new Set(['at', 'of', 'in']);
 
 /** Takes `under …` from behind the limit and puts it before the comparison. */
 function moveUnder(reader: Reader, at: number, late: number): { fix: { title: string; edits: Edit[] } } {
