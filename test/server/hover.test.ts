@@ -19,6 +19,8 @@ describe('on a member', () => {
     expect(lines[0]).toMatch(/^R1 member, .*2\.000 m$/);
     expect(lines.slice(1)).toEqual([
       'Largest movement: 4.000 mm down, at B, span/500',
+      'Ends move: at B 4.000 mm down',
+      'Largest moment: 3.000 kN m, tension above, at A',
       'Moment: at A 3.000 kN m, tension above; at B 0 kN m',
       'Force: 0 kN',
     ]);
@@ -33,10 +35,23 @@ load dead: 1 kN/m down on B1
 load snow: 1 kN/m down on B1
 combine light: dead
 combine heavy: dead + snow
-find mid: deflection of B¦1 under heavy`;
+find most: moment in B¦1 under heavy`;
     const lines = hoverLines(fenced(text));
     expect(lines).toContain('Largest movement: 33.75 mm down, 3.000 m from A, span/177');
     expect(lines).toContain('Under: heavy: dead + snow');
+  });
+
+  test('a combination under which the note asks for no movement does not count where it asks for others', () => {
+    const text = `section P: EI 1 MN m2
+member B1, P: A -- 6 m -- B
+support A: pinned
+support B: roller
+load dead: 2 kN/m down on B1
+combine service: dead
+combine strength: 1.35 dead
+find mid: deflection of B¦1 under service
+find most: moment in B1 under strength`;
+    expect(hoverLines(fenced(text))[1]).toBe('Largest movement: 33.75 mm down, 3.000 m from A, span/177');
   });
 
   test('a drawing travels inside the hover, for an editor that shows Markdown', () => {

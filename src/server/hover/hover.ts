@@ -69,8 +69,8 @@ const NAMED: Readonly<Record<NameEntry['namespace'], CardOfName>> = {
     return named && structureCard(result, named);
   },
   point: (_, { name }, owner) => owner && pointCard(owner, indexOf(owner.structure?.points, name)),
-  member: (_, { name }, owner, drawings) =>
-    owner && memberCard(owner, indexOf(owner.structure?.members, name), drawings),
+  member: (result, { name }, owner, drawings) =>
+    owner && memberCard(result, owner, indexOf(owner.structure?.members, name), drawings),
   section: (_, { name }, owner) => {
     const section = owner?.structure?.sections[indexOf(owner.structure.sections, name)];
     return owner && section && sectionCard(section, owner.display);
@@ -123,7 +123,7 @@ function cardOfStatement(
       return pointCard(owner, indexOf(owner.structure?.points, statement.point.text));
     case 'member':
     case 'bar':
-      return memberCard(owner, indexOf(owner.structure?.members, statement.name.text), drawings);
+      return memberCard(result, owner, indexOf(owner.structure?.members, statement.name.text), drawings);
     case 'find':
     case 'require': {
       const answer = result.answers.find(({ range }) => range.start === statement.range.start);

@@ -1,10 +1,11 @@
-// Hover on a member or a bar: the largest movement of any combination, with its place and span ratio, and the moments
-// and force at the member's ends under the combination that governs it.
+// Hover on a member or a bar: the largest movement, with its place and span ratio, how far the ends move, and the moments
+// and force, all under the one combination that governs the movement.
 import { memberSketch } from '../../drawing/index.ts';
 import type { Measured, ResolvedMeasure } from '../../model/question.ts';
+import { isMovement } from '../../model/questions.ts';
 import { spansAt } from '../../model/spans.ts';
-import type { Member, Structure } from '../../model/structure.ts';
-import type { Alternative, StructureResult } from '../../note/result.ts';
+import type { Location, Member, Structure } from '../../model/structure.ts';
+import type { Alternative, NoteResult, StructureResult } from '../../note/result.ts';
 import type { DisplayUnits } from '../../quantity/display.ts';
 import type { Theme } from '../theme.ts';
 import { length } from '../words.ts';
@@ -12,15 +13,22 @@ import type { Card, Row } from './card.ts';
 import { alternativesOf, inWords, measuredOf, type Reading, readingOf } from './reading.ts';
 
 /** `drawings`: the palette of the drawing; undefined for none. */
-export function memberCard(result: StructureResult, index: number, drawings: Theme | undefined): Card | undefined {
-  const member = result.structure?.members[index];
-  if (result.structure === undefined || member === undefined) return undefined;
-  const card = { title: member.name, about: aboutMember(result.structure, member, result.display) };
-  const governing = governingMovement(result, index);
+export function memberCard(
+  note: NoteResult,
+  result: StructureResult,
+  index: number,
+  drawings: Theme | undefined,
+): Card | undefined {
+  const { structure, display } = result;
+  const member = structure?.members[index];
+  if (structure === undefined || member === undefined) return undefined;
+  const card = { title: member.name, about: aboutMember(structure, member, display) };
+  const governing = governingMovement(note, result, index);
   if (governing === undefined) return { ...card, rows: withheldRows(result) };
-  const rows = [...movementRows(governing, index), ...endRows(governing.reading, index)];
+  const { reading } = governing;
+  const rows = [...movementRows(governing, member, index), ...forceRows(reading, member, index)];
   if (drawings === undefined) return { ...card, rows };
-  const svg = memberSketch(result.structure, index, governing.reading.solution, drawings, result.display);
+  const svg = memberSketch(structure, index, reading.solution, drawings, display);
   return { ...card, rows, drawing: { svg, words: `${member.name}: its moved shape and its moments` } };
 }
 
@@ -33,12 +41,10 @@ interface Governing {
   readonly chosen: boolean;
 }
 
-function governingMovement(
-  { structure, analysis, combinations, display }: StructureResult,
-  index: number,
-): Governing | undefined {
+function governingMovement(note: NoteResult, result: StructureResult, index: number): Governing | undefined {
+  const { structure, analysis, display } = result;
   if (structure === undefined || analysis === undefined || !analysis.stability.stable) return undefined;
-  const alternatives = alternativesOf(combinations);
+  const alternatives = movementAlternatives(note, result);
   let governing: Governing | undefined;
   for (const alternative of alternatives) {
     const reading = readingOf(structure, alternative, display);
@@ -52,27 +58,50 @@ function governingMovement(
   return governing;
 }
 
-function movementRows({ alternative, reading, asked, measured, chosen }: Governing, index: number): Row[] {
-  const { structure, units } = reading;
-  const words = inWords(reading, asked, measured);
-  const distance = measured.place?.distance;
-  const place = distance === undefined ? '' : `, ${placeInWords(structure, index, distance, units)}`;
-  const ratio = distance === undefined ? '' : spanRatio(structure, index, distance, measured.value);
-  const rows = [{ label: 'Largest movement', text: `${words}${place}${ratio}` }];
-  if (chosen) rows.push({ label: 'Under', text: alternative.text });
+/**
+ * The alternatives of the combinations under which the note asks for movements: those that it cares about. All of them,
+ * where it asks for none.
+ */
+function movementAlternatives({ answers }: NoteResult, result: StructureResult): readonly Alternative[] {
+  const asked = new Set<string | null>();
+  for (const answer of result.answers) {
+    const { asked: question, under } = answers[answer] ?? {};
+    if (question !== undefined && under !== undefined && isMovement(question.measure.kind)) asked.add(under);
+  }
+  const alternatives = alternativesOf(result.combinations.filter(({ name }) => asked.has(name)));
+  return alternatives.length > 0 ? alternatives : alternativesOf(result.combinations);
+}
+
+function movementRows(
+  { alternative, reading, asked, measured, chosen }: Governing,
+  member: Member,
+  index: number,
+): Row[] {
+  const rows = chosen ? [{ label: 'Under', text: alternative.text }] : [];
+  const distance = measured.place?.distance ?? 0;
+  const place = placeInWords(reading, index, distance);
+  const ratio = spanRatio(reading.structure, index, distance, measured.value);
+  rows.push({ label: 'Largest movement', text: `${inWords(reading, asked, measured)}${place}${ratio}` });
+  const ends = endsOf(member, index).flatMap(({ point, at }) => {
+    const told = (['deflection', 'sway'] as const)
+      .map(kind => ({ kind, at }))
+      .filter(end => measuredOf(reading, end).value !== 0)
+      .map(end => inWords(reading, end));
+    return told.length === 0 ? [] : [`at ${nameOf(reading.structure, point)} ${told.join(', ')}`];
+  });
+  if (ends.length > 0) rows.push({ label: 'Ends move', text: ends.join('; ') });
   return rows;
 }
 
-/** `at B`, or `2.224 m from A`. */
-function placeInWords(structure: Structure, index: number, distance: number, units: DisplayUnits): string {
-  const legs = structure.members[index]?.legs ?? [];
-  const slack = 1e-9 * (structure.members[index]?.length ?? 0);
-  const nameOf = (point: number): string => structure.points[point]?.name ?? '';
-  for (const leg of legs) {
-    if (Math.abs(distance - leg.start) <= slack) return `at ${nameOf(leg.from)}`;
-    if (Math.abs(distance - leg.start - leg.length) <= slack) return `at ${nameOf(leg.to)}`;
+/** `, at B`, or `, 2.224 m from A`. */
+function placeInWords({ structure, units }: Reading, index: number, distance: number): string {
+  const { legs = [], length: whole = 0 } = structure.members[index] ?? {};
+  const slack = 1e-9 * whole;
+  for (const { from, to, start, length: own } of legs) {
+    if (Math.abs(distance - start) <= slack) return `, at ${nameOf(structure, from)}`;
+    if (Math.abs(distance - start - own) <= slack) return `, at ${nameOf(structure, to)}`;
   }
-  return `${length(distance, units)} from ${nameOf(legs[0]?.from ?? 0)}`;
+  return `, ${length(distance, units)} from ${nameOf(structure, legs[0]?.from ?? 0)}`;
 }
 
 /** `, span/1092`: of the span through the place, the shorter where two meet. */
@@ -83,39 +112,51 @@ function spanRatio(structure: Structure, index: number, distance: number, moveme
   return `, span/${Math.floor(shortest / Math.abs(movement))}`;
 }
 
-function endRows(reading: Reading, index: number): Row[] {
-  const member = reading.structure.members[index];
-  if (member === undefined) return [];
+function forceRows(reading: Reading, member: Member, index: number): Row[] {
   const forces = atEnds(reading, member, index, 'force');
-  const rows = [
-    { label: 'Force', text: forces[0]?.words === forces[1]?.words ? (forces[0]?.words ?? '') : listed(forces) },
+  const isSame = forces.every(({ words }) => words === forces[0]?.words);
+  const force = { label: 'Force', text: isSame ? (forces[0]?.words ?? '') : listed(reading, forces) };
+  if (member.kind === 'bar') return [force];
+  const asked: ResolvedMeasure = { kind: 'moment', along: [index] };
+  const largest = measuredOf(reading, asked);
+  const place = largest.value === 0 ? '' : placeInWords(reading, index, largest.place?.distance ?? 0);
+  return [
+    { label: 'Largest moment', text: `${inWords(reading, asked, largest)}${place}` },
+    { label: 'Moment', text: listed(reading, atEnds(reading, member, index, 'moment')) },
+    force,
   ];
-  if (member.kind === 'bar') return rows;
-  return [{ label: 'Moment', text: listed(atEnds(reading, member, index, 'moment')) }, ...rows];
+}
+
+interface MemberEnd {
+  readonly point: number;
+  readonly at: Extract<Location, { readonly kind: 'along' }>;
+}
+
+function endsOf(member: Member, index: number): readonly MemberEnd[] {
+  return [
+    { point: member.legs[0]?.from ?? -1, at: { kind: 'along', member: index, distance: 0 } },
+    { point: member.legs.at(-1)?.to ?? -1, at: { kind: 'along', member: index, distance: member.length } },
+  ];
 }
 
 interface AtEnd {
-  readonly point: string;
+  readonly point: number;
   readonly words: string;
 }
 
 function atEnds(reading: Reading, member: Member, index: number, kind: 'moment' | 'force'): readonly AtEnd[] {
-  const { points } = reading.structure;
-  const first = points[member.legs[0]?.from ?? -1]?.name ?? '';
-  const last = points[member.legs.at(-1)?.to ?? -1]?.name ?? '';
-  const wordsAt = (distance: number): string => {
-    const asked: ResolvedMeasure = { kind, at: { kind: 'along', member: index, distance } };
-    const measured = measuredOf(reading, asked);
-    return inWords(reading, asked, { ...measured, place: { member: index, distance } });
-  };
-  return [
-    { point: first, words: wordsAt(0) },
-    { point: last, words: wordsAt(member.length) },
-  ];
+  return endsOf(member, index).map(({ point, at }) => {
+    const asked: ResolvedMeasure = { kind, at };
+    return { point, words: inWords(reading, asked, { ...measuredOf(reading, asked), place: at }) };
+  });
 }
 
-function listed(ends: readonly AtEnd[]): string {
-  return ends.map(({ point, words }) => `at ${point} ${words}`).join('; ');
+function listed({ structure }: Reading, ends: readonly AtEnd[]): string {
+  return ends.map(({ point, words }) => `at ${nameOf(structure, point)} ${words}`).join('; ');
+}
+
+function nameOf({ points }: Structure, point: number): string {
+  return points[point]?.name ?? '';
 }
 
 function aboutMember(structure: Structure, member: Member, units: DisplayUnits): string {
