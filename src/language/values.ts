@@ -3,8 +3,9 @@
 
 import type { BinaryOperator } from '../quantity/expression.ts';
 import { nearest } from '../quantity/nearest.ts';
-import type { Piece } from '../quantity/parse-expression.ts';
-import { adjacent, FUNCTION_NAMES, isFunctionName, LONGEST, parseExpression } from '../quantity/parse-expression.ts';
+import { parseExpression } from '../quantity/parse-expression.ts';
+import type { Piece } from '../quantity/pieces.ts';
+import { adjacent, FUNCTION_NAMES, isFunctionName, LONGEST } from '../quantity/pieces.ts';
 import type { Problem } from '../quantity/problem.ts';
 import { unitNamed } from '../quantity/units.ts';
 import { readQuantity } from './quantities.ts';
@@ -191,8 +192,10 @@ function readOperand(reader: Reader, context: ValueContext): Piece<Operand> | un
     return operandPiece({ kind: 'constant', name: word, range });
   }
   if (unitNamed(word)) {
+    const before = reader.isMark('*', -1) ? reader.peek(-2) : undefined;
+    const joined = before?.kind === 'word' && unitNamed(before.text) !== undefined;
     return reader.fail('bad-value', token, `\`${word}\` is a unit; it stands only behind a number or another unit.`, {
-      hint: `\`1 ${word}\`?`,
+      hint: joined ? `Units are joined by a blank or \`·\`: \`${before.text} ${word}\`.` : `\`1 ${word}\`?`,
     });
   }
   if (called && !reader.peek(1)!.spaced) {

@@ -1,6 +1,6 @@
 // The words that the language keeps for itself, and the check of a name against them.
 
-import { FUNCTION_NAMES, isFunctionName } from '../quantity/parse-expression.ts';
+import { FUNCTION_NAMES, isFunctionName } from '../quantity/pieces.ts';
 import { unitNamed } from '../quantity/units.ts';
 import type { ExtentFunction, Heading, MeasureKind, ShapeKind, Turn } from './syntax.ts';
 

@@ -1,7 +1,23 @@
 // How a quantity is shown: four significant figures, in the units that the note chose for its kind.
 
 import type { Dimension } from './dimension.ts';
-import { sameDimension } from './dimension.ts';
+import {
+  ANGLE,
+  AREA,
+  BENDING_STIFFNESS,
+  DENSITY,
+  FORCE,
+  FORCE_PER_LENGTH,
+  LENGTH,
+  MASS,
+  MASS_PER_LENGTH,
+  MOMENT,
+  SECOND_MOMENT_OF_AREA,
+  SECTION_MODULUS,
+  STRESS,
+  sameDimension,
+  UNIT_WEIGHT,
+} from './dimension.ts';
 import { dimensionName, isAngle, siUnit } from './dimension-names.ts';
 import { nearest } from './nearest.ts';
 import { significant } from './number.ts';
@@ -100,13 +116,13 @@ export function tradeUnit(dimension: Dimension): string {
 }
 
 const DIMENSION_OF: Readonly<Record<DisplayKind, Dimension>> = {
-  force: [1, 1, -2, 0, 0],
-  length: [1, 0, 0, 0, 0],
-  deflection: [1, 0, 0, 0, 0],
-  moment: [2, 1, -2, 0, 0],
-  stress: [-1, 1, -2, 0, 0],
-  rotation: [0, 0, 0, 0, 1],
-  'line load': [0, 1, -2, 0, 0],
+  force: FORCE,
+  length: LENGTH,
+  deflection: LENGTH,
+  moment: MOMENT,
+  stress: STRESS,
+  rotation: ANGLE,
+  'line load': FORCE_PER_LENGTH,
 };
 
 const DISPLAY_KINDS = Object.keys(DIMENSION_OF) as readonly DisplayKind[]; // the keys of the record above
@@ -132,15 +148,15 @@ interface Step {
 }
 
 const TRADE: readonly TradeUnits[] = [
-  { dimension: [2, 0, 0, 0, 0], metric: [step('cm2'), step('m2', 0.1)], us: [step('in2'), step('ft2', 0.5)] },
-  { dimension: [3, 0, 0, 0, 0], metric: [step('cm3'), step('m3', 0.1)], us: [step('in3'), step('ft3', 0.1)] },
-  { dimension: [4, 0, 0, 0, 0], metric: [step('cm4'), step('m4', 0.1)], us: [step('in4'), step('ft4', 0.1)] },
-  { dimension: [3, 1, -2, 0, 0], metric: [step('kN m2')], us: [step('kip in2')] },
-  { dimension: [-2, 1, -2, 0, 0], metric: [step('kN/m3')], us: [step('pcf')] },
-  { dimension: [0, 1, 0, 0, 0], metric: [step('kg'), step('t', 1e4)], us: [step('lb')] },
-  { dimension: [-1, 1, 0, 0, 0], metric: [step('kg/m')], us: [step('lb/ft')] },
+  { dimension: AREA, metric: [step('cm2'), step('m2', 0.1)], us: [step('in2'), step('ft2', 0.5)] },
+  { dimension: SECTION_MODULUS, metric: [step('cm3'), step('m3', 0.1)], us: [step('in3'), step('ft3', 0.1)] },
+  { dimension: SECOND_MOMENT_OF_AREA, metric: [step('cm4'), step('m4', 0.1)], us: [step('in4'), step('ft4', 0.1)] },
+  { dimension: BENDING_STIFFNESS, metric: [step('kN m2')], us: [step('kip in2')] },
+  { dimension: UNIT_WEIGHT, metric: [step('kN/m3')], us: [step('pcf')] },
+  { dimension: MASS, metric: [step('kg'), step('t', 1e4)], us: [step('lb')] },
+  { dimension: MASS_PER_LENGTH, metric: [step('kg/m')], us: [step('lb/ft')] },
   { dimension: [-2, 1, 0, 0, 0], metric: [step('kg/m2')], us: [step('lb/ft2')] },
-  { dimension: [-3, 1, 0, 0, 0], metric: [step('kg/m3')], us: [step('lb/ft3')] },
+  { dimension: DENSITY, metric: [step('kg/m3')], us: [step('lb/ft3')] },
 ];
 
 const PRESSURE = { metric: unit('kN/m2'), us: unit('psf') } as const;

@@ -1,7 +1,20 @@
 // The unit table: every unit that a note may write, as an exact decimal multiple of SI, and products of them.
 
 import type { Dimension } from './dimension.ts';
-import { divideDimensions, multiplyDimensions, raiseDimension } from './dimension.ts';
+import {
+  ANGLE,
+  DIMENSIONLESS,
+  divideDimensions,
+  FORCE,
+  FORCE_PER_LENGTH,
+  LENGTH,
+  MASS,
+  multiplyDimensions,
+  raiseDimension,
+  STRESS,
+  TEMPERATURE,
+  UNIT_WEIGHT,
+} from './dimension.ts';
 import type { Quantity } from './quantity.ts';
 
 /**
@@ -15,7 +28,7 @@ export interface Unit {
   readonly dimension: Dimension;
 }
 
-export const NO_UNIT: Unit = { numerator: 1, denominator: 1, tens: 0, dimension: [0, 0, 0, 0, 0] };
+export const NO_UNIT: Unit = { numerator: 1, denominator: 1, tens: 0, dimension: DIMENSIONLESS };
 
 const POUND_FORCE = 44_482_216_152_605; // 1 lbf = 4.448 221 615 260 5 N: 0.453 592 37 kg at 9.806 65 m/s²
 const FOOT = 3048; // 1 ft = 0.3048 m, international
@@ -23,16 +36,8 @@ const SQUARE_FOOT = 9_290_304;
 const CUBIC_FOOT = 28_316_846_592;
 const SQUARE_INCH = 64_516; // 1 in = 25.4 mm
 
-const RATIO: Dimension = [0, 0, 0, 0, 0];
-const ANGLE: Dimension = [0, 0, 0, 0, 1];
-const LENGTH: Dimension = [1, 0, 0, 0, 0];
-const MASS: Dimension = [0, 1, 0, 0, 0];
 const TIME: Dimension = [0, 0, 1, 0, 0];
-const FORCE: Dimension = [1, 1, -2, 0, 0];
-const STRESS: Dimension = [-1, 1, -2, 0, 0];
-const LINE_LOAD: Dimension = [0, 1, -2, 0, 0];
-const UNIT_WEIGHT: Dimension = [-2, 1, -2, 0, 0];
-const TEMPERATURE: Dimension = [0, 0, 0, 1, 0];
+const ACCELERATION: Dimension = [1, 0, -2, 0, 0];
 
 /** Numerator, power of ten, dimension, denominator (1 where left out). */
 type Row = readonly [numerator: number, tens: number, dimension: Dimension, denominator?: number];
@@ -58,8 +63,8 @@ const TABLE: Readonly<Record<string, Row>> = {
   ksi: [POUND_FORCE, -10 + 8, STRESS, SQUARE_INCH],
   psf: [POUND_FORCE, -13 + 8, STRESS, SQUARE_FOOT],
   ksf: [POUND_FORCE, -10 + 8, STRESS, SQUARE_FOOT],
-  plf: [POUND_FORCE, -13 + 4, LINE_LOAD, FOOT],
-  klf: [POUND_FORCE, -10 + 4, LINE_LOAD, FOOT],
+  plf: [POUND_FORCE, -13 + 4, FORCE_PER_LENGTH, FOOT],
+  klf: [POUND_FORCE, -10 + 4, FORCE_PER_LENGTH, FOOT],
   pcf: [POUND_FORCE, -13 + 12, UNIT_WEIGHT, CUBIC_FOOT],
   kg: [1, 0, MASS],
   t: [1, 3, MASS],
@@ -73,7 +78,7 @@ const TABLE: Readonly<Record<string, Row>> = {
   K: [1, 0, TEMPERATURE],
   degC: [1, 0, TEMPERATURE],
   degF: [5, 0, TEMPERATURE, 9],
-  g0: [980_665, -5, [1, 0, -2, 0, 0]],
+  g0: [980_665, -5, ACCELERATION],
 };
 
 /** The spellings that may carry a bare 2, 3 or 4: `mm2`, `ft3`, `s2`. */
@@ -89,8 +94,8 @@ export const UNIT_NAMES: readonly string[] = [...Object.keys(TABLE), ...Object.k
 
 /** The named constants of a value. */
 export const CONSTANTS: Readonly<Record<'pi' | 'g0', Quantity>> = {
-  pi: { value: Math.PI, dimension: RATIO },
-  g0: { value: 9.80665, dimension: [1, 0, -2, 0, 0] },
+  pi: { value: Math.PI, dimension: DIMENSIONLESS },
+  g0: { value: 9.80665, dimension: ACCELERATION },
 };
 
 /** The unit of one word, a bare power included: `kN`, `mm4`, `kNm2`. */

@@ -1,6 +1,7 @@
 // Every form of every statement parses without a diagnostic.
 import { describe, expect, test } from 'vitest';
 import { parseStatements } from '../../src/language/parse.ts';
+import { snippet } from '../../src/language/statements/form.ts';
 import { STATEMENTS } from '../../src/language/statements/table.ts';
 import { linesOf } from './source.ts';
 
@@ -242,5 +243,21 @@ describe('examples shown in help', () => {
     const { statements, diagnostics } = parseStatements(linesOf(example));
     expect(diagnostics).toEqual([]);
     expect(statements.map(statement => statement.kind)).toEqual([keyword]);
+  });
+});
+
+describe('skeletons', () => {
+  test.for(Object.values(STATEMENTS).map(form => [form.keyword, form.skeleton] as const))(
+    '%s',
+    ([keyword, skeleton]) => {
+      const filled = skeleton.replace(/\$\{\d+\|([^,|]*)[^}]*\}/g, '$1').replace(/\$\{\d+:([^}]*)\}/g, '$1');
+      expect(filled).not.toContain('{');
+      const { statements, diagnostics } = parseStatements(linesOf(filled));
+      expect(diagnostics).toEqual([]);
+      expect(statements.map(statement => statement.kind)).toEqual([keyword]);
+    },
+  );
+  test('places to fill in are numbered, choices keep their words', () => {
+    expect(snippet('support {A}: {pinned|roller}')).toBe(['support $', '{1:A}: $', '{2|pinned,roller|}'].join(''));
   });
 });

@@ -6,7 +6,7 @@ import type { Reader } from '../reader.ts';
 import type { CarryBody, Quoted, Value } from '../syntax.ts';
 import { readValue } from '../values.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 import { readNumberOrParentheses } from './load.ts';
 
 export const CARRY: StatementForm = {
@@ -21,7 +21,7 @@ export const CARRY: StatementForm = {
     'carry: 2 * reaction of Joist at A vertical onto D',
     'carry: reaction of Rafter at B from "rafter.md" onto D',
   ],
-  skeleton: 'carry: reaction of {Structure} at {A} onto {D}',
+  skeleton: snippet('carry: reaction of {Structure} at {A} onto {D}'),
   read: reader => {
     if (!colon(reader, 'what is carried')) return undefined;
     const carry = readCarry(reader);

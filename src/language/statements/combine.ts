@@ -4,7 +4,7 @@ import { readLabel } from '../measures.ts';
 import type { Reader } from '../reader.ts';
 import type { Name, Term, Value } from '../syntax.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 import { readNumberOrParentheses } from './load.ts';
 
 export const COMBINE: StatementForm = {
@@ -16,7 +16,7 @@ export const COMBINE: StatementForm = {
     'combine strength (b): 1.35 dead + (1.5 * psi0) snow + 1.5 wind',
     'combine strength (c): 1.0 dead + 1.5 wind +- lean',
   ],
-  skeleton: 'combine {service}: {dead} + {snow}',
+  skeleton: snippet('combine {service}: {dead} + {snow}'),
   read: reader => {
     const name = reader.name('the name of the combination');
     if (!name) return undefined;

@@ -17,7 +17,7 @@ export interface StatementForm {
   /** Its form, a source in quotes behind it left out. Words in capitals are the writer's. */
   readonly grammar: string;
   readonly examples: readonly string[];
-  /** For completion: what is to be filled in stands in braces, a choice with strokes: `{down|up}`. */
+  /** For completion, in the snippet syntax of the language server protocol. */
   readonly skeleton: string;
   /** Reads what stands behind the keyword. Undefined with a failure in the reader. */
   readonly read: (reader: Reader) => StatementBody | undefined;
@@ -28,7 +28,7 @@ export function colon(reader: Reader, what: string): boolean {
   return reader.mark(':', `${what} stands behind it`) !== undefined;
 }
 
-/** A skeleton in the snippet syntax of the language server protocol. */
+/** A snippet from a text with what is to be filled in between braces, a choice with strokes: `{down|up}`. */
 export function snippet(skeleton: string): string {
   let count = 0;
   return skeleton.replace(/\{([^}]*)\}/g, (_, words: string) => {

@@ -5,13 +5,14 @@ import type { Name } from '../syntax.ts';
 import { readValue } from '../values.ts';
 import { whyNoValueName } from '../words.ts';
 import type { StatementForm } from './form.ts';
+import { snippet } from './form.ts';
 
 export const LET: StatementForm = {
   keyword: 'let',
   help: 'Names a value for later expressions, loads, limits and prose.',
   grammar: 'let NAME = VALUE',
   examples: ['let w = 0.75 kN/m2 * 3.2 m', 'let k = sqrt(2) * a / 3', 'let h = 12 ft 6 1/2 in'],
-  skeleton: 'let {name} = {1 kN}',
+  skeleton: snippet('let {name} = {1 kN}'),
   read: reader => {
     const name = readValueName(reader, 'the name of the value');
     if (!name) return undefined;

@@ -8,7 +8,7 @@ import type { Heading, LoadBody, Name, Turn, Value } from '../syntax.ts';
 import { parenthesisLength, readParenthesised, readValue } from '../values.ts';
 import { isHeading, isTurn } from '../words.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 export const LOAD: StatementForm = {
   keyword: 'load',
@@ -32,7 +32,7 @@ export const LOAD: StatementForm = {
     'load sink: move B by 8 mm down',
     'load fit: lengthen d1 by 3 mm',
   ],
-  skeleton: 'load {dead}: {1 kN/m} {down|up|left|right} on {R1}',
+  skeleton: snippet('load {dead}: {1 kN/m} {down|up|left|right} on {R1}'),
   read: reader => {
     const name = reader.name('the name of the case');
     if (!name || !colon(reader, 'the load')) return undefined;

@@ -6,7 +6,7 @@ import type { Chain, ChainDimension, ChainLeg, Heading, Statement, Value } from 
 import { beginsQuantity, readValue } from '../values.ts';
 import { isHeading } from '../words.ts';
 import type { StatementBody, StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 const CHAIN = 'P {-- [DIMENSION [of SECTION] --] P} [, pulls only | , bears only]';
 
@@ -22,7 +22,7 @@ export const MEMBER: StatementForm = {
     'member Ridge: B -- 6 m right at 5.7 deg -- C',
     'member J1, J: A -- 75 mm of Jn -- P -- 3.75 m -- Q -- 75 mm of Jn -- B',
   ],
-  skeleton: 'member {R1}, {Section}: {A} -- {4.8 m} -- {B}',
+  skeleton: snippet('member {R1}, {Section}: {A} -- {4.8 m} -- {B}'),
   read: reader => readChained(reader, 'member'),
 };
 
@@ -31,7 +31,7 @@ export const BAR: StatementForm = {
   help: 'A bar: axial force only, pinned at both ends.',
   grammar: `bar NAME [, SECTION]: ${CHAIN}`,
   examples: ['bar d1, Rod: A -- C', 'bar Rod, R20: T -- B, pulls only'],
-  skeleton: 'bar {d1}, {Section}: {A} -- {B}',
+  skeleton: snippet('bar {d1}, {Section}: {A} -- {B}'),
   read: reader => readChained(reader, 'bar'),
 };
 
@@ -40,7 +40,7 @@ export const BARS: StatementForm = {
   help: 'A chain of bars: `bars w` names them w1, w2, w3, and `w` is the group of them.',
   grammar: `bars NAME [, SECTION]: ${CHAIN}`,
   examples: ['bars w, Angle: B -- K -- C -- L'],
-  skeleton: 'bars {w}, {Section}: {A} -- {B} -- {C}',
+  skeleton: snippet('bars {w}, {Section}: {A} -- {B} -- {C}'),
   read: reader => readChained(reader, 'bars'),
 };
 
@@ -49,7 +49,7 @@ export const GROUP: StatementForm = {
   help: 'A name for several members or bars, wherever members are listed or asked about.',
   grammar: 'group NAME: MEMBER {, MEMBER}',
   examples: ['group Roof: R1, R2'],
-  skeleton: 'group {Roof}: {R1}, {R2}',
+  skeleton: snippet('group {Roof}: {R1}, {R2}'),
   read: reader => {
     const name = reader.name('the name of the group');
     if (!name || !colon(reader, 'its members')) return undefined;

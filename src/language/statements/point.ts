@@ -5,14 +5,14 @@ import type { Reader } from '../reader.ts';
 import type { Name } from '../syntax.ts';
 import { readValue } from '../values.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 export const POINT: StatementForm = {
   keyword: 'point',
   help: 'Places a point by coordinates (x right, y up) or along a member.',
   grammar: 'point NAME: X, Y | DISTANCE from P [towards P] on MEMBER',
   examples: ['point P: 2.4 m, 3.0 m', 'point Q: 1.1 m from A on R1', 'point S: 0.6 m from B towards A on R1'],
-  skeleton: 'point {P}: {0 m}, {0 m}',
+  skeleton: snippet('point {P}: {0 m}, {0 m}'),
   read: reader => {
     const name = reader.name('the name of the point');
     if (!name || !colon(reader, 'where it is')) return undefined;
@@ -34,7 +34,7 @@ export const HINGE: StatementForm = {
   help: 'Frees the moment of all members at a point, or of one member there.',
   grammar: 'hinge P [in MEMBER]',
   examples: ['hinge B', 'hinge B in R1'],
-  skeleton: 'hinge {B}',
+  skeleton: snippet('hinge {B}'),
   read: reader => {
     const point = reader.name('a point');
     if (!point) return undefined;
@@ -48,7 +48,7 @@ export const CONNECTION: StatementForm = {
   help: 'Makes the end of a member semi-rigid: moment for each radian between member and joint.',
   grammar: 'connection P in MEMBER: VALUE',
   examples: ['connection B in R1: 850 kN m/rad'],
-  skeleton: 'connection {B} in {R1}: {850 kN m/rad}',
+  skeleton: snippet('connection {B} in {R1}: {850 kN m/rad}'),
   read: reader => {
     const end = readMemberEnd(reader);
     if (!end || !colon(reader, 'its stiffness')) return undefined;
@@ -62,7 +62,7 @@ export const RELEASE: StatementForm = {
   help: 'Frees axial force, shear or moment of a member at a point.',
   grammar: 'release P in MEMBER: axial | shear | moment {, …}',
   examples: ['release B in R1: axial', 'release B in R1: shear, moment'],
-  skeleton: 'release {B} in {R1}: {axial}',
+  skeleton: snippet('release {B} in {R1}: {axial}'),
   read: reader => {
     const end = readMemberEnd(reader);
     if (!end || !colon(reader, 'what is freed')) return undefined;

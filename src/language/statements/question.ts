@@ -8,7 +8,7 @@ import type { Name, Under, Value } from '../syntax.ts';
 import type { ValueContext } from '../values.ts';
 import { readValue } from '../values.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 import { readValueName } from './let.ts';
 
 export const FIND: StatementForm = {
@@ -16,7 +16,7 @@ export const FIND: StatementForm = {
   help: 'A result to be found: a measure, or an expression of measures, earlier results and values.',
   grammar: 'find NAME: MEASURE or VALUE [under COMBINATION]',
   examples: ['find slope: rotation at C under service', 'find peak: moment in R1 between A and B under all'],
-  skeleton: 'find {name}: {deflection} at {C} under {service}',
+  skeleton: snippet('find {name}: {deflection} at {C} under {service}'),
   read: reader => {
     const keyword = reader.position - 1;
     const question = readQuestion(reader);
@@ -35,7 +35,7 @@ export const REQUIRE: StatementForm = {
     'require seat: reaction at A under uplift >= 0 kN',
     'require net: tip - 12 mm <= span(tip)/250',
   ],
-  skeleton: 'require {name}: {sag of R1} under {service} <= {span/360}',
+  skeleton: snippet('require {name}: {sag of R1} under {service} <= {span/360}'),
   read: reader => {
     const keyword = reader.position - 1;
     const from = reader.position;

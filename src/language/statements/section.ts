@@ -5,7 +5,7 @@ import type { Item, Name, ShapeKind, Value } from '../syntax.ts';
 import { readValue } from '../values.ts';
 import { isShapeKind, SHAPES } from '../words.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 export const MATERIAL: StatementForm = {
   keyword: 'material',
@@ -15,7 +15,7 @@ export const MATERIAL: StatementForm = {
     'material S355: E 210 GPa, density 7850 kg/m3, fy 355 MPa',
     'material C24:  E 11 GPa, G 0.69 GPa, density 420 kg/m3, alpha 5e-6 /K',
   ],
-  skeleton: 'material {S355}: E {210 GPa}, density {7850 kg/m3}',
+  skeleton: snippet('material {S355}: E {210 GPa}, density {7850 kg/m3}'),
   read: reader => {
     const name = reader.name('the name of the material');
     if (!name || !colon(reader, 'what the material has')) return undefined;
@@ -40,7 +40,7 @@ export const SECTION: StatementForm = {
     'section X: I wanted, S355',
     'section J2: solid 47 mm x 220 mm, C24, turned',
   ],
-  skeleton: 'section {Name}: {box} {100 mm x 200 mm x 6 mm}, {S355}',
+  skeleton: snippet('section {Name}: {box} {100 mm x 200 mm x 6 mm}, {S355}'),
   read: reader => {
     const name = reader.name('the name of the section');
     if (!name || !colon(reader, 'its shape or its figures')) return undefined;

@@ -4,14 +4,14 @@ import type { Reader } from '../reader.ts';
 import { print } from '../reader.ts';
 import type { DisplaySetting, Name } from '../syntax.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 export const DISPLAY: StatementForm = {
   keyword: 'display',
   help: 'The units in which results are shown: metric (the default), us, or by kind of quantity.',
   grammar: 'display: metric | us | KIND UNITS {, KIND UNITS}',
   examples: ['display: us', 'display: force kN, length m, deflection mm, moment kN m, stress MPa'],
-  skeleton: 'display: {metric|us}',
+  skeleton: snippet('display: {metric|us}'),
   read: reader => {
     if (!colon(reader, 'the units')) return undefined;
     const setting = readSetting(reader);
@@ -24,7 +24,7 @@ export const ASSUME: StatementForm = {
   help: 'A modelling choice, shown with the working: shear deformation, axially stiff, or a sentence in quotes.',
   grammar: 'assume: shear deformation | axially stiff | "SENTENCE"',
   examples: ['assume: shear deformation', 'assume: "Base plate on packers acts as a pin"'],
-  skeleton: 'assume: "{Sentence}"',
+  skeleton: snippet('assume: "{Sentence}"'),
   read: reader => {
     if (!colon(reader, 'the assumption')) return undefined;
     const text = reader.quoted();

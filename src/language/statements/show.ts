@@ -5,7 +5,7 @@ import type { Reader } from '../reader.ts';
 import type { ShowBody } from '../syntax.ts';
 import { MEASURES } from '../words.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 export const SHOW: StatementForm = {
   keyword: 'show',
@@ -19,7 +19,7 @@ export const SHOW: StatementForm = {
     'show: moment in R1 under service',
     'show: envelope of moment in R1 under strength',
   ],
-  skeleton: 'show: {inputs|drawing|results|reactions}',
+  skeleton: snippet('show: {inputs|drawing|results|reactions}'),
   read: reader => {
     if (!colon(reader, 'what is shown')) return undefined;
     const show = readShow(reader);

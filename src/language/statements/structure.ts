@@ -1,13 +1,14 @@
 // `structure` begins a structure; `case` gives a load case its title; `use` brings in another note or a table.
 
 import type { StatementForm } from './form.ts';
+import { snippet } from './form.ts';
 
 export const STRUCTURE: StatementForm = {
   keyword: 'structure',
   help: 'Begins a structure, which owns what follows until the next one.',
   grammar: 'structure NAME ["TITLE"]',
   examples: ['structure Rafter "Canopy rafter R1"', 'structure Gauge'],
-  skeleton: 'structure {Name} "{Title}"',
+  skeleton: snippet('structure {Name} "{Title}"'),
   read: reader => {
     const name = reader.name('the name of the structure');
     if (!name) return undefined;
@@ -21,7 +22,7 @@ export const CASE: StatementForm = {
   help: 'Gives a load case a title. A case exists as soon as a load names it.',
   grammar: 'case NAME ["TITLE"]',
   examples: ['case snow "Drifted snow, north"'],
-  skeleton: 'case {snow} "{Title}"',
+  skeleton: snippet('case {snow} "{Title}"'),
   read: reader => {
     const name = reader.name('the name of the case');
     if (!name) return undefined;
@@ -35,7 +36,7 @@ export const USE: StatementForm = {
   help: 'Brings in the values, materials, sections, cases and combinations of another note, or a table of sections.',
   grammar: 'use "PATH"',
   examples: ['use "../project.md"', 'use "sections.csv"'],
-  skeleton: 'use "{path.md}"',
+  skeleton: snippet('use "{path.md}"'),
   read: reader => {
     const path = reader.quoted();
     return path ? { kind: 'use', path } : reader.due('the path of a note or a table in quotes');

@@ -4,7 +4,7 @@ import type { Reader } from '../reader.ts';
 import type { FreedomName, SupportItem } from '../syntax.ts';
 import { readValue } from '../values.ts';
 import type { StatementForm } from './form.ts';
-import { colon } from './form.ts';
+import { colon, snippet } from './form.ts';
 
 export const SUPPORT: StatementForm = {
   keyword: 'support',
@@ -18,7 +18,7 @@ export const SUPPORT: StatementForm = {
     'support G: spring 12 kN/mm y, spring 4 MN m/rad rotation',
     'support H: roller, bears only',
   ],
-  skeleton: 'support {A}: {pinned|roller|fixed|guided}',
+  skeleton: snippet('support {A}: {pinned|roller|fixed|guided}'),
   read: reader => {
     const point = reader.name('a point');
     if (!point || !colon(reader, 'how it is held')) return undefined;
