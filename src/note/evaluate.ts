@@ -4,17 +4,20 @@
 import type { Diagnostic } from '../language/diagnostic.ts';
 import { wordsOf } from '../language/lines.ts';
 import { parseProse, parseStatements } from '../language/parse.ts';
-import type { Statement } from '../language/syntax.ts';
 import { resolveNames } from '../model/names.ts';
 import { divide, type Part } from '../model/scope.ts';
+import { type Change, changeBetween } from './change.ts';
 import { NoteEvaluation } from './evaluation.ts';
 import { readSource, type Source, type SourceFence } from './fences.ts';
 import { fingerprintOf } from './fingerprint.ts';
 import { type FrontMatterBlock, readFrontMatter } from './front-matter.ts';
+import { type FenceRead, Memory, type NoteState } from './memory.ts';
+import { movedResult } from './moved-result.ts';
+import { movedSource } from './moved-source.ts';
 import type { Fence, NoteResult } from './result.ts';
-import { Memory } from './solved.ts';
+import { shifted } from './shift.ts';
 
-export type { Memory } from './solved.ts';
+export type { Memory } from './memory.ts';
 
 export interface EvaluateOptions {
   /** Names the note in messages, and its structure where it never says `structure`. Forward slashes. */
@@ -34,33 +37,63 @@ export function createMemory(): Memory {
 
 export function evaluateNote(text: string, options: EvaluateOptions): NoteResult {
   if (text.length > MOST_TEXT) return tooLarge(text, options);
+  const memory = options.memory ?? createMemory();
+  const state = advance(memory.lastOf(options.path), text, options, memory);
+  memory.keep(options.path, state);
+  return state.result;
+}
+
+/** The state of a note, from that before a change where the change leaves its blocks as they were. */
+function advance(last: NoteState | undefined, text: string, options: EvaluateOptions, memory: Memory): NoteState {
+  const change = last === undefined ? undefined : changeBetween(last.result.text, text);
+  if (last !== undefined && change === undefined) return last;
+  const moved =
+    last === undefined || change === undefined || change.start < last.front.length
+      ? undefined
+      : movedSource(last.source, last.result.text, text, change);
+  if (last === undefined || change === undefined || moved === undefined) return begin(text, options, memory);
+  const { source, changed } = moved;
+  const reads = source.fences.map((fence, i) =>
+    i === changed ? readFence(fence, text) : moveFence(last.reads[i]!, change),
+  );
+  if (changed === undefined) return { ...last, source, reads, result: movedResult(last.result, text, change) };
+  return { front: last.front, source, reads, result: resultOf(text, options, memory, last.front, source, reads) };
+}
+
+function begin(text: string, options: EvaluateOptions, memory: Memory): NoteState {
   const front = readFrontMatter(text);
   const source = readSource(text, front.length);
-  if (source.fences.length === 0) return nothing(text, options, front);
-  const read = source.fences.map(fence => readFence(fence, text));
+  const reads = source.fences.map(fence => readFence(fence, text));
+  const result =
+    source.fences.length === 0 ? nothing(text, options, front) : resultOf(text, options, memory, front, source, reads);
+  return { front, source, reads, result };
+}
+
+function resultOf(
+  text: string,
+  { path }: EvaluateOptions,
+  memory: Memory,
+  front: FrontMatterBlock,
+  source: Source,
+  reads: readonly FenceRead[],
+): NoteResult {
   const scopes = divide(
-    read.flatMap(({ parts }) => parts),
-    fileName(options.path),
+    reads.flatMap(({ parts }) => parts),
+    fileName(path),
   );
   const names = resolveNames(scopes);
-  const evaluation = new NoteEvaluation({
-    text,
-    scopes,
-    names,
-    memory: options.memory ?? createMemory(),
-    wordsOf: range => wordsOf(text, range),
-  });
+  const evaluation = new NoteEvaluation({ text, scopes, names, memory, wordsOf: range => wordsOf(text, range) });
   const { structures, answers, values } = evaluation.run();
   const prose = source.spans.map(span => {
     const { value, diagnostics } = parseProse(span.text, span.start);
     return evaluation.prose(span, value, diagnostics);
   });
-  const diagnostics = [...read.flatMap(fence => fence.diagnostics), ...names.diagnostics, ...evaluation.diagnostics()];
+  const diagnostics = [...reads.flatMap(fence => fence.diagnostics), ...names.diagnostics, ...evaluation.diagnostics()];
   return {
-    path: options.path,
+    path,
     text,
     frontMatter: front.values,
-    fences: fencesOf(source, read, evaluation),
+    fences: fencesOf(source, reads, evaluation),
     structures,
     answers,
     values,
@@ -69,12 +102,6 @@ export function evaluateNote(text: string, options: EvaluateOptions): NoteResult
     diagnostics: inOrder(diagnostics),
     fingerprint: fingerprintOf(structures, answers, values),
   };
-}
-
-interface FenceRead {
-  readonly statements: readonly Statement[];
-  readonly parts: readonly Part[];
-  readonly diagnostics: readonly Diagnostic[];
 }
 
 function readFence(fence: SourceFence, text: string): FenceRead {
@@ -111,6 +138,18 @@ function readFence(fence: SourceFence, text: string): FenceRead {
   }
   parts.sort((a, b) => startOf(a) - startOf(b));
   return { statements, parts, diagnostics };
+}
+
+/** What was read of a fence that moved as a whole. */
+function moveFence(read: FenceRead, change: Change): FenceRead {
+  if (change.shift === 0) return read;
+  const statements = shifted(read.statements, change);
+  const moved = new Map(read.statements.map((statement, i) => [statement, statements[i]!]));
+  const parts = read.parts.map(
+    (part): Part =>
+      part.kind === 'statement' ? { kind: 'statement', statement: moved.get(part.statement)! } : shifted(part, change),
+  );
+  return { statements, parts, diagnostics: shifted(read.diagnostics, change) };
 }
 
 function startOf(part: Part): number {

@@ -16,12 +16,12 @@ import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { answerTo, spanOf } from './answers.ts';
 import type { SourceSpan } from './fences.ts';
+import type { Memory } from './memory.ts';
 import { Once } from './once.ts';
 import { show } from './phrases.ts';
 import { remarksOn } from './remarks.ts';
 import type { Answer, Combination, NamedValue, ProseValue, StructureResult } from './result.ts';
 import { type Question, type Series, seriesOf } from './series.ts';
-import type { Memory } from './solved.ts';
 import { StructureState } from './structure-state.ts';
 import { Values } from './values.ts';
 

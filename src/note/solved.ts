@@ -43,27 +43,6 @@ export class Solved {
   }
 }
 
-/** Structures solved lately, by all that their solution depends on. One memory serves many evaluations of many notes. */
-export class Memory {
-  readonly #solved = new Map<string, Solved>();
-
-  solve(structure: Structure, key: string): Solved {
-    const known = this.#solved.get(key);
-    if (known !== undefined) {
-      // Used last, dropped last.
-      this.#solved.delete(key);
-      this.#solved.set(key, known);
-      return known;
-    }
-    const solved = new Solved(structure);
-    this.#solved.set(key, solved);
-    if (this.#solved.size > MOST_REMEMBERED) this.#solved.delete(this.#solved.keys().next().value!);
-    return solved;
-  }
-}
-
-const MOST_REMEMBERED = 64;
-
 /** All of a structure that its solution depends on, as a text: names, titles, sources and places in the note left out. */
 export function solutionKey(structure: Structure): string {
   const { points, sections, members, hinges, supports, cases, loads } = structure;

@@ -15,8 +15,9 @@ import { nearest } from '../quantity/nearest.ts';
 import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
 import { describeInstability } from './instability.ts';
+import type { Memory } from './memory.ts';
 import { Once } from './once.ts';
-import { type Memory, type Solved, solutionKey } from './solved.ts';
+import { type Solved, solutionKey } from './solved.ts';
 import type { Values } from './values.ts';
 
 export interface StateInputs {

@@ -54,7 +54,7 @@ function frame() {
     'combine strength (b): 1.35 dead + 1.5 snow + 0.9 wind',
     'let w_snow = 0.6000 kN/m2 * 4 m',
     'find ridge: deflection at C under service',
-    'require sway: sway at B under strength <= 3.5 m / 150 "brief, 2.1"',
+    'require drift: sway at B under strength <= 3.5 m / 150 "brief, 2.1"',
     'require eaves: moment in R1 under strength <= 60 kN m "section table"',
     '```',
   ];
