@@ -134,7 +134,8 @@ function placeInMember(series: Series): { readonly member: number; readonly dist
 
 function placeOf({ measure, measured, governing, solved }: Series): AnswerPlace | undefined {
   const place = measured[governing]?.place;
-  if (place === undefined || measure === undefined || solved === undefined) return undefined;
+  // Only an extreme has a place to tell; what is asked at a place is told there.
+  if (place === undefined || measure === undefined || solved === undefined || 'at' in measure) return undefined;
   const { structure } = solved.analysis;
   const member = structure.members[place.member]!;
   return { member: member.name, from: structure.points[member.legs[0]!.from]!.name, distance: place.distance };

@@ -211,6 +211,9 @@ export class NoteEvaluation {
       seriesOf: (earlier, range) => this.#seriesOf(earlier, range),
       figures: frame => this.#values.figures(scope, state.report, frame),
       plain: this.#values.figures(scope, state.report),
+      isDefined: under =>
+        under?.kind !== 'named' ||
+        this.#inputs.names.find(scope, ['combination', 'case'], under.name.text) !== undefined,
       resultNamed: operand => this.#resultNamed(scope, operand),
     });
   }

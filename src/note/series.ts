@@ -1,6 +1,6 @@
 // A question worked one alternative at a time: a measure, or an expression of measures, earlier results and values. Never
 // a mixture of two alternatives.
-import type { Measure, Operand, StatementOf } from '../language/syntax.ts';
+import type { Measure, Operand, StatementOf, Under } from '../language/syntax.ts';
 import { measure as takeMeasure } from '../mechanics/measure.ts';
 import { type AlternativeModel, alternativesUnder } from '../model/combinations.ts';
 import type { Figures } from '../model/figures.ts';
@@ -42,6 +42,8 @@ export interface SeriesInputs {
     readonly result: (definition: Definition, range: Range) => Quantity | undefined;
   }) => Figures;
   readonly plain: Figures;
+  /** Whether what stands behind `under` names a combination or a case. */
+  readonly isDefined: (under: Under | undefined) => boolean;
   readonly resultNamed: (operand: Operand) => Definition | undefined;
 }
 
@@ -98,6 +100,8 @@ class SeriesReader {
     );
     if (state.report.flawed) return undefined;
     if ('problem' in asked) {
+      // A name that nothing defines was told, or stands in a line that could not be read, which was told too.
+      if (!this.#inputs.isDefined(this.#question.under)) return undefined;
       const range = this.#question.under?.range ?? this.#question.what.range;
       state.report.error('bad-question', range, asked.problem, { hint: asked.hint });
       return undefined;

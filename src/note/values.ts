@@ -37,10 +37,14 @@ export interface Structures {
   readonly span: (definition: Definition, range: Range) => Quantity | undefined;
 }
 
+/** Values are worked out as they are asked for; so long a row of them, each defined behind its use, is no note's need. */
+const MOST_IN_A_ROW = 200;
+
 export class Values {
   readonly #names: Names;
   readonly #report: Report;
   readonly #structures: Structures;
+  #depth = 0;
   readonly #lets = new Map<Definition, Once<Quantity>>();
   /** Set once the library is there: materials are read with values, and values read materials. */
   library: Library | undefined;
@@ -63,7 +67,21 @@ export class Values {
       once = new Once(() => this.#let(definition));
       this.#lets.set(definition, once);
     }
-    return once.get(() => this.#circle(definition, range));
+    if (this.#depth >= MOST_IN_A_ROW) {
+      this.#report.error(
+        'value-too-deep',
+        range,
+        `${definition.name} is the last of ${MOST_IN_A_ROW} values that each need the next.`,
+        {
+          hint: 'write the values that others need first',
+        },
+      );
+      return undefined;
+    }
+    this.#depth++;
+    const quantity = once.get(() => this.#circle(definition, range));
+    this.#depth--;
+    return quantity;
   }
 
   #let(definition: Definition): Quantity | undefined {
