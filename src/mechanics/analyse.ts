@@ -6,6 +6,7 @@
 import type { Load, Structure } from '../model/structure.ts';
 import { conditionEstimate } from './condition.ts';
 import { fieldsOf } from './fields.ts';
+import { hasIdleUnknown } from './free-movements.ts';
 import { boundFreedoms } from './freedoms.ts';
 import { type Imposed, imposedBy } from './imposed.ts';
 import { type Loading, loadingOf, SEGMENT_NUMBERS } from './loading.ts';
@@ -31,7 +32,8 @@ export function analyse(structure: Structure): Analysis {
   if (system === undefined) return unanalysed(structure, 'axially-stiff');
 
   const condition = conditionEstimate(system.matrix, system.factorisation);
-  const mechanisms = condition > SUSPICIOUS_CONDITION ? findMechanisms(system) : [];
+  const suspicious = condition > SUSPICIOUS_CONDITION || hasIdleUnknown(system);
+  const mechanisms = suspicious ? findMechanisms(system) : [];
   if (mechanisms.length > 0) return { ...unanalysed(structure), stability: unstable(mechanisms) };
 
   const redundancy = redundancyOf(system);
@@ -108,6 +110,7 @@ function add(a: Response, b: Response): Response {
     natural: a.natural.map((value, k) => value + b.natural[k]!),
     ground: a.ground.map((value, k) => value + b.ground[k]!),
     residual: a.residual + b.residual,
+    largest: { force: a.largest.force + b.largest.force, moment: a.largest.moment + b.largest.moment },
   };
 }
 
@@ -123,6 +126,7 @@ function solutionOf(system: System, response: Response, loading: Loading | undef
     reactions: reactionsOf(system, response.ground),
     applied: loading?.applied ?? { x: 0, y: 0, moment: 0 },
     residual: response.residual,
+    largest: response.largest,
   };
 }
 

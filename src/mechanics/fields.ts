@@ -64,7 +64,7 @@ function startOf(system: System, along: Along, movement: Float64Array, natural: 
   return {
     axialForce: natural[3 * e]! + along.shares[2 * e]!,
     shearForce: bar ? 0 : (startMoment + endMoment) / legs.length[e]! - along.shares[2 * e + 1]!,
-    bendingMoment: bar ? 0 : -startMoment,
+    bendingMoment: bar ? 0 : 0 - startMoment,
     rotation: bar ? chord : movement[freedoms[f + 2]!]!,
     axialMovement: shares[s]! * x0 + shares[s + 1]! * y0,
     transverseMovement: startAcross,
@@ -101,7 +101,7 @@ function addPieces(
     const V = state.shearForce;
     const M = state.bendingMoment;
     // dN/ds = −p, dV/ds = w, dM/ds = V; EI dθ/ds = M, dv/ds = θ, EA du/ds = N.
-    const axialForce: Polynomial = [N, -p0, -p1 / 2];
+    const axialForce: Polynomial = [N, 0 - p0, 0 - p1 / 2];
     const shearForce: Polynomial = [V, w0, w1 / 2];
     const bendingMoment: Polynomial = [M, V, w0 / 2, w1 / 6];
     const rotation: Polynomial = [
@@ -119,7 +119,12 @@ function addPieces(
       (w0 / 24) * flexibility,
       (w1 / 120) * flexibility,
     ];
-    const axialMovement: Polynomial = [state.axialMovement, N * stretch, (-p0 / 2) * stretch, (-p1 / 6) * stretch];
+    const axialMovement: Polynomial = [
+      state.axialMovement,
+      N * stretch,
+      (0 - p0 / 2) * stretch,
+      (0 - p1 / 6) * stretch,
+    ];
     pieces.push({
       leg,
       start: legStart + from,
@@ -163,8 +168,13 @@ function addBarPieces(
     const p1 = along.segments[at + 3]!;
     state.axialForce -= along.segments[at + 5]!;
     const N = state.axialForce;
-    const axialForce: Polynomial = [N, -p0, -p1 / 2];
-    const axialMovement: Polynomial = [state.axialMovement, N * stretch, (-p0 / 2) * stretch, (-p1 / 6) * stretch];
+    const axialForce: Polynomial = [N, 0 - p0, 0 - p1 / 2];
+    const axialMovement: Polynomial = [
+      state.axialMovement,
+      N * stretch,
+      (0 - p0 / 2) * stretch,
+      (0 - p1 / 6) * stretch,
+    ];
     pieces.push({
       leg,
       start: legStart + from,

@@ -21,6 +21,27 @@ import { pointsOf, type System } from './system.ts';
 export const FREE_STRAIN = 1e-9;
 
 /**
+ * Whether some unknown moves almost nothing: its stiffness may be rounding, which a matrix scaled to a diagonal of ones
+ * does not show. Strains as in `FREE_STRAIN`.
+ */
+export function hasIdleUnknown(system: System): boolean {
+  const { reduction, rows, legs } = system;
+  const strains = new Float64Array(reduction.size);
+  for (let i = 0; i < rows.count; i++) {
+    for (let k = rows.starts[i]!; k < rows.starts[i + 1]!; k++) {
+      const unknown = rows.unknowns[k]!;
+      const turning = Math.max(Math.abs(rows.startTurning[k]!), Math.abs(rows.endTurning[k]!));
+      const arm = isMovement(system, unknown) && i < legs.count ? legs.length[i]! : 1;
+      strains[unknown] = Math.max(strains[unknown]!, Math.abs(rows.lengthening[k]!), turning * arm);
+    }
+  }
+  return strains.some(strain => strain < IDLE);
+}
+
+/** Far above rounding, far below a leg that is square to a movement. */
+const IDLE = 1e-6;
+
+/**
  * Movements outside `known` (by unknown, free themselves) that are free, by unknown; at most about `limit`.
  *
  * v ← v − F⁻¹ S v takes from a scattered vector all that strains, S being the stiffness of unit weights and F its factors
@@ -35,17 +56,14 @@ export function findFreeMovements(system: System, known: readonly Float64Array[]
   if (known.length >= size) return [];
   const weights = unitWeights(system);
   const scale = new Float64Array(size);
-  for (let k = 0; k < size; k++) {
-    const f = reduction.freedoms[k]!;
-    scale[k] = f - freedoms.first[freedoms.point[f]!]! < 2 ? 1 : freedoms.size;
-  }
+  for (let k = 0; k < size; k++) scale[k] = isMovement(system, k) ? 1 : freedoms.size;
   const matrix = assemble(
     rows,
     { ...weights, other: new Float64Array(rows.count) },
     reduction,
     pointsOf(reduction, freedoms),
   );
-  const factorisation = factorise(withTrace(matrix));
+  const factorisation = factorise(withTrace(matrix, scale));
   const basis: Float64Array[] = [];
   for (const vector of known) addTo(basis, vector, scale, []);
   const found: Float64Array[] = [];
@@ -85,10 +103,18 @@ const ROUNDS = 5;
 /** Added to the diagonal, relative to it: above the rounding of a factorisation, below the stiffness of what is not free. */
 const TRACE = 1e-12;
 
+/** Added at least, as the square of a strain: what strains less must not shrink, as it may count as free. */
+const LEAST_TRACE = 1e-14;
+
 /** Adds what of a vector is at right angles to the set and to the others, made of length 1; nothing where that is rounding. */
 function addTo(set: Float64Array[], vector: Float64Array, scale: Float64Array, others: readonly Float64Array[]): void {
   const unit = orthonormalise(vector, scale, [...others, ...set]);
   if (unit !== undefined) set.push(unit);
+}
+
+function isMovement({ reduction, freedoms }: System, unknown: number): boolean {
+  const f = reduction.freedoms[unknown]!;
+  return f - freedoms.first[freedoms.point[f]!]! < 2;
 }
 
 interface Weights {
@@ -112,10 +138,13 @@ function unitWeights(system: System): Weights {
   return { axial, own };
 }
 
-function withTrace(matrix: SymmetricMatrix): SymmetricMatrix {
+function withTrace(matrix: SymmetricMatrix, scale: Float64Array): SymmetricMatrix {
   const values = matrix.values.slice();
-  // The diagonal entry is the first of its column.
-  for (let column = 0; column < matrix.size; column++) values[matrix.starts[column]!]! *= 1 + TRACE;
+  for (let column = 0; column < matrix.size; column++) {
+    // The diagonal entry is the first of its column.
+    const diagonal = matrix.starts[column]!;
+    values[diagonal]! += Math.max(TRACE * values[diagonal]!, LEAST_TRACE * scale[column]! * scale[column]!);
+  }
   return { ...matrix, values };
 }
 

@@ -20,6 +20,8 @@ export interface Response {
   readonly ground: Float64Array;
   /** Largest force out of balance at a freedom that is not held, over the largest load; couples over the size of the structure. */
   readonly residual: number;
+  /** The largest force and couple to be balanced, N and N m. */
+  readonly largest: { readonly force: number; readonly moment: number };
 }
 
 export function respond(system: System, loading: Loading | undefined, imposed: Imposed | undefined): Response {
@@ -37,8 +39,11 @@ export function respond(system: System, loading: Loading | undefined, imposed: I
     for (let k = 0; k < state.shortenings.length; k++) state.shortenings[k]! -= imposed.springs[k]!;
   }
   balance(system, loading, state);
-  const largest = largestForce(system, state.unbalanced, false);
-  if (largest === 0) return { movement: state.movement, natural: state.natural, ground: state.unbalanced, residual: 0 };
+  const loads = largestForces(system, state.unbalanced, false);
+  const largest = Math.max(loads.force, loads.moment / freedoms.size);
+  if (largest === 0) {
+    return { movement: state.movement, natural: state.natural, ground: state.unbalanced, residual: 0, largest: loads };
+  }
 
   // Each step solves for what the one before left. Strains and forces are added up step by step, not worked out from the
   // sum of movements, so that what a small step adds is not lost in the rounding of a large movement.
@@ -56,11 +61,12 @@ export function respond(system: System, loading: Loading | undefined, imposed: I
   }
   if (thrusts !== undefined) addThrusts(thrusts, legs, ends, state.natural, state.unbalanced);
 
-  const residual = largestForce(system, state.unbalanced, true) / largest;
+  const rest = largestForces(system, state.unbalanced, true);
+  const residual = Math.max(rest.force, rest.moment / freedoms.size) / largest;
   const ground = state.unbalanced;
   addSpringForces(system, state.shortenings, ground, 1);
-  for (let f = 0; f < ground.length; f++) ground[f] = -ground[f]!;
-  return { movement: state.movement, natural: state.natural, ground, residual };
+  for (let f = 0; f < ground.length; f++) ground[f] = 0 - ground[f]!;
+  return { movement: state.movement, natural: state.natural, ground, residual, largest: loads };
 }
 
 /** Solves at most; the first two are always made, the others only for structures of badly mixed stiffness. */
@@ -117,18 +123,19 @@ function addSpringForces(system: System, shortenings: Float64Array, force: Float
   });
 }
 
-/** Couples count as forces at an arm of the size of the structure. */
-function largestForce(system: System, force: Float64Array, freeOnly: boolean): number {
-  const { held, first, point, size } = system.freedoms;
-  let largest = 0;
+function largestForces(system: System, force: Float64Array, freeOnly: boolean) {
+  const { held, first, point } = system.freedoms;
+  const largest = { force: 0, moment: 0 };
   for (let f = 0; f < force.length; f++) {
     if (freeOnly && held[f] === 1) continue;
     const value = Math.abs(force[f]!);
-    largest = Math.max(largest, f - first[point[f]!]! < 2 ? value : value / size);
+    if (f - first[point[f]!]! < 2) largest.force = Math.max(largest.force, value);
+    else largest.moment = Math.max(largest.moment, value);
   }
   return largest;
 }
 
+/** Couples count as forces at an arm of the size of the structure. */
 function largestUnknownForce(system: System, force: Float64Array): number {
   const { freedoms, reduction } = system;
   const { first, point, size } = freedoms;

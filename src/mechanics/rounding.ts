@@ -38,10 +38,10 @@ function sizesOf(solution: Solution): Sizes {
   return sizes;
 }
 
-/** By the sums of the polynomials' terms, as these are what is rounded. */
+/** By what went into the solution, and by the sums of the polynomials' terms, as these are what is rounded. */
 function findSizes(solution: Solution): Sizes {
-  let force = 0;
-  let moment = 0;
+  let force = solution.largest?.force ?? 0;
+  let moment = solution.largest?.moment ?? 0;
   let movement = 0;
   let rotation = 0;
   const largest = (piece: FieldPiece, polynomial: Polynomial) => bound(polynomial, piece.end - piece.start);

@@ -64,6 +64,11 @@ export interface Solution {
   readonly applied: Reaction;
   /** Largest unbalanced force at any free freedom over the largest load; 0 for no load. */
   readonly residual: number;
+  /**
+   * The largest force (N) and couple (N m) that went into it: loads at the joints, those between them shared out, and for
+   * imposed movements what would hold every other freedom still. Rounding in forces and moments is relative to them.
+   */
+  readonly largest?: { readonly force: number; readonly moment: number };
 }
 
 /** x right, y up, moment anticlockwise: N and N m. */

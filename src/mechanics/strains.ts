@@ -31,13 +31,25 @@ export function relateEnds(legs: Legs, freedoms: Freedoms): Ends {
       ends.freedoms[f + 1] = first[p]! + 1;
       ends.freedoms[f + 2] = (end === 0 ? freedoms.startRotation : freedoms.endRotation)[e]!;
       const s = 8 * e + 4 * end;
-      ends.shares[s] = cosine * x + sine * y;
-      ends.shares[s + 1] = sine * x - cosine * y;
-      ends.shares[s + 2] = cosine * y - sine * x;
-      ends.shares[s + 3] = cosine * x + sine * y;
+      const parallel = exact(cosine * x + sine * y);
+      const square = exact(cosine * y - sine * x);
+      ends.shares[s] = parallel;
+      ends.shares[s + 1] = -square;
+      ends.shares[s + 2] = square;
+      ends.shares[s + 3] = parallel;
     }
   }
   return ends;
+}
+
+/**
+ * What is left of sums that cancel, relative to their terms. Directions come from coordinates and angles that are rounded;
+ * a leg along an axis must not resist a movement across it by what that leaves.
+ */
+const CANCELLED = 1e-12;
+
+function exact(share: number): number {
+  return Math.abs(share) <= CANCELLED ? 0 : share;
 }
 
 /**
@@ -104,6 +116,10 @@ export function strainRows(legs: Legs, ends: Ends, freedoms: Freedoms, reduction
   const lengthening = new Float64Array(capacity);
   const startTurning = new Float64Array(capacity);
   const endTurning = new Float64Array(capacity);
+  // Sizes of the terms summed up in each; needed only where dependent freedoms bring several to one unknown.
+  const tied = reduction.unknowns.length > reduction.size;
+  const lengths = new Float64Array(tied ? capacity : 0);
+  const turnings = new Float64Array(tied ? capacity : 0);
   // Where an unknown stands in the row under way, if it is there already.
   const places = new Int32Array(reduction.size).fill(-1);
   let filled = 0;
@@ -122,6 +138,19 @@ export function strainRows(legs: Legs, ends: Ends, freedoms: Freedoms, reduction
       lengthening[place]! += value * length;
       startTurning[place]! += value * start;
       endTurning[place]! += value * end;
+      if (tied) {
+        lengths[place]! += Math.abs(value * length);
+        turnings[place]! += Math.abs(value * start) + Math.abs(value * end);
+      }
+    }
+  };
+  const finish = (item: number) => {
+    starts[item + 1] = filled;
+    if (!tied) return;
+    for (let k = rowStart; k < filled; k++) {
+      if (Math.abs(lengthening[k]!) <= CANCELLED * lengths[k]!) lengthening[k] = 0;
+      if (Math.abs(startTurning[k]!) <= CANCELLED * turnings[k]!) startTurning[k] = 0;
+      if (Math.abs(endTurning[k]!) <= CANCELLED * turnings[k]!) endTurning[k] = 0;
     }
   };
 
@@ -139,14 +168,14 @@ export function strainRows(legs: Legs, ends: Ends, freedoms: Freedoms, reduction
       }
       if (bends) add(ends.freedoms[f + 2]!, 0, end === 0 ? 1 : 0, end === 0 ? 0 : 1);
     }
-    starts[e + 1] = filled;
+    finish(e);
   }
   freedoms.springs.forEach((spring, k) => {
     rowStart = filled;
     spring.freedoms.forEach((freedom, i) => {
       add(freedom, spring.coefficients[i]!, 0, 0);
     });
-    starts[legs.count + k + 1] = filled;
+    finish(legs.count + k);
   });
   return { count, starts, unknowns, lengthening, startTurning, endTurning };
 }

@@ -49,6 +49,10 @@ export function superpose(analysis: Analysis, solutions: readonly Solution[], fa
     applied: sumReactions(used, solution => solution.applied),
     // Each residual is relative to its own case; their sum bounds that of the combination, relative to its largest term.
     residual: terms.reduce((sum, { solution }) => sum + solution.residual, 0),
+    largest: {
+      force: terms.reduce((sum, { solution, factor }) => sum + Math.abs(factor) * (solution.largest?.force ?? 0), 0),
+      moment: terms.reduce((sum, { solution, factor }) => sum + Math.abs(factor) * (solution.largest?.moment ?? 0), 0),
+    },
   };
 }
 
