@@ -9,7 +9,7 @@ import type { UnitAction } from '../model/question.ts';
 import { movementsFrom } from './elimination.ts';
 import type { InternalForces } from './internal-forces.ts';
 import { addLoad, emptyLoading, type Loading } from './loading.ts';
-import { derivative, productIntegral, valueAt } from './polynomial.ts';
+import { bound, derivative, productIntegral, valueAt } from './polynomial.ts';
 import { type PrimaryStructure, virtualSystem } from './primary.ts';
 import type { SpanPiece } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, isUnknown, type StaticLeg, type Statics, unitOf } from './statics.ts';
@@ -19,6 +19,8 @@ import { type RealForces, virtualWork } from './work.ts';
 export interface GivenForces {
   readonly forces: InternalForces;
   readonly strains: Float64Array;
+  /** The largest that any leg's strains could be if they did not change sign along it: movement of one end, m. */
+  readonly size: number;
 }
 
 /** Of the structure under its cases with these factors, the forces being those of the same. */
@@ -35,10 +37,12 @@ export function givenForces(
     if (factor !== 0) addLoad(statics, loading, load, factor);
   }
   const ends = new Float64Array(2 * legs.length * COMPONENTS);
+  let size = 0;
   for (let index = 0; index < legs.length; index++) {
     const leg = legs[index]!;
     const pieces = piecesWithin(forces, leg);
     strains.set(strainsWithin(leg, pieces), 3 * index);
+    size = Math.max(size, sizeWithin(leg, pieces));
     ends.set(endForces(leg, pieces), 2 * index * COMPONENTS);
   }
   const onPoints = sumAtPoints(statics, ends, loading);
@@ -47,7 +51,7 @@ export function givenForces(
     const reaction = moment ? -onPoints[row]! : -(x * onPoints[row]! + y * onPoints[row + 1]!);
     strains[firstReaction + index] = flexibility * reaction - (loading.ground?.[index] ?? 0);
   }
-  return { forces, strains };
+  return { forces, strains, size };
 }
 
 /** As `movement`, with the virtual system on the primary structure and the given forces for the real ones. */
@@ -67,11 +71,12 @@ export function movementFromForces(
 
 /**
  * The largest gap that the strains of the given forces leave at a redundant, when the points have moved as the primary
- * structure's strains say: relative to the largest movement, turns by the length of the legs. 0 where all fits.
+ * structure's strains say: relative to the largest movement, turns by the length of the legs. 0 where all fits; of no
+ * meaning where nothing moves and all strains are rounding.
  */
-export function largestGap({ statics, elimination }: PrimaryStructure, { strains }: GivenForces): number {
+export function largestGap({ statics, elimination }: PrimaryStructure, given: GivenForces): number {
   // Here in dimensionless units, as the columns are.
-  const scaled = strains.map((strain, unknown) => (strain === 0 ? 0 : strain * unitOf(statics, unknown)));
+  const scaled = given.strains.map((strain, unknown) => (strain === 0 ? 0 : strain * unitOf(statics, unknown)));
   // A unit of an unknown pulls the points against their movement, so that its work on them is minus its strain.
   const movements = movementsFrom(
     elimination,
@@ -79,7 +84,7 @@ export function largestGap({ statics, elimination }: PrimaryStructure, { strains
   );
   const rows = new Int32Array(ENTRIES_PER_UNKNOWN);
   const values = new Float64Array(ENTRIES_PER_UNKNOWN);
-  let size = 0;
+  let { size } = given;
   for (const movement of movements) size = Math.max(size, Math.abs(movement));
   let largest = 0;
   for (const unknown of elimination.redundants) {
@@ -120,6 +125,15 @@ function strainsWithin(
     rising += productIntegral(bendingMoment, [start / length, 1 / length], span);
   }
   return [axialFlexibility * axial, bendingFlexibility * falling, bendingFlexibility * rising];
+}
+
+function sizeWithin({ length, axialFlexibility, bendingFlexibility }: StaticLeg, pieces: readonly SpanPiece[]): number {
+  let size = 0;
+  for (const { start, end, axialForce, bendingMoment } of pieces) {
+    const axial = axialFlexibility * bound(axialForce, end - start) * length;
+    size = Math.max(size, axial, bendingFlexibility * bound(bendingMoment, end - start) * length ** 2);
+  }
+  return size;
 }
 
 /** What the leg does to the points at its start and end, `COMPONENTS` each. */

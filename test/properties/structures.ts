@@ -5,6 +5,7 @@ import fc from 'fast-check';
 import type { LineDirection, Structure } from '../../src/model/structure.ts';
 import { movement, prepare, primaryStructure } from '../../src/virtual-work/index.ts';
 import { build, type Chain, HELD, type Holding, type Sketch, type SketchLoad } from '../virtual-work/build.ts';
+import { described } from './described.ts';
 
 export interface Options {
   /** Without springs and imposed movements. */
@@ -15,12 +16,12 @@ export interface Options {
 
 /** Three cases: 0 of line loads and weight, 1 of forces and couples, 2 of all kinds, imposed movements included. */
 export function structures(options: Options = {}): fc.Arbitrary<Structure> {
-  return recipes.map(recipe => structureOf(recipe, options));
+  return recipes.map(recipe => described(structureOf(recipe, options)));
 }
 
 /** Statically determinate ones: trees on one fixed foot, spans end to end with hinges, girders. Each with its loads. */
 export function determinateStructures(options: Options = {}): fc.Arbitrary<Structure> {
-  return recipes.map(recipe => determinateOf(recipe, options));
+  return recipes.map(recipe => described(determinateOf(recipe, options)));
 }
 
 export interface Recipe {
@@ -386,7 +387,8 @@ function lineLoad(structure: Structure, draw: Draw): SketchLoad {
     { kind: 'global', x: 0, y: -1, onPlan: false },
     { kind: 'global', x: 0, y: -1, onPlan: true },
     { kind: 'global', x: Math.cos(angle), y: Math.sin(angle), onPlan: false },
-    { kind: 'square', x: 0.6, y: -0.8 },
+    // Along no member that there is.
+    { kind: 'square', x: 0.28, y: -0.96 },
     { kind: 'along', sense: 1 },
     { kind: 'along', sense: -1 },
   ]);
