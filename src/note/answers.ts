@@ -113,7 +113,7 @@ function asked(series: Series): { readonly measure: ResolvedMeasure; readonly al
 
 function inWords({ state, units }: AnswerInputs, series: Series): string {
   const value = series.values[series.governing]!;
-  const structure = state.structure(() => undefined);
+  const structure = state.structure();
   if (series.measure === undefined || structure === undefined) return show(value, units, kindOf(series, value));
   return answerInWords(series.measure, value, units, structure, placeInMember(series));
 }
@@ -143,7 +143,7 @@ function placeOf({ measure, measured, governing, solved }: Series): AnswerPlace 
 
 function sidesInWords({ state, units }: AnswerInputs, series: Series): string | undefined {
   const sides = series.measured[series.governing]?.sides;
-  const structure = state.structure(() => undefined);
+  const structure = state.structure();
   if (sides === undefined || series.measure === undefined || structure === undefined) return undefined;
   const { dimension } = series.values[series.governing]!;
   const words = sides.map(value =>
@@ -160,7 +160,7 @@ interface Limit {
 }
 
 function readLimit(inputs: AnswerInputs, limit: Value, series: Series, value: Quantity): Limit | undefined {
-  const structure = inputs.state.structure(() => undefined);
+  const structure = inputs.state.structure();
   let used: Span | undefined;
   const quantity = inputs.limitOf(limit, range => {
     used = spanOf(series, structure, range, inputs.report);

@@ -17,13 +17,13 @@ import type { Range } from '../quantity/range.ts';
 import { answerTo, spanOf } from './answers.ts';
 import type { SourceSpan } from './fences.ts';
 import type { Memory } from './memory.ts';
-import { Once } from './once.ts';
+import { Descent, Once } from './once.ts';
 import { show } from './phrases.ts';
 import { remarksOn } from './remarks.ts';
 import type { Answer, Combination, NamedValue, ProseValue, StructureResult } from './result.ts';
 import { type Question, type Series, seriesOf } from './series.ts';
 import { StructureState } from './structure-state.ts';
-import { Values } from './values.ts';
+import { refuseNamed, Values } from './values.ts';
 
 export interface EvaluationInputs {
   readonly text: string;
@@ -37,6 +37,7 @@ export class NoteEvaluation {
   readonly #inputs: EvaluationInputs;
   /** What is wrong outside structures: values, materials, sections, prose. */
   readonly #report = new Report();
+  readonly #descent = new Descent();
   readonly #values: Values;
   readonly #library: Library;
   readonly #states: readonly StructureState[];
@@ -47,13 +48,18 @@ export class NoteEvaluation {
   constructor(inputs: EvaluationInputs) {
     this.#inputs = inputs;
     const { names, scopes } = inputs;
-    this.#values = new Values(names, this.#report, {
-      geometry: (scope, range) => this.#geometry(scope, range),
-      supported: scope =>
-        scope.statements.flatMap(statement => (statement.kind === 'support' ? [statement.point.text] : [])),
-      result: (definition, range) => this.#result(definition, range),
-      span: (definition, range) => this.#spanOfResult(definition, range),
-    });
+    this.#values = new Values(
+      names,
+      this.#report,
+      {
+        geometry: (scope, range) => this.#geometry(scope, range),
+        supported: scope =>
+          scope.statements.flatMap(statement => (statement.kind === 'support' ? [statement.point.text] : [])),
+        result: (definition, range) => this.#result(definition, range),
+        span: (definition, range) => this.#spanOfResult(definition, range),
+      },
+      this.#descent,
+    );
     this.#library = new Library(
       names,
       definition => this.#values.figures(definition.scope, this.#report),
@@ -71,6 +77,7 @@ export class NoteEvaluation {
           values: this.#values,
           library: this.#library,
           memory: inputs.memory,
+          descent: this.#descent,
           wordsOf: inputs.wordsOf,
         }),
     );
@@ -145,30 +152,28 @@ export class NoteEvaluation {
       );
       return undefined;
     }
-    return state.geometry(() => {
-      this.#report.error('circular-value', range, 'This length depends on the chain that it stands in.');
-    });
+    return state.geometry(() =>
+      this.#report.error('circular-value', range, 'This length depends on the chain that it stands in.'),
+    );
   }
 
   #structureResult(state: StructureState, index: number, answers: readonly Answer[]): StructureResult {
     const { scope } = state;
     const { head } = this.#inputs.scopes;
-    const structure = state.structure(() => undefined);
-    const solved = state.solved(() => undefined);
+    const structure = state.structure();
+    const solved = state.solved();
     const sentences = [...head.statements, ...scope.statements].flatMap(assumptionOf);
     const title = scope.structure?.title?.text;
-    const combinations: Combination[] = state
-      .combinations(() => undefined)
-      .map(({ name, kind, alternatives }) => ({
-        name,
-        kind,
-        alternatives: alternatives.map(({ label, text, factors }) => ({
-          label,
-          text,
-          factors,
-          solution: () => this.#solution(state, factors),
-        })),
-      }));
+    const combinations: Combination[] = state.combinations().map(({ name, kind, alternatives }) => ({
+      name,
+      kind,
+      alternatives: alternatives.map(({ label, text, factors }) => ({
+        label,
+        text,
+        factors,
+        solution: () => this.#solution(state, factors),
+      })),
+    }));
     return {
       structure,
       name: scope.name ?? '',
@@ -185,7 +190,7 @@ export class NoteEvaluation {
   }
 
   #solution(state: StructureState, factors: readonly number[]) {
-    const solved = state.solved(() => undefined);
+    const solved = state.solved();
     if (solved === undefined)
       throw new Error('a combination of a structure without a solution was asked for its solution');
     return solved.solution(factors);
@@ -196,10 +201,10 @@ export class NoteEvaluation {
   #seriesOf(definition: Definition, range: Range): Series | undefined {
     let once = this.#series.get(definition);
     if (once === undefined) {
-      once = new Once(() => this.#workSeries(definition));
+      once = new Once(this.#descent, () => this.#workSeries(definition));
       this.#series.set(definition, once);
     }
-    return once.get(() => this.#circle(definition, range));
+    return once.get(why => refuseNamed(this.#report, definition, range, why));
   }
 
   #workSeries(definition: Definition): Series | undefined {
@@ -246,12 +251,7 @@ export class NoteEvaluation {
     const series = this.#seriesOf(definition, range);
     const state = this.#stateOf(definition.scope);
     if (series === undefined || state === undefined) return undefined;
-    const span = spanOf(
-      series,
-      state.structure(() => undefined),
-      range,
-      state.report,
-    );
+    const span = spanOf(series, state.structure(), range, state.report);
     return span === undefined ? undefined : { value: span.length, dimension: LENGTH };
   }
 
@@ -277,12 +277,6 @@ export class NoteEvaluation {
   #answerNamed(scope: Scope, value: Value): Answer | undefined {
     const definition = value.kind === 'operand' ? this.#resultNamed(scope, value.operand) : undefined;
     return definition === undefined ? undefined : this.#answer(definition);
-  }
-
-  #circle(definition: Definition, range: Range): void {
-    this.#report.error('circular-value', range, `${definition.name} depends on itself.`, {
-      related: [{ range: definition.definition, message: `${definition.name} is asked for here.` }],
-    });
   }
 
   // Values

@@ -11,6 +11,7 @@ import { dimensionOf, resolveMeasure } from '../model/questions.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { magnitudeFor, withoutNoise } from './magnitudes.ts';
+import type { Refusal } from './once.ts';
 import type { Taken } from './second-road.ts';
 import type { Solved } from './solved.ts';
 import type { StructureState } from './structure-state.ts';
@@ -76,7 +77,7 @@ class SeriesReader {
     const own = this.#alternatives();
     if (own === undefined) return undefined;
     const resolved = this.#resolve(measures);
-    const solved = state.solved(() => this.#circle());
+    const solved = state.solved(why => this.#refuse(why));
     if (resolved === undefined || solved === undefined || state.report.flawed) return undefined;
     if (own.some(({ cases }) => cases.some(name => state.report.flawedCases.has(name)))) return undefined;
     const running = this.#running(own, earlier as Series[], results);
@@ -96,7 +97,7 @@ class SeriesReader {
     if (state.report.flawed) return undefined;
     const asked = alternativesUnder(
       this.#question.under,
-      state.combinations(() => this.#circle()),
+      state.combinations(why => this.#refuse(why)),
     );
     if (state.report.flawed) return undefined;
     if ('problem' in asked) {
@@ -109,18 +110,20 @@ class SeriesReader {
     return asked.sound && asked.alternatives.length > 0 ? asked.alternatives : undefined;
   }
 
-  #circle(): void {
+  #refuse(why: Refusal): void {
+    const { name } = this.#question;
+    const message = why === 'circle' ? 'depends on itself' : 'needs too many other values in a row';
     this.#inputs.state.report.error(
-      'circular-value',
-      this.#question.name.range,
-      `${this.#question.name.text} depends on itself.`,
+      why === 'circle' ? 'circular-value' : 'value-too-deep',
+      name.range,
+      `${name.text} ${message}.`,
     );
   }
 
   #resolve(measures: readonly Measure[]): ReadonlyMap<Measure, ResolvedMeasure> | undefined {
     const { state, plain } = this.#inputs;
-    const geometry = state.geometry(() => this.#circle());
-    const structure = state.structure(() => this.#circle());
+    const geometry = state.geometry(why => this.#refuse(why));
+    const structure = state.structure(why => this.#refuse(why));
     if (geometry === undefined || structure === undefined) return undefined;
     const resolved = new Map<Measure, ResolvedMeasure>();
     for (const measure of measures) {

@@ -16,7 +16,7 @@ import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
 import { describeInstability } from './instability.ts';
 import type { Memory } from './memory.ts';
-import { Once } from './once.ts';
+import { type Descent, Once, type Refusal } from './once.ts';
 import { type Solved, solutionKey } from './solved.ts';
 import type { Values } from './values.ts';
 
@@ -27,6 +27,7 @@ export interface StateInputs {
   readonly values: Values;
   readonly library: Library;
   readonly memory: Memory;
+  readonly descent: Descent;
   readonly wordsOf: (range: Range) => string;
 }
 
@@ -45,39 +46,41 @@ export class StructureState {
   constructor(inputs: StateInputs) {
     this.scope = inputs.scope;
     this.#inputs = inputs;
-    this.#geometry = new Once(() => layOut(this.scope, inputs.values.figures(this.scope, this.report), this.report));
-    this.#structure = new Once(() => this.#build());
-    this.#solved = new Once(() => this.#solve());
-    this.#combinations = new Once(() => this.#readCombinations());
+    this.#geometry = new Once(inputs.descent, () =>
+      layOut(this.scope, inputs.values.figures(this.scope, this.report), this.report),
+    );
+    this.#structure = new Once(inputs.descent, () => this.#build());
+    this.#solved = new Once(inputs.descent, () => this.#solve());
+    this.#combinations = new Once(inputs.descent, () => this.#readCombinations());
   }
 
-  geometry(circle: () => void): Geometry | undefined {
-    return this.#geometry.get(circle);
+  geometry(refuse?: (why: Refusal) => void): Geometry | undefined {
+    return this.#geometry.get(refuse);
   }
 
   /** What could be built, flawed or not; undefined where there is no member at all. */
-  structure(circle: () => void): Structure | undefined {
-    return this.#structure.get(circle);
+  structure(refuse?: (why: Refusal) => void): Structure | undefined {
+    return this.#structure.get(refuse);
   }
 
   /** Undefined where something is missing from the structure, or it is not stable. */
-  solved(circle: () => void): Solved | undefined {
-    return this.#solved.get(circle);
+  solved(refuse?: (why: Refusal) => void): Solved | undefined {
+    return this.#solved.get(refuse);
   }
 
-  combinations(circle: () => void): readonly CombinationModel[] {
-    return this.#combinations.get(circle) ?? [];
+  combinations(refuse?: (why: Refusal) => void): readonly CombinationModel[] {
+    return this.#combinations.get(refuse) ?? [];
   }
 
   /** Why nothing of this structure can be told, in one line. */
   get withheld(): string | undefined {
-    if (this.solved(() => undefined) !== undefined && !this.report.flawed) return undefined;
+    if (this.solved() !== undefined && !this.report.flawed) return undefined;
     return this.#excuse ?? 'something of it cannot be read or is not evaluated';
   }
 
   #build(): Structure | undefined {
     const { scope, head, names, values, library } = this.#inputs;
-    const geometry = this.geometry(() => undefined);
+    const geometry = this.geometry();
     if (geometry === undefined) return undefined;
     if (brokenBeyond(scope.broken)) this.report.flawed = true;
     for (const { keyword, name } of scope.broken) {
@@ -142,7 +145,7 @@ export class StructureState {
   }
 
   #solve(): Solved | undefined {
-    const structure = this.structure(() => undefined);
+    const structure = this.structure();
     if (structure === undefined || this.report.flawed) return undefined;
     const solved = this.#inputs.memory.solve(structure, solutionKey(structure));
     const { stability, tooLarge, conflict } = solved.analysis;
@@ -184,7 +187,7 @@ export class StructureState {
 
   #readCombinations(): readonly CombinationModel[] {
     const { scope, head, values, wordsOf } = this.#inputs;
-    const structure = this.structure(() => undefined);
+    const structure = this.structure();
     if (structure === undefined) return [];
     const { cases } = structure;
     const own = readCombinations(scope, cases, values.figures(scope, this.report), wordsOf, this.report);

@@ -11,7 +11,7 @@ import { LENGTH } from '../quantity/dimension.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { CONSTANTS } from '../quantity/units.ts';
-import { Once } from './once.ts';
+import { type Descent, MOST_IN_A_ROW, Once, type Refusal } from './once.ts';
 
 /** What is special about the place where a value stands. */
 export interface Frame {
@@ -37,19 +37,17 @@ export interface Structures {
   readonly span: (definition: Definition, range: Range) => Quantity | undefined;
 }
 
-/** Values are worked out as they are asked for; so long a row of them, each defined behind its use, is no note's need. */
-const MOST_IN_A_ROW = 200;
-
 export class Values {
   readonly #names: Names;
   readonly #report: Report;
   readonly #structures: Structures;
-  #depth = 0;
+  readonly #descent: Descent;
   readonly #lets = new Map<Definition, Once<Quantity>>();
   /** Set once the library is there: materials are read with values, and values read materials. */
   library: Library | undefined;
 
-  constructor(names: Names, report: Report, structures: Structures) {
+  constructor(names: Names, report: Report, structures: Structures, descent: Descent) {
+    this.#descent = descent;
     this.#names = names;
     this.#report = report;
     this.#structures = structures;
@@ -64,37 +62,16 @@ export class Values {
   named(definition: Definition, range: Range): Quantity | undefined {
     let once = this.#lets.get(definition);
     if (once === undefined) {
-      once = new Once(() => this.#let(definition));
+      once = new Once(this.#descent, () => this.#let(definition));
       this.#lets.set(definition, once);
     }
-    if (this.#depth >= MOST_IN_A_ROW) {
-      this.#report.error(
-        'value-too-deep',
-        range,
-        `${definition.name} is the last of ${MOST_IN_A_ROW} values that each need the next.`,
-        {
-          hint: 'write the values that others need first',
-        },
-      );
-      return undefined;
-    }
-    this.#depth++;
-    const quantity = once.get(() => this.#circle(definition, range));
-    this.#depth--;
-    return quantity;
+    return once.get(why => refuseNamed(this.#report, definition, range, why));
   }
 
   #let(definition: Definition): Quantity | undefined {
     if (definition.statement.kind !== 'let') return undefined;
     const { value } = definition.statement;
     return this.figures(definition.scope, this.#report, { single: true }).quantity(value);
-  }
-
-  #circle(definition: Definition, range: Range): void {
-    this.#report.error('circular-value', range, `${definition.name} depends on itself.`, {
-      hint: 'take one of the values of the circle from elsewhere',
-      related: [{ range: definition.definition, message: `${definition.name} is defined here.` }],
-    });
   }
 
   #operand(scope: Scope, operand: Operand, report: Report, frame: Frame): Quantity | undefined {
@@ -171,6 +148,20 @@ export class Values {
         return extent.height(first, this.#structures.supported(scope));
     }
   }
+}
+
+/** Tells, at a use of it, why a value or a result cannot be worked out. */
+export function refuseNamed(report: Report, { name, definition }: Definition, range: Range, why: Refusal): void {
+  if (why === 'circle') {
+    report.error('circular-value', range, `${name} depends on itself.`, {
+      hint: 'take one of the values of the circle from elsewhere',
+      related: [{ range: definition, message: `${name} is defined here.` }],
+    });
+    return;
+  }
+  report.error('value-too-deep', range, `${name} is the last of ${MOST_IN_A_ROW} values that each need the next.`, {
+    hint: 'write the values that others need first',
+  });
 }
 
 /** Lengths between points of a structure. */
