@@ -1,4 +1,5 @@
 // The two roads to a movement: the displacement method and the unit load on the force method.
+import fc from 'fast-check';
 import { expect } from 'vitest';
 import { fieldAt, movementAt } from '../../src/mechanics/field.ts';
 import { measure } from '../../src/mechanics/measure.ts';
@@ -50,6 +51,32 @@ holds('points and places along members move alike on both', structures(), struct
           check(turn, scale.rotation, at, { moment: 1, side }, `turn ${side} ${part} of ${name}`);
         }
       }
+    }
+  }
+});
+
+const powers = fc.array(fc.integer({ min: -6, max: 6 }), { minLength: 1, maxLength: 9 });
+
+holds('stiff and soft together, up to 1e12 apart', fc.tuple(structures(), powers), ([plain, exponents]) => {
+  const scaled = (value: number | undefined, index: number) =>
+    value === undefined ? undefined : value * 10 ** exponents[index % exponents.length]!;
+  const sections = plain.sections.map((section, index) => ({
+    ...section,
+    bendingStiffness: scaled(section.bendingStiffness, 2 * index),
+    axialStiffness: scaled(section.axialStiffness, 2 * index + 1),
+  }));
+  const structure = { ...plain, sections };
+  const analysis = analysed(structure);
+  const forceMethod = prepare(structure)!;
+  for (const [index, solution] of analysis.cases.entries()) {
+    const { movement } = scalesOf(structure, read(structure, solution));
+    for (const [point, { name }] of structure.points.entries()) {
+      const virtual = virtualSystem(forceMethod.primary, [
+        { at: { kind: 'point', point }, x: 0.6, y: -0.8, moment: 0 },
+      ]);
+      const { value, rounding } = movementOf(forceMethod, only(index), virtual);
+      const [x, y] = solution.movements.subarray(3 * point, 3 * point + 2);
+      expectNear(0.6 * x! - 0.8 * y!, value, Math.max(rounding, allowed(analysis, 1e-11) * movement), name);
     }
   }
 });
