@@ -20,7 +20,9 @@ export function deactivate(): Promise<void> {
 
 function createClient(context: vscode.ExtensionContext): LanguageClient {
   const script = vscode.Uri.joinPath(context.extensionUri, 'dist/server-web.js').toString(true);
-  const client = new LanguageClient(CLIENT_ID, CLIENT_NAME, async () => new Worker(script), clientOptions());
+  // The worker itself, not a function that makes one: the client asks that for `instanceof Worker`, which the worker
+  // that VS Code puts in the browser's place is not.
+  const client = new LanguageClient(CLIENT_ID, CLIENT_NAME, new Worker(script), clientOptions());
   followTheme(client, context);
   return client;
 }

@@ -1,5 +1,7 @@
 // What the tests of the suite share: opening a note, and waiting for what the editor does in its own time.
 import * as vscode from 'vscode';
+import cantilever from '../workspace/cantilever.md';
+import readme from '../workspace/README.md';
 
 export interface EditorTest {
   readonly name: string;
@@ -10,10 +12,17 @@ export function editorTest(name: string, body: () => Promise<void>): EditorTest 
   return { name, body };
 }
 
-/** A file of the workspace, in an editor, as it is on disk. */
+/** The notes of the workspace, for a workbench without files. */
+const NOTES: Readonly<Record<string, string>> = { 'cantilever.md': cantilever, 'README.md': readme };
+
+/** A note of the workspace, in an editor, as it was at the start. */
 export async function open(name: string): Promise<vscode.TextEditor> {
   const [folder] = vscode.workspace.workspaceFolders ?? [];
-  if (folder === undefined) throw new Error('no workspace is open');
+  if (folder === undefined) {
+    return vscode.window.showTextDocument(
+      await vscode.workspace.openTextDocument({ language: 'markdown', content: NOTES[name] ?? '' }),
+    );
+  }
   const document = await vscode.workspace.openTextDocument(vscode.Uri.joinPath(folder.uri, name));
   const editor = await vscode.window.showTextDocument(document);
   if (document.isDirty) await vscode.commands.executeCommand('workbench.action.files.revert');

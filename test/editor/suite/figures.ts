@@ -94,5 +94,7 @@ async function labelsAt(document: vscode.TextDocument, position: vscode.Position
     document.uri,
     position,
   );
-  return list.items.map(({ label }) => (typeof label === 'string' ? label : label.label));
+  // The editor itself offers the words of the text.
+  const offered = list.items.filter(({ kind }) => kind !== vscode.CompletionItemKind.Text);
+  return offered.map(({ label }) => (typeof label === 'string' ? label : label.label));
 }
