@@ -1,5 +1,7 @@
 // The answers of one structure as a person reads them: a head line, then a row for each question.
-import type { Answer, NoteResult, StructureResult } from '../note/result.ts';
+import type { Answer, AnswerPlace, NoteResult, StructureResult } from '../note/result.ts';
+import { LENGTH } from '../quantity/dimension.ts';
+import { type DisplayUnits, showQuantity } from '../quantity/display.ts';
 import { safeText } from './safe-text.ts';
 import type { Style } from './style.ts';
 import { type Alignment, type Cell, layOut, wrap } from './table.ts';
@@ -17,7 +19,7 @@ export function structureText(result: NoteResult, structure: StructureResult, wi
     `  ${headLine(structure, answers, style)}`,
     ...(structure.withheld === undefined ? [] : [`    ${safeText(`answers are withheld: ${structure.withheld}`)}`]),
     ...layOut(
-      answers.map(answer => row(answer, question, style)),
+      answers.map(answer => row(answer, structure.display, question, style)),
       ALIGNMENTS,
       '    ',
     ),
@@ -51,7 +53,7 @@ function stateLine(answers: readonly Answer[]): string {
   return highest === undefined ? counted : `${counted}, highest use ${useOf(highest)} (${safeText(highest.name)})`;
 }
 
-function row(answer: Answer, questionWidth: number, style: Style): Cell[] {
+function row(answer: Answer, display: DisplayUnits, questionWidth: number, style: Style): Cell[] {
   const state = stateOf(answer);
   const emphasis = state === 'not met' ? style.error : state === 'withheld' ? style.warning : undefined;
   const under = answer.under === null ? '' : ` under ${answer.under}`;
@@ -60,7 +62,7 @@ function row(answer: Answer, questionWidth: number, style: Style): Cell[] {
     {
       lines: [
         ...wrap(`${answer.measure}${under}`, questionWidth),
-        ...notes(answer).flatMap(note => wrap(note, questionWidth)),
+        ...remarks(answer, display).flatMap(remark => wrap(remark, questionWidth)),
       ],
     },
     { lines: [state === 'withheld' ? '–' : answer.display] },
@@ -70,9 +72,16 @@ function row(answer: Answer, questionWidth: number, style: Style): Cell[] {
   ];
 }
 
-/** What stands under the question: the alternative that governs, and both sides of a jump. */
-function notes({ governing, sides }: Answer): string[] {
-  return [...(governing === null ? [] : [governing]), ...(sides === undefined ? [] : [sides])];
+/** What stands under the question: where the answer lies, the alternative that governs, both sides of a jump. */
+function remarks({ place, governing, sides }: Answer, display: DisplayUnits): string[] {
+  const where = place === undefined ? [] : [placeInWords(place, display)];
+  const which = governing === null ? [] : [governing];
+  return [[...where, ...which].join(' · '), sides ?? ''].filter(remark => remark !== '');
+}
+
+function placeInWords({ member, from, distance }: AnswerPlace, display: DisplayUnits): string {
+  if (distance === 0) return `in ${member} at ${from}`;
+  return `in ${member}, ${showQuantity({ value: distance, dimension: LENGTH }, display, 'length').text} from ${from}`;
 }
 
 /** The limit itself, without the way to it. */

@@ -9,6 +9,7 @@ import {
   readFileSync,
   readSync,
   realpathSync,
+  type Stats,
   statSync,
 } from 'node:fs';
 import { dirname, join, resolve, sep } from 'node:path';
@@ -92,14 +93,32 @@ export function speaksOfTautline({ file, root }: FoundNote): boolean {
   }
 }
 
+export function isWithin(path: string, root: string): boolean {
+  return path === root || path.startsWith(root.endsWith(sep) ? root : root + sep);
+}
+
+/** The system's word for it, without its call and path: `permission denied`. */
+export function reasonOf(error: unknown): string {
+  return error instanceof Error ? error.message.replace(/^[A-Z0-9]+: /, '').replace(/, .*$/, '') : String(error);
+}
+
 function notesAt(path: string, cwd: string): FoundNote[] {
   const file = resolve(cwd, path);
   const shown = slashed(path).replace(/^(\.\/)+(?=.)/, '');
-  const stats = statSync(file, { throwIfNoEntry: false });
-  if (stats === undefined) throw new UsageError(`${path}: there is no such file or folder`);
-  if (!stats.isDirectory()) return [{ path: shown, file, root: realpathSync(dirname(file)), named: true }];
+  if (!isFolder(file, path)) return [{ path: shown, file, root: realpathSync(dirname(file)), named: true }];
   const prefix = shown === '.' ? '' : `${shown.replace(/\/+$/, '')}/`;
   return notesBelow(file, prefix, realpathSync(file));
+}
+
+function isFolder(file: string, path: string): boolean {
+  let stats: Stats | undefined;
+  try {
+    stats = statSync(file, { throwIfNoEntry: false });
+  } catch (error) {
+    throw new UsageError(`${path} cannot be read: ${reasonOf(error)}`);
+  }
+  if (stats === undefined) throw new UsageError(`${path}: there is no such file or folder`);
+  return stats.isDirectory();
 }
 
 /** Markdown files below a folder, those of the folder itself first; `node_modules` and dot folders are not entered, links to folders neither. */
@@ -146,15 +165,6 @@ function refused(problem: string): Reading {
   return { kind: 'refused', problem, tooLarge: false };
 }
 
-function isWithin(path: string, root: string): boolean {
-  return path === root || path.startsWith(root.endsWith(sep) ? root : root + sep);
-}
-
 function slashed(path: string): string {
   return sep === '/' ? path : path.replaceAll(sep, '/');
-}
-
-/** The system's word for it, without its call and path: `permission denied`. */
-function reasonOf(error: unknown): string {
-  return error instanceof Error ? error.message.replace(/^[A-Z0-9]+: /, '').replace(/, .*$/, '') : String(error);
 }

@@ -27,7 +27,11 @@ export function summaryText(results: readonly NoteResult[], style: Style): strin
   const met = required.filter(answer => stateOf(answer) === 'met').length;
   const notMet = required.filter(answer => stateOf(answer) === 'not met').length;
   const withheld = required.length - met - notMet;
-  const severities = results.flatMap(({ diagnostics }) => diagnostics).map(({ severity }) => severity);
+  // A requirement that is not met is counted as such, and not again as the message that says so.
+  const severities = results
+    .flatMap(({ diagnostics }) => diagnostics)
+    .filter(({ code }) => code !== 'limit-exceeded')
+    .map(({ severity }) => severity);
   const errors = severities.filter(severity => severity === 'error').length;
   const warnings = severities.filter(severity => severity === 'warning').length;
   const parts = [

@@ -38,7 +38,7 @@ describe('exit status', () => {
   it('is 1 for a requirement that is not met', async () => {
     const { status, out } = await open({ 'a.md': EXCEEDED }).run('check', 'a.md');
     expect(status).toBe(1);
-    expect(out).toMatch(/tip {2}deflection at B under dead +0\.8000 mm down +≤ 0\.5000 mm +1\.600 +not met/);
+    expect(out).toMatch(/tip {2}deflection at B under dead +0\.8000 mm down +≤ 0\.5 mm +1\.600 +not met/);
   });
 
   it('is 1 for an error, in whichever note', async () => {

@@ -186,9 +186,9 @@ find top:  stress in B1`);
     const mid = (5 * w * 144 ** 4) / (384 * 29e6 * 48);
     const most = (w * 144 ** 2) / 8;
     checkAnswers(note, {
-      mid: { value: mid * inch, limit: 0.4 * inch, display: '0.06703 in' },
-      most: { value: most * lbf * inch, display: '3.600 kip ft' },
-      seat: { value: 1200 * lbf, display: '1.200 kip' },
+      mid: { value: mid * inch, limit: 0.4 * inch, display: '0.06703 in down' },
+      most: { value: most * lbf * inch, display: '3.600 kip ft, tension below' },
+      seat: { value: 1200 * lbf, display: '1.200 kip up' },
       top: { value: (((most * 4) / 48) * lbf) / inch ** 2, display: '3.600 ksi' },
     });
     expect(mid.toPrecision(4)).toBe('0.06703');
@@ -206,7 +206,7 @@ find seat: reaction at A
 find root: moment in B1`);
     checkAnswers(note, {
       tip: { value: 4e-4, display: '0.04000 cm down' },
-      seat: { value: 1.5e3, display: '1500 N' },
+      seat: { value: 1.5e3, display: '1500 N up' },
       root: -3e3,
     });
   });
@@ -233,7 +233,7 @@ find most: moment in B1`);
     expect(codesOf(note)).toEqual(['not-evaluated-yet']);
     expect(note.diagnostics.find(({ code }) => code === 'not-evaluated-yet')).toMatchObject({
       severity: 'error',
-      line: 8,
+      line: 9,
     });
     checkAnswers(note, { 'One.most': { value: null, display: '', status: 'none' }, 'Two.most': 6e3 });
   });
