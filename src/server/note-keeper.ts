@@ -4,7 +4,7 @@ import type { Diagnostic } from 'vscode-languageserver';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
 import { mayHoldCalculation } from '../note/calculation-mark.ts';
 import { createMemory, evaluateNote } from '../note/evaluate.ts';
-import type { Memory } from '../note/solved.ts';
+import type { Memory } from '../note/memory.ts';
 import { diagnosticsOf } from './diagnostics.ts';
 import type { OpenNote } from './open-note.ts';
 
