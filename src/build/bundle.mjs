@@ -1,6 +1,6 @@
 // Bundles what is shipped into dist/. The same sources give the same bytes: no dates, no machine's paths.
 // With names behind it (`bundle.mjs cli server`) it makes only those, and leaves the others as they are.
-import { mkdir, rm, writeFile } from 'node:fs/promises';
+import { mkdir, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import process from 'node:process';
 import { fileURLToPath } from 'node:url';
@@ -64,8 +64,9 @@ if (unknown.length > 0) {
 if (asked.length === 0) await rm(dist, { recursive: true, force: true });
 await mkdir(dist, { recursive: true });
 const wanted = Object.entries(BUNDLES).filter(([name]) => asked.length === 0 || asked.includes(name));
-await Promise.all(wanted.map(([, options]) => bundle(options)));
+const made = await Promise.all(wanted.map(([, options]) => bundle(options)));
 await writeFile(join(dist, 'cli.mjs'), CLI_START, { mode: 0o755 });
+if (asked.length === 0) await writeFile(join(dist, 'third-party-licences.txt'), await licences(made));
 
 function bundle(options) {
   return build({
@@ -73,8 +74,24 @@ function bundle(options) {
     outdir: 'dist',
     bundle: true,
     minify: true,
-    legalComments: 'linked',
+    // Every licence stands in one file beside the bundles.
+    legalComments: 'none',
     logLevel: 'warning',
+    metafile: true,
     ...options,
   });
+}
+
+/** The licences of the packages that went into the bundles, by name. A package without one stops the build. */
+async function licences(results) {
+  const outputs = results.flatMap(({ metafile }) => Object.values(metafile.outputs));
+  const shipped = outputs.flatMap(({ inputs }) => Object.keys(inputs).filter(path => inputs[path].bytesInOutput > 0));
+  const folders = new Set(shipped.flatMap(path => /^.*node_modules\/(?:@[^/]+\/)?[^/]+/.exec(path)?.[0] ?? []));
+  const texts = [...folders].sort().map(async folder => {
+    const { name, version, license } = JSON.parse(await readFile(join(root, folder, 'package.json'), 'utf8'));
+    const file = (await readdir(join(root, folder))).find(entry => /^licen[cs]e/i.test(entry));
+    if (file === undefined) throw new Error(`${folder} has no licence file`);
+    return `${name} ${version} (${license})\n\n${(await readFile(join(root, folder, file), 'utf8')).trim()}\n`;
+  });
+  return (await Promise.all(texts)).join(`\n${'-'.repeat(80)}\n\n`);
 }
