@@ -149,7 +149,7 @@ function signOf(term: Term, chosen: string | undefined): 1 | -1 {
 
 /** What `under` asks for, or why it asks for nothing. */
 export type Asked =
-  | { readonly alternatives: readonly AlternativeModel[]; readonly sound: boolean }
+  | Pick<CombinationModel, 'name' | 'alternatives' | 'sound'>
   | { readonly problem: string; readonly hint: string };
 
 /**
@@ -163,6 +163,7 @@ export function alternativesUnder(under: Under | undefined, combinations: readon
     if (summed.length === 0)
       return { problem: 'There is no combination.', hint: 'write one: combine service: dead + …' };
     return {
+      name: 'all',
       alternatives: summed.flatMap(({ alternatives }) => alternatives),
       sound: summed.every(({ sound }) => sound),
     };
@@ -178,7 +179,7 @@ export function alternativesUnder(under: Under | undefined, combinations: readon
   const alternatives = found.alternatives.filter(
     alternative => alternative.label === label || alternative.line === label,
   );
-  if (alternatives.length > 0) return { alternatives, sound: found.sound };
+  if (alternatives.length > 0) return { name: found.name, alternatives, sound: found.sound };
   const labels = found.alternatives.flatMap(alternative =>
     alternative.label === undefined ? [] : [`(${alternative.label})`],
   );

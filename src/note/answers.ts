@@ -2,6 +2,7 @@
 // stand behind it. A number that the checks do not bear out is not shown.
 
 import type { Under, Value } from '../language/syntax.ts';
+import { alternativesUnder } from '../model/combinations.ts';
 import { operandsOf } from '../model/operands.ts';
 import type { ResolvedMeasure } from '../model/question.ts';
 import { dimensionOf, isMovement } from '../model/questions.ts';
@@ -43,7 +44,7 @@ export function answerTo(inputs: AnswerInputs): Answer {
     name: question.name.text,
     kind: question.kind,
     measure: inputs.wordsOf(question.what.range),
-    under: underInWords(question, series, inputs.wordsOf),
+    under: underInWords(inputs),
     comparison: question.kind === 'require' ? question.comparison : undefined,
     source: question.source?.text,
     range: question.range,
@@ -87,14 +88,12 @@ function unitOf(what: Value): string {
   return what.kind === 'operand' && what.operand.kind === 'measure' ? siUnit(dimensionOf(what.operand.measure)) : '';
 }
 
-function underInWords(
-  question: Question,
-  series: Series | undefined,
-  wordsOf: (range: Range) => string,
-): string | null {
+/** What `under` says, or what is meant where it is left out; null for a question that measures nothing of its own. */
+function underInWords({ question, state, wordsOf }: AnswerInputs): string | null {
   if (question.under !== undefined) return underWords(question.under, wordsOf);
-  if (series?.measure === undefined) return null;
-  return series.alternatives[0]!.text.replace(/( \(.*?\))?:.*$/s, '');
+  if (!operandsOf(question.what).some(({ kind }) => kind === 'measure')) return null;
+  const meant = alternativesUnder(undefined, state.combinations());
+  return 'problem' in meant ? null : meant.name;
 }
 
 function underWords(under: Under, wordsOf: (range: Range) => string): string {
