@@ -27,7 +27,7 @@ export interface Stretch {
   readonly x: number;
   readonly y: number;
   readonly kind: 'weight' | 'global' | 'plan' | 'square' | 'along';
-  /** The statement it comes from: stretches of one load share it. */
+  /** Index of the load, or of the first that its statement made: what one statement puts on several members is one load. */
   readonly load: number;
 }
 
@@ -53,8 +53,9 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
     const stretches: Stretch[] = [];
     const singles: Single[] = [];
     const movements: Extract<Load, { kind: 'movement' }>[] = [];
-    for (const [load, statement] of structure.loads.entries()) {
+    for (const [own, statement] of structure.loads.entries()) {
       if (statement.case !== index) continue;
+      const load = firstOfStatement(structure, own);
       switch (statement.kind) {
         case 'self-weight':
           stretches.push(...weights(structure, statement, load, factor));
@@ -76,6 +77,12 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
     }
   }
   return cases;
+}
+
+function firstOfStatement({ loads }: Structure, index: number): number {
+  const { range } = loads[index] as Load;
+  if (range.end === range.start) return index;
+  return loads.findIndex(load => load.range.start === range.start && load.range.end === range.end);
 }
 
 /** Global components of a stretch per metre of its leg, at its two ends, N/m. */
@@ -182,4 +189,32 @@ function placeOf(structure: Structure, at: Location): Pick<Single, 'place' | 'po
         ? leg.to
         : undefined;
   return { place: { x: from.x + leg.cosine * along, y: from.y + leg.sine * along }, point };
+}
+
+/** Sum of one load as it is given, unfactored: N, global components. None for an imposed movement or a couple. */
+export function loadSum(structure: Structure, index: number): { readonly x: number; readonly y: number } | undefined {
+  const load = structure.loads[index];
+  switch (load?.kind) {
+    case undefined:
+    case 'couple':
+    case 'movement':
+      return undefined;
+    case 'force':
+      return { x: load.x, y: load.y };
+    case 'self-weight':
+      return sumOf(weights(structure, load, index, 1));
+    case 'line':
+      return sumOf(spread(structure, load, index, 1));
+  }
+}
+
+function sumOf(stretches: readonly Stretch[]): { readonly x: number; readonly y: number } {
+  let [x, y] = [0, 0];
+  for (const stretch of stretches) {
+    const { start, end } = perMetre(stretch);
+    const total = ((start + end) / 2) * (stretch.end - stretch.start);
+    x += stretch.x * total;
+    y += stretch.y * total;
+  }
+  return { x, y };
 }

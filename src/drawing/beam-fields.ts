@@ -2,7 +2,7 @@
 import { evaluate } from '../mechanics/polynomial.ts';
 import type { Solution } from '../mechanics/solution.ts';
 import type { Structure } from '../model/structure.ts';
-import type { DisplayUnits } from '../quantity/display.ts';
+import type { DisplayUnit, DisplayUnits } from '../quantity/display.ts';
 import { labelOf, toldReadings } from './beam-field-labels.ts';
 import { drawFieldOnLegs, FIELD_STYLES, type FieldName, sideOf, spotOfReading } from './field-curves.ts';
 import { asGiven, spaced, THIN, withUnit } from './figures.ts';
@@ -25,13 +25,13 @@ export interface BeamFieldsAt {
 }
 
 /** Largest ordinate, px. */
-const ORDINATE: Readonly<Record<FieldName, number>> = { axial: 26, shear: 33, moment: 31, movement: 30 };
+export const ORDINATE: Readonly<Record<FieldName, number>> = { axial: 26, shear: 33, moment: 31, movement: 30 };
 /** Beyond an extreme for its label, and between fields, px. */
-const LABEL_ROOM = 17;
-const BETWEEN = 8;
+export const LABEL_ROOM = 17;
+export const BETWEEN = 8;
 /** The three lines of a title need this much over and under the axis, px. */
-const TITLE_UP = 20;
-const TITLE_DOWN = 26;
+export const TITLE_UP = 20;
+export const TITLE_DOWN = 26;
 /** Of the largest of its kind, a force smaller than this is rounding. */
 const NO_FORCE = 1e-9;
 
@@ -48,7 +48,7 @@ export function drawBeamFields(sheet: Sheet, structure: Structure, solution: Sol
   let top = place.top;
   const dots: { readonly field: FieldName; readonly axis: number; readonly spots: readonly Spot[] }[] = [];
   for (const field of fieldsToDraw(structure, solution)) {
-    const drawn = drawField(sheet, structure, solution, field, { ...place, top });
+    const drawn = drawBeamField(sheet, structure, solution, field, { ...place, top });
     dots.push({ field, axis: drawn.axis, spots: drawn.levels });
     top = drawn.bottom + BETWEEN;
   }
@@ -71,14 +71,16 @@ function fieldsToDraw(structure: Structure, solution: Solution): FieldName[] {
   return fields;
 }
 
-interface DrawnField {
+export interface DrawnField {
+  /** px, its axis and where it ends. */
   readonly axis: number;
   readonly bottom: number;
   /** Dots of level extremes. */
   readonly levels: readonly Spot[];
 }
 
-function drawField(
+/** One field of a level beam, under `top`. */
+export function drawBeamField(
   sheet: Sheet,
   structure: Structure,
   solution: Solution,
@@ -122,7 +124,13 @@ function drawField(
     requests.push(...crossings(sheet, member, field, drawn, largest, units));
   }
   placeLabels(sheet, requests);
-  drawTitle(sheet, field, axis, name, units, exaggeration, everyTravelIsRight(structure));
+  const notes: Readonly<Record<FieldName, string>> = {
+    axial: 'compression above',
+    shear: everyTravelIsRight(structure) ? '+ is up on the left' : '+ left of the travel',
+    moment: 'tension side',
+    movement: `drawn ×${THIN}${asGiven(exaggeration, { text: '', size: 1 })}`,
+  };
+  drawFieldTitle(sheet, field, axis, [`${spaced(fieldUnit(field, units).text)}, ${name}`, notes[field]]);
   return { axis, bottom: axis + down, levels };
 }
 
@@ -166,25 +174,16 @@ function crossings(
   });
 }
 
-function drawTitle(
-  sheet: Sheet,
-  field: FieldName,
-  axis: number,
-  name: string,
-  units: DisplayUnits,
-  exaggeration: number,
-  isRight: boolean,
-): void {
-  const unit = { axial: units.force, shear: units.force, moment: units.moment, movement: units.deflection }[field];
-  const note = {
-    axial: 'compression above',
-    shear: isRight ? '+ is up on the left' : '+ left of the travel',
-    moment: 'tension side',
-    movement: `drawn ×${THIN}${asGiven(exaggeration, { text: '', size: 1 })}`,
-  }[field];
+export function fieldUnit(field: FieldName, units: DisplayUnits): DisplayUnit {
+  return { axial: units.force, shear: units.force, moment: units.moment, movement: units.deflection }[field];
+}
+
+/** The quantity, and two lines in the smaller size. */
+export function drawFieldTitle(sheet: Sheet, field: FieldName, axis: number, lines: readonly string[]): void {
   sheet.words([{ text: TITLES[field], as: 'bold' }], { at: { x: 0, y: axis - 8 } });
-  sheet.words(plain(`${spaced(unit.text)}, ${name}`), { at: { x: 0, y: axis + 7 }, size: 11, role: 'soft' });
-  sheet.words(plain(note), { at: { x: 0, y: axis + 21 }, size: 11, role: 'soft' });
+  for (const [i, line] of lines.entries()) {
+    sheet.words(plain(line), { at: { x: 0, y: axis + 7 + 14 * i }, size: 11, role: 'soft' });
+  }
 }
 
 function everyTravelIsRight(structure: Structure): boolean {

@@ -41,7 +41,7 @@ function draw(
   from: (mark: Mark) => number,
   turn: number,
 ): void {
-  const { marks: shown, equal } = readable(marks, unit);
+  const { marks: shown, values } = readable(marks, unit);
   const first = shown[0];
   const last = shown.at(-1);
   if (first === undefined || last === undefined || first === last) return;
@@ -54,46 +54,67 @@ function draw(
   }
   const sign = Math.sign(last.at - first.at);
   sheet.line('dimension', path(spot(first.at - sign * PAST, line), spot(last.at + sign * PAST, line)), 'back');
-  const values =
-    equal === undefined
-      ? shown
-          .slice(1)
-          .map((mark, i) => ({ from: shown[i] as Mark, to: mark, text: lengthText(shown[i] as Mark, mark, unit) }))
-      : [{ from: first, to: last, text: equal }];
-  for (const value of values) {
-    const middle = (value.from.at + value.to.at) / 2;
-    const size: WordSize = Math.abs(value.to.at - value.from.at) < widthOf(plain(value.text), 12) + 6 ? 11 : 12;
-    sheet.words(plain(value.text), { at: spot(middle, line - PAST), anchor: 'middle', size, halo: true, turn });
+  for (const { text, middle, size, row } of values) {
+    const at = spot(middle, line - PAST - 12 * row);
+    sheet.words(plain(text), { at, anchor: 'middle', size, halo: true, turn });
   }
 }
 
-function lengthText(from: Mark, to: Mark, unit: DisplayUnit): string {
-  return withUnit(Math.abs(to.value - from.value), unit);
+interface Value {
+  readonly text: string;
+  readonly middle: number;
+  readonly size: WordSize;
+  /** 0 on the line, 1 over its neighbours. */
+  readonly row: 0 | 1;
 }
 
 /**
- * The marks whose values can be written. Where a chain is too tight, equal steps are told as `6 × 1.500 m`, and any
- * other chain keeps only the steps that leave room.
+ * The marks whose values can be written. Where a chain is too tight, equal steps are told as `6 × 1.500 m`, a value that
+ * does not fit between its neighbours stands over them, and what has no room there either is left out with its mark.
  */
-function readable(marks: readonly Mark[], unit: DisplayUnit): { marks: readonly Mark[]; equal?: string } {
-  const steps = marks.slice(1).map((mark, i) => ({ from: marks[i] as Mark, to: mark }));
-  const isTight = steps.some(({ from, to }) => !fits(from, to, unit));
-  if (!isTight || steps.length < 2) return { marks };
-  const first = steps[0] as { from: Mark; to: Mark };
-  const step = Math.abs(first.to.value - first.from.value);
-  const areEqual = steps.every(({ from, to }) => Math.abs(Math.abs(to.value - from.value) - step) <= 1e-9 * step);
-  if (areEqual) return { marks, equal: `${steps.length}${THIN}×${THIN}${withUnit(step, unit)}` };
-  const kept: Mark[] = [marks[0] as Mark];
-  const last = marks.at(-1) as Mark;
-  for (const mark of marks.slice(1, -1)) {
-    const before = kept.at(-1) as Mark;
-    if (fits(before, mark, unit) && fits(mark, last, unit)) kept.push(mark);
+function readable(marks: readonly Mark[], unit: DisplayUnit): { marks: readonly Mark[]; values: readonly Value[] } {
+  const first = marks[0];
+  const last = marks.at(-1);
+  if (first === undefined || last === undefined) return { marks: [], values: [] };
+  const steps = marks.slice(1).map((mark, i) => Math.abs(mark.value - (marks[i] as Mark).value));
+  const step = steps[0] ?? 0;
+  const isTight = marks.slice(1).some((mark, i) => !fits(marks[i] as Mark, mark, unit));
+  if (isTight && steps.length > 2 && steps.every(other => Math.abs(other - step) <= 1e-9 * step)) {
+    const text = `${steps.length}${THIN}×${THIN}${withUnit(step, unit)}`;
+    return { marks, values: [{ text, middle: (first.at + last.at) / 2, size: 12, row: 0 }] };
   }
-  return { marks: [...kept, last] };
+  const all = written(marks, unit);
+  if (all !== undefined) return { marks, values: all };
+  const kept: Mark[] = [first];
+  for (const mark of marks.slice(1, -1)) {
+    if (fits(kept.at(-1) as Mark, mark, unit) && fits(mark, last, unit)) kept.push(mark);
+  }
+  return { marks: [...kept, last], values: written([...kept, last], unit) ?? [] };
+}
+
+/** Undefined where two values would still run into each other. */
+function written(marks: readonly Mark[], unit: DisplayUnit): Value[] | undefined {
+  const values: Value[] = [];
+  const ends: [number, number] = [Number.NEGATIVE_INFINITY, Number.NEGATIVE_INFINITY];
+  const along = (marks.at(-1) as Mark).at >= (marks[0] as Mark).at ? 1 : -1;
+  for (const [i, mark] of marks.slice(1).entries()) {
+    const before = marks[i] as Mark;
+    const text = withUnit(Math.abs(mark.value - before.value), unit);
+    const middle = (before.at + mark.at) / 2;
+    const room = Math.abs(mark.at - before.at);
+    const size: WordSize = room < widthOf(plain(text), 12) + 6 ? 11 : 12;
+    const half = widthOf(plain(text), size) / 2 + 3;
+    const row = middle * along - half >= ends[0] ? 0 : 1;
+    if (middle * along - half < ends[row]) return undefined;
+    ends[row] = middle * along + half;
+    values.push({ text, middle, size, row });
+  }
+  return values;
 }
 
 function fits(from: Mark, to: Mark, unit: DisplayUnit): boolean {
-  return Math.abs(to.at - from.at) >= widthOf(plain(lengthText(from, to, unit)), 11) + AIR;
+  const text = withUnit(Math.abs(to.value - from.value), unit);
+  return Math.abs(to.at - from.at) >= widthOf(plain(text), 11) + AIR;
 }
 
 /** Distinct values in ascending order; those closer than a millionth of their whole extent are one. */

@@ -140,7 +140,7 @@ function wordings(group: readonly Told[], field: FrameField, units: DisplayUnits
   const [first] = group as readonly [Told, ...Told[]];
   const { value } = first.reading;
   if (field === 'shear') return [signed(value, units.force)];
-  if (field === 'axial') return [forceShort(value, units), inUnit(Math.abs(value), units.force)];
+  if (field === 'axial') return [forceShort(value, units), signed(value, units.force)];
   const sides = [...new Set(group.map(({ side }) => sideWord(side)))].sort();
   const number = inUnit(Math.abs(value), units.moment);
   return [

@@ -50,7 +50,7 @@ export function drawLineLoads(acting: ActingCase, at: FrameLoadsAt): LabelReques
     if (stretch.kind !== 'weight') byLoad.set(stretch.load, [...(byLoad.get(stretch.load) ?? []), stretch]);
   }
   const labels: LabelRequest[] = [];
-  for (const stretches of byLoad.values()) {
+  for (const stretches of [...byLoad.values()].flatMap(connected)) {
     const words = named(acting, intensityWords(stretches, at.units), at.named);
     const longest = stretches.reduce((a, b) => (b.end - b.start > a.end - a.start ? b : a));
     const drawn = stretches.map(stretch =>
@@ -67,6 +67,23 @@ export function drawLineLoads(acting: ActingCase, at: FrameLoadsAt): LabelReques
     });
   }
   return labels;
+}
+
+/** What one statement puts on members that do not meet is told where each part stands. */
+function connected(stretches: readonly Stretch[]): Stretch[][] {
+  const groups: { points: Set<number>; stretches: Stretch[] }[] = [];
+  for (const stretch of stretches) {
+    const { from, to } = stretch.leg;
+    const touching = groups.filter(({ points }) => points.has(from) || points.has(to));
+    const joined = { points: new Set([from, to]), stretches: [stretch] };
+    for (const group of touching) {
+      for (const point of group.points) joined.points.add(point);
+      joined.stretches.unshift(...group.stretches);
+      groups.splice(groups.indexOf(group), 1);
+    }
+    groups.push(joined);
+  }
+  return groups.map(group => group.stretches);
 }
 
 export function named(acting: ActingCase, words: string, isNamed: boolean): Label {
@@ -216,12 +233,21 @@ function placesOver(from: Spot, to: Spot, out: Spot, heights: readonly [number, 
       ];
     }
     const y = far.y + (out.y < 0 ? -6 : 15);
-    // A sloping band leaves room on its higher side only.
+    // A sloping band leaves room on its higher side only; a low one between two others at its ends.
+    const [left, right] = from.x < to.x ? [from, to] : [to, from];
+    const ends: Place[] =
+      share === 0.5
+        ? [
+            { at: { x: left.x - 6, y: left.y + 2 }, anchor: 'end' },
+            { at: { x: right.x + 6, y: right.y + 2 }, anchor: 'start' },
+          ]
+        : [];
     return [
       { at: { x: far.x, y }, anchor: 'middle' },
       { at: { x: far.x, y: y - 8 }, anchor: 'middle' },
       { at: { x: far.x - 8, y: y - 2 }, anchor: 'end' },
       { at: { x: far.x + 8, y: y - 2 }, anchor: 'start' },
+      ...ends,
     ];
   });
 }

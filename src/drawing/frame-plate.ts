@@ -37,8 +37,7 @@ export function framePlate(structure: Structure, acting: Acting, units: DisplayU
     const ways = waysFrom(structure, support.point, view.point);
     drawSupport(sheet, support, view.point(support.point), ways);
   }
-  const edge = Math.max(0, ...pointsInUse(structure).map(point => view.point(point).x));
-  const upright = Math.min(SHEET_WIDTH - UPRIGHT, edge + side - UPRIGHT);
+  const upright = SHEET_WIDTH - UPRIGHT;
   const top = Math.min(0, ...pointsInUse(structure).map(point => view.point(point).y));
   sheet.obstacles.push([
     { x: upright - 8, y: top },
@@ -64,9 +63,16 @@ export function framePlate(structure: Structure, acting: Acting, units: DisplayU
     ...memberNames(structure, view),
     ...labels,
   ]);
-  drawDimensions(sheet, structure, view, upright, units);
+  drawDimensions(sheet, structure, view, uprightLine(sheet, structure, view), units);
   tellWeights(sheet, structure, cases, units);
   return sheet.svg(`${structure.title ?? structure.name} with its loads under ${acting.name}, and its dimensions`);
+}
+
+/** Near the frame, but clear of everything that stands to its right. */
+function uprightLine(sheet: Sheet, structure: Structure, view: View): number {
+  const edge = Math.max(0, ...pointsInUse(structure).map(point => view.point(point).x));
+  const words = Math.max(0, ...sheet.taken.map(({ right }) => right));
+  return Math.min(SHEET_WIDTH - UPRIGHT, Math.max(edge + NO_SIDE_LOADS - UPRIGHT, words + 22));
 }
 
 function hasSideLoad({ stretches }: ActingCase): boolean {

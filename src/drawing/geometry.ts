@@ -46,6 +46,10 @@ export function overlap(a: Box, b: Box): number {
 
 /** Length of the segment inside the box (Liang and Barsky, 1984). */
 export function lengthInside([from, to]: Segment, box: Box): number {
+  if (from.x < box.left && to.x < box.left) return 0;
+  if (from.x > box.right && to.x > box.right) return 0;
+  if (from.y < box.top && to.y < box.top) return 0;
+  if (from.y > box.bottom && to.y > box.bottom) return 0;
   const dx = to.x - from.x;
   const dy = to.y - from.y;
   let enter = 0;

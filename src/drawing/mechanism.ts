@@ -21,7 +21,8 @@ const TALLEST = 170;
 export function mechanismDrawing(structure: Structure, mechanism: Mechanism, palette: Palette): string {
   const sheet = new Sheet(PANEL_WIDTH, palette);
   const view = fitted(structure, { left: MARGIN, right: PANEL_WIDTH - MARGIN, top: 0, bottom: TALLEST });
-  sheet.reach(-30);
+  const tops = pointsInUse(structure).map(point => view.point(point).y);
+  sheet.reach(Math.min(TALLEST, ...tops) - 30);
   drawOutline(sheet, structure, view);
   for (const support of structure.supports) {
     drawSupport(sheet, support, view.point(support.point), waysFrom(structure, support.point, view.point));

@@ -81,7 +81,7 @@ function choose(sheet: Sheet, request: LabelRequest): Choice | undefined {
       const size = request.size ?? 12;
       const inside = withinSheet(sheet, label, place, size);
       const boxes = footprint(label, inside.at, inside.anchor, size, inside.turn ?? 0);
-      const cost = crowding(sheet, boxes, place.onLine === true) + least;
+      const cost = crowding(sheet, boxes, place.onLine === true, (best?.cost ?? Infinity) - least) + least;
       if (best === undefined || cost < best.cost) best = { label, place: inside, cost };
     }
   }
@@ -98,12 +98,17 @@ function withinSheet(sheet: Sheet, label: Label, place: Place, size: WordSize): 
   return kept === left ? place : { ...place, at: { x: place.at.x + kept - left, y: place.at.y } };
 }
 
-function crowding(sheet: Sheet, boxes: readonly Box[], onLine: boolean): number {
+/** Not counted on past `most`. */
+function crowding(sheet: Sheet, boxes: readonly Box[], onLine: boolean, most: number): number {
   let cost = 0;
   for (const box of boxes) {
-    for (const other of sheet.taken) cost += WORDS_COST * overlap(widened(other), box);
-    if (!onLine) for (const segment of sheet.obstacles) cost += LINE_COST * lengthInside(segment, box);
     if (box.left < 0 || box.right > sheet.width) cost += 400;
+    const air = widened(box);
+    for (const other of sheet.taken) cost += WORDS_COST * overlap(other, air);
+    if (cost >= most) return cost;
+    if (onLine) continue;
+    for (const segment of sheet.obstacles) cost += LINE_COST * lengthInside(segment, box);
+    if (cost >= most) return cost;
   }
   return cost;
 }

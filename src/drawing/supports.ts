@@ -1,7 +1,7 @@
 // The drawing-office symbols of supports: a triangle for a pin, wheels under it for a roller, a hatched wall for a fixed
 // end, a coil for a spring. Each is drawn pointing down and then turned away from the members it holds.
 import type { Structure, Support } from '../model/structure.ts';
-import { leftOf, path, px, type Spot } from './geometry.ts';
+import { leftOf, px, type Spot } from './geometry.ts';
 import type { LineRole } from './ink.ts';
 import type { Sheet } from './sheet.ts';
 
@@ -157,23 +157,16 @@ function obstruct(sheet: Sheet, at: Spot, ground: Spot, size: number): void {
 /** Three turns, from the point down to the ground at 23.8. */
 const COIL = coil();
 /** Under two turns about the point. */
-const SPIRAL = spiral();
+const SPIRAL = 'M3 0A3.5 3.5 0 0 1-4 0A5 5 0 0 1 6 0A7 7 0 0 1-8 0';
 
 function coil(): string {
-  const spots: Spot[] = [{ x: 0, y: 1 }];
-  for (let i = 0; i <= 36; i++) {
-    const turn = (i / 36) * 6 * Math.PI;
-    spots.push({ x: 7.5 * Math.sin(turn), y: 3.5 + (16.8 * i) / 36 + 1.7 * (1 - Math.cos(turn)) });
+  const steps = 24;
+  let d = 'M0 1V3.5';
+  for (let i = 1; i <= steps; i++) {
+    const turn = (i / steps) * 6 * Math.PI;
+    const x = 7.5 * Math.sin(turn);
+    const y = 3.5 + (16.8 * i) / steps + 1.7 * (1 - Math.cos(turn));
+    d += `L${x.toFixed(1)} ${y.toFixed(1)}`;
   }
-  return path(...spots, { x: 0, y: 23.8 });
-}
-
-function spiral(): string {
-  const spots: Spot[] = [];
-  for (let i = 0; i <= 30; i++) {
-    const turn = (i / 30) * 3.5 * Math.PI;
-    const radius = 3 + (7 * i) / 30;
-    spots.push({ x: radius * Math.cos(turn), y: radius * Math.sin(turn) });
-  }
-  return path(...spots);
+  return `${d}V23.8`;
 }

@@ -1,0 +1,27 @@
+// A structure that is not held: how it can move, beside the words that say so.
+import { mechanismDrawing } from '../drawing/index.ts';
+import type { NoteResult, StructureResult } from '../note/result.ts';
+import { stateMark } from './marks.ts';
+import { messageHtml } from './messages.ts';
+
+/** So many independent ways to move are drawn. */
+const MOST = 3;
+
+export function instability(note: NoteResult, { structure, analysis, range }: StructureResult): string {
+  if (structure === undefined || analysis === undefined || analysis.stability.stable) return '';
+  const { mechanisms } = analysis.stability;
+  if (mechanisms.length === 0) return '';
+  const diagnostic = note.diagnostics.find(
+    ({ code, range: { start } }) => code === 'unstable-structure' && start >= range.start && start <= range.end,
+  );
+  const words = diagnostic === undefined ? '' : `<p>${messageHtml(diagnostic.message)}</p>`;
+  const hint =
+    diagnostic?.hint === undefined ? '' : `<p class="tl-small tl-soft-text">${messageHtml(diagnostic.hint)}</p>`;
+  const drawings = mechanisms
+    .slice(0, MOST)
+    .map(mechanism => `<figure>${mechanismDrawing(structure, mechanism, 'page')}</figure>`);
+  return (
+    `<div class="tl-keep"><h3>Not held</h3><div class="tl-unheld"><div>${drawings.join('')}</div>` +
+    `<div class="tl-message"><p><b>${stateMark('withheld')}withheld</b></p>${words}${hint}</div></div></div>`
+  );
+}

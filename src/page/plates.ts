@@ -1,0 +1,121 @@
+// The drawings of a structure: the loads and fields of whatever combination or case the reader chooses, by radio buttons
+// that the stylesheet reads, and a sketch of every case under them.
+import { caseSketch, type StructureDrawing, structureDrawing } from '../drawing/index.ts';
+import type { Solution } from '../mechanics/solution.ts';
+import type { Structure } from '../model/structure.ts';
+import type { Alternative, StructureResult } from '../note/result.ts';
+import { escapeHtml, plainHtml } from './html.ts';
+import { factoredWord } from './inputs.ts';
+import { alternativeName, factorsOf } from './reactions-table.ts';
+
+interface Choice {
+  readonly name: string;
+  readonly text: string;
+  readonly alternative: Alternative;
+}
+
+/** So many choices are drawn; a page with more is slow to read and to make. */
+const MOST_CHOICES = 24;
+
+/** `index`: of the structure in the note, which keeps the groups of radio buttons apart. */
+export function plates(result: StructureResult, structure: Structure, index: number): string {
+  const all = choicesOf(result);
+  const choices = all.slice(0, MOST_CHOICES);
+  if (choices.length === 0) return `<div class="tl-pick">${figure(drawUnloaded(structure, result), '')}</div>`;
+  const left = all.length - choices.length;
+  const rest = left === 0 ? '' : `<p class="tl-aside">${left} further alternatives are not drawn here.</p>`;
+  if (choices.length === 1) {
+    const [only] = choices as [Choice];
+    return `<div class="tl-pick">${figure(draw(structure, result, only), caption(only))}</div>${sketches(result, structure)}`;
+  }
+  const group = `tautline-${index + 1}`;
+  const items = choices.map((choice, i) => {
+    const id = `${group}-${i + 1}`;
+    return (
+      `<input type="radio" name="${group}" id="${id}"${i === 0 ? ' checked' : ''}>` +
+      `<label for="${id}">${escapeHtml(choice.name)}</label>` +
+      figure(draw(structure, result, choice), caption(choice))
+    );
+  });
+  return (
+    `<div class="tl-pick" role="group" aria-label="Loads and fields of">` +
+    `<span class="tl-lead">Loads and fields of</span>${items.join('')}</div>${rest}${sketches(result, structure)}`
+  );
+}
+
+/** Combinations first, in the order of the note, then cases alone. */
+function choicesOf({ combinations }: StructureResult): Choice[] {
+  const ordered = [
+    ...combinations.filter(({ kind }) => kind === 'combination'),
+    ...combinations.filter(({ kind }) => kind === 'case'),
+  ];
+  return ordered.flatMap(({ name, alternatives }) =>
+    alternatives.map(alternative => ({
+      name: alternativeName(name, alternative),
+      text: factorsOf(alternative),
+      alternative,
+    })),
+  );
+}
+
+function caption({ name, text, alternative }: Choice): string {
+  const sum = text === '' || text === name ? '' : ` = ${text}`;
+  return `${name}${sum}, ${factoredWord(alternative.factors)}`;
+}
+
+function figure({ main, panels }: StructureDrawing, words: string): string {
+  const fields = panels.map(({ svg, wide }) => `<div${wide ? ' class="tl-wide"' : ''}>${svg}</div>`).join('');
+  const below = panels.length === 0 ? '' : `<div class="tl-panels">${fields}</div>`;
+  const told = words === '' ? '' : `<figcaption class="tl-aside">${plainHtml(words)}</figcaption>`;
+  return `<figure class="tl-plate">${told}${main}${below}</figure>`;
+}
+
+function draw(structure: Structure, result: StructureResult, { name, alternative }: Choice): StructureDrawing {
+  const isSolved = result.analysis?.stability.stable === true && result.analysis.cases.length > 0;
+  const solution = isSolved ? alternative.solution() : undefined;
+  const make = (): StructureDrawing =>
+    structureDrawing(structure, { name, factors: alternative.factors, solution }, result.display);
+  return solution === undefined ? make() : remembered(solution, keyOf(structure, result, name), make);
+}
+
+function drawUnloaded(structure: Structure, { display }: StructureResult): StructureDrawing {
+  return structureDrawing(
+    structure,
+    { name: 'no load', factors: structure.cases.map(() => 0), solution: undefined },
+    display,
+  );
+}
+
+/** Drawings by the solution that they show: while a note is edited elsewhere, they are not made again. */
+const memory = new WeakMap<Solution, Map<string, StructureDrawing>>();
+
+function remembered(solution: Solution, key: string, make: () => StructureDrawing): StructureDrawing {
+  const known = memory.get(solution) ?? new Map<string, StructureDrawing>();
+  memory.set(solution, known);
+  const drawing = known.get(key) ?? make();
+  known.set(key, drawing);
+  return drawing;
+}
+
+/** What a drawing shows beyond what the solution depends on. */
+function keyOf(structure: Structure, { display }: StructureResult, name: string): string {
+  const { points, members, sections, cases, title, supports } = structure;
+  return JSON.stringify([
+    name,
+    structure.name,
+    title,
+    points.map(point => point.name),
+    members.map(member => member.name),
+    sections.map(section => [section.name, section.description]),
+    cases.map(one => one.name),
+    supports.map(({ symbol }) => symbol),
+    display,
+  ]);
+}
+
+/** A small sketch of every case, so that none is hidden behind a choice; none where there is one case only. */
+function sketches({ display, analysis }: StructureResult, structure: Structure): string {
+  if (structure.cases.length < 2) return '';
+  const drawn = structure.cases.map((_, i) => caseSketch(structure, i, analysis?.cases[i]?.applied, display, 'page'));
+  return `<div class="tl-cases">${drawn.join('')}</div>`;
+}
