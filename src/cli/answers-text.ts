@@ -4,25 +4,22 @@ import { LENGTH } from '../quantity/dimension.ts';
 import { type DisplayUnits, showQuantity } from '../quantity/display.ts';
 import { safeText } from './safe-text.ts';
 import type { Style } from './style.ts';
-import { type Alignment, type Cell, layOut, wrap } from './table.ts';
+import { type Alignment, type Cell, layOut, widthOfColumns, wrap } from './table.ts';
 
 const ALIGNMENTS: readonly Alignment[] = ['left', 'left', 'point', 'point', 'right', 'left'];
-/** What the columns beside the question take, roughly; the question has the rest. */
-const OTHER_COLUMNS = 62;
+const INDENT = '    ';
 const NARROWEST_QUESTION = 28;
-const WIDEST_QUESTION = 56;
+const WIDEST_QUESTION = 60;
 
+/** `width`: of the terminal; the question gives way. */
 export function structureText(result: NoteResult, structure: StructureResult, width: number, style: Style): string[] {
   const answers = structure.answers.map(index => result.answers[index]!);
-  const question = Math.max(NARROWEST_QUESTION, Math.min(WIDEST_QUESTION, width - OTHER_COLUMNS));
   return [
     `  ${headLine(structure, answers, style)}`,
-    ...(structure.withheld === undefined ? [] : [`    ${safeText(`answers are withheld: ${structure.withheld}`)}`]),
-    ...layOut(
-      answers.map(answer => row(answer, structure.display, question, style)),
-      ALIGNMENTS,
-      '    ',
-    ),
+    ...(structure.withheld === undefined
+      ? []
+      : [`${INDENT}${safeText(`answers are withheld: ${structure.withheld}`)}`]),
+    ...layOut(rowsOf(answers, structure.display, width, style), ALIGNMENTS, INDENT),
   ];
 }
 
@@ -53,18 +50,27 @@ function stateLine(answers: readonly Answer[]): string {
   return highest === undefined ? counted : `${counted}, highest use ${useOf(highest)} (${safeText(highest.name)})`;
 }
 
-function row(answer: Answer, display: DisplayUnits, questionWidth: number, style: Style): Cell[] {
+function rowsOf(answers: readonly Answer[], display: DisplayUnits, width: number, style: Style): Cell[][] {
+  const others = answers.map(answer => cells(answer, [], style));
+  const left = width - INDENT.length - widthOfColumns(others, ALIGNMENTS);
+  const questionWidth = Math.max(NARROWEST_QUESTION, Math.min(WIDEST_QUESTION, left));
+  return answers.map(answer => {
+    const under = answer.under === null ? '' : ` under ${answer.under}`;
+    const question = [`${answer.measure}${under}`, ...remarks(answer, display)];
+    return cells(
+      answer,
+      question.flatMap(part => wrap(part, questionWidth)),
+      style,
+    );
+  });
+}
+
+function cells(answer: Answer, question: readonly string[], style: Style): Cell[] {
   const state = stateOf(answer);
   const emphasis = state === 'not met' ? style.error : state === 'withheld' ? style.warning : undefined;
-  const under = answer.under === null ? '' : ` under ${answer.under}`;
   return [
     { lines: [answer.name] },
-    {
-      lines: [
-        ...wrap(`${answer.measure}${under}`, questionWidth),
-        ...remarks(answer, display).flatMap(remark => wrap(remark, questionWidth)),
-      ],
-    },
+    { lines: question },
     { lines: [state === 'withheld' ? '–' : answer.display] },
     { lines: [limitOf(answer)] },
     { lines: [useOf(answer)] },

@@ -1,6 +1,6 @@
 // `tautline print NOTE -o FILE`: a note with its results as one HTML page that needs nothing else.
 import { randomBytes } from 'node:crypto';
-import { readFileSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
+import { readFileSync, realpathSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
 import packageFile from '../../package.json' with { type: 'json' };
 import { evaluateNote } from '../note/evaluate.ts';
@@ -52,8 +52,11 @@ function stateLine(result: NoteResult): string {
 
 /** The whole page or nothing: a reader never sees half of it, and a failure leaves what was there. */
 function writeWhole(file: string, page: string, note: FoundNote): void {
-  if (file === resolve(note.file)) throw new UsageError('the page would overwrite its note');
-  if (statSync(file, { throwIfNoEntry: false })?.isDirectory()) throw new UsageError(`${file} is a folder`);
+  const there = statSync(file, { throwIfNoEntry: false });
+  if (there?.isDirectory()) throw new UsageError(`${file} is a folder`);
+  if (there !== undefined && realpathSync(file) === realpathSync(note.file)) {
+    throw new UsageError('the page would overwrite its note');
+  }
   const draft = join(dirname(file), `.tautline-${randomBytes(6).toString('hex')}`);
   try {
     writeFileSync(draft, page);

@@ -13,6 +13,12 @@ export type Alignment = 'left' | 'right' | 'point';
 
 const GAP = '  ';
 
+/** What the columns of rows take, the gaps between them included. */
+export function widthOfColumns(rows: readonly (readonly Cell[])[], alignments: readonly Alignment[]): number {
+  const widths = alignments.map((alignment, column) => measureColumn(rows, column, alignment).width);
+  return widths.reduce((sum, width) => sum + width, GAP.length * (widths.length - 1));
+}
+
 /** Rows as lines, trailing blanks left out. Every text is made safe here. */
 export function layOut(rows: readonly (readonly Cell[])[], alignments: readonly Alignment[], indent: string): string[] {
   const columns = alignments.map((alignment, column) => measureColumn(rows, column, alignment));

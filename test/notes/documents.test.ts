@@ -1,7 +1,10 @@
-// The reference, and the note in the README, hold what the program does. `UPDATE=1` writes the drawn tables anew.
+// The reference and the README hold what the program does. `UPDATE=1` writes what is drawn from it anew; the difference
+// is then read.
 import { readFileSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
+import { noteText, summaryText } from '../../src/cli/note-text.ts';
+import { styleOf } from '../../src/cli/style.ts';
 import { CODES } from '../../src/language/codes.ts';
 import { parseStatements } from '../../src/language/parse.ts';
 import { STATEMENTS } from '../../src/language/statements/table.ts';
@@ -9,7 +12,8 @@ import { MEASURES } from '../../src/language/words.ts';
 import { toJson } from '../../src/note/report.ts';
 import { codesOf, evaluated } from './check-note.ts';
 
-const PATH = join(import.meta.dirname, '../../media/reference.md');
+const REFERENCE = join(import.meta.dirname, '../../media/reference.md');
+const README = join(import.meta.dirname, '../../README.md');
 
 const TABLES = {
   measures: table(
@@ -27,16 +31,11 @@ const TABLES = {
 };
 
 describe('the reference', () => {
-  const text = readFileSync(PATH, 'utf8');
+  const text = readFileSync(REFERENCE, 'utf8');
 
   it('draws its tables from the program', () => {
-    const drawn = Object.entries(TABLES).reduce(
-      (whole, [name, rows]) =>
-        whole.replace(new RegExp(`(<!-- ${name} -->\n)[sS]*?(?=<!-- end -->)`), (_, marker) => marker + rows),
-      text,
-    );
-    if (process.env.UPDATE) writeFileSync(PATH, drawn);
-    else expect(text).toBe(drawn);
+    const drawn = Object.entries(TABLES).reduce((whole, [name, rows]) => withPart(whole, name, rows), text);
+    checkDrawn(REFERENCE, text, drawn);
   });
 
   it('lists forms that are read without complaint', () => {
@@ -62,9 +61,22 @@ describe('the reference', () => {
   });
 });
 
+describe('the README', () => {
+  it('shows what its note comes to', () => {
+    const text = readFileSync(README, 'utf8');
+    const note = /````markdown\n([\s\S]*?)````\n/.exec(text)![1]!;
+    expect(note.trimEnd().split('\n').length).toBeLessThanOrEqual(22);
+    const result = evaluated(note, 'slip-beam.md');
+    expect(result.diagnostics).toEqual([]);
+    const plain = styleOf(false);
+    const shown = `${noteText(result, 100, plain)}\n${summaryText([result], plain)}`;
+    checkDrawn(README, text, withPart(text, 'result', `\`\`\`text\n${shown}\`\`\`\n`));
+  });
+});
+
 describe('what is not evaluated yet', () => {
   it('is refused by name, as the reference says', () => {
-    const text = readFileSync(PATH, 'utf8');
+    const text = readFileSync(REFERENCE, 'utf8');
     const section = text.slice(text.indexOf('## What is not evaluated yet'));
     const lines = /```text\n([\s\S]*?)```/.exec(section)![1]!.trimEnd().split('\n');
     for (const line of lines) {
@@ -93,6 +105,16 @@ support A: pinned
 support B: roller
 load dead: 1 kN/m down on R1
 find tip: deflection at D under dead`;
+
+/** The text with what stands between a part's marks replaced. */
+function withPart(text: string, name: string, part: string): string {
+  return text.replace(new RegExp(`(<!-- ${name} -->\n)[\\s\\S]*?(?=<!-- end -->)`), (_, mark) => mark + part);
+}
+
+function checkDrawn(path: string, text: string, drawn: string): void {
+  if (process.env.UPDATE) writeFileSync(path, drawn);
+  else expect(text).toBe(drawn);
+}
 
 function table(head: readonly string[], rows: readonly (readonly string[])[]): string {
   const line = (cells: readonly string[]) => `| ${cells.join(' | ')} |\n`;
