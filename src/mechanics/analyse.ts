@@ -9,15 +9,19 @@ import { fieldsOf } from './fields.ts';
 import { hasIdleUnknown } from './free-movements.ts';
 import { boundFreedoms } from './freedoms.ts';
 import { type Imposed, imposedBy } from './imposed.ts';
-import { type Loading, loadingOf, SEGMENT_NUMBERS } from './loading.ts';
+import { loadingOf } from './loading.ts';
 import { findMechanisms } from './mechanisms.ts';
 import { type Response, respond } from './response.ts';
+import { type Loading, SEGMENT_NUMBERS } from './shares.ts';
 import type { Analysis, CaseParts, Conflict, Mechanism, Reaction, Solution } from './solution.ts';
 import { project } from './supports.ts';
 import { prepareSystem, type System } from './system.ts';
 
 /** A structure with more freedoms is not analysed: a square frame of so many takes about 10 s. */
 export const MAX_FREEDOMS = 300_000;
+
+/** Nor is one whose cases have more pieces of field in sum, at about a kilobyte each. */
+export const MAX_PIECES = 600_000;
 
 /**
  * A structure whose stiffness matrix is worse conditioned than this may be unstable, and its geometry is looked at. One
@@ -30,6 +34,7 @@ export function analyse(structure: Structure): Analysis {
   if (boundFreedoms(structure) > MAX_FREEDOMS) return unanalysed(structure, 'freedoms');
   const system = prepareSystem(structure);
   if (system === undefined) return unanalysed(structure, 'axially-stiff');
+  if (system.segments.count * structure.cases.length > MAX_PIECES) return unanalysed(structure, 'cases');
 
   const condition = conditionEstimate(system.matrix, system.factorisation);
   const suspicious = condition > SUSPICIOUS_CONDITION || hasIdleUnknown(system);
@@ -65,7 +70,7 @@ function unstable(mechanisms: readonly Mechanism[]) {
   return { stable: false, mechanisms, condition: Number.POSITIVE_INFINITY };
 }
 
-function unanalysed(structure: Structure, tooLarge?: 'freedoms' | 'axially-stiff'): Analysis {
+function unanalysed(structure: Structure, tooLarge?: Analysis['tooLarge']): Analysis {
   const analysis = { structure, stability: unstable([]), redundancy: 0, cases: [], parts: [] };
   return tooLarge === undefined ? analysis : { ...analysis, tooLarge };
 }

@@ -1,7 +1,7 @@
 // The response as fields along the members: exact polynomials on every segment, each integrated from the start of its leg.
 
-import { SEGMENT_NUMBERS } from './loading.ts';
-import { evaluate, type Polynomial } from './polynomial.ts';
+import { evaluate } from './polynomial.ts';
+import { SEGMENT_NUMBERS } from './shares.ts';
 import type { FieldPiece, MemberField } from './solution.ts';
 import type { System } from './system.ts';
 
@@ -23,11 +23,9 @@ export function fieldsOf(
     const pieces: FieldPiece[] = [];
     for (let k = 0; k < member.legs.length; k++) {
       const e = legs.first[m]! + k;
-      const state = startOf(system, along, movement, natural, e);
-      const start = member.legs[k]!.start;
       const end = k + 1 < member.legs.length ? member.legs[k + 1]!.start : member.length;
-      if (legs.bending[e] === 0) addBarPieces(system, along, e, k, start, end, state, pieces);
-      else addPieces(system, along, e, k, start, end, state, pieces);
+      const leg = { index: k, start: member.legs[k]!.start, end };
+      addPieces(system, along, e, leg, startOf(system, along, movement, natural, e), pieces);
     }
     return { pieces };
   });
@@ -41,11 +39,9 @@ interface State {
   rotation: number;
   axialMovement: number;
   transverseMovement: number;
-  /** Of the chord, per length. */
-  readonly chord: number;
 }
 
-/** At the start of leg e, behind its joint. */
+/** At the start of leg e, behind its joint. A bar has neither shear nor moment, and turns with its chord. */
 function startOf(system: System, along: Along, movement: Float64Array, natural: Float64Array, e: number): State {
   const { legs, ends } = system;
   const { freedoms, shares } = ends;
@@ -53,37 +49,35 @@ function startOf(system: System, along: Along, movement: Float64Array, natural: 
   const s = 8 * e;
   const x0 = movement[freedoms[f]!]!;
   const y0 = movement[freedoms[f + 1]!]!;
-  const x1 = movement[freedoms[f + 3]!]!;
-  const y1 = movement[freedoms[f + 4]!]!;
-  const startAcross = shares[s + 2]! * x0 + shares[s + 3]! * y0;
-  const chord = (shares[s + 6]! * x1 + shares[s + 7]! * y1 - startAcross) / legs.length[e]!;
-  // Moments sum to shear × length and to what the loads' shares turn: V = (M(L) − M(0)) / L − share.
-  const startMoment = natural[3 * e + 1]!;
-  const endMoment = natural[3 * e + 2]!;
-  const bar = legs.bending[e] === 0;
-  return {
-    axialForce: natural[3 * e]! + along.shares[2 * e]!,
-    shearForce: bar ? 0 : (startMoment + endMoment) / legs.length[e]! - along.shares[2 * e + 1]!,
-    bendingMoment: bar ? 0 : 0 - startMoment,
-    rotation: bar ? chord : movement[freedoms[f + 2]!]!,
-    axialMovement: shares[s]! * x0 + shares[s + 1]! * y0,
-    transverseMovement: startAcross,
-    chord,
-  };
+  const axialForce = natural[3 * e]! + along.shares[2 * e]!;
+  const axialMovement = shares[s]! * x0 + shares[s + 1]! * y0;
+  const transverseMovement = shares[s + 2]! * x0 + shares[s + 3]! * y0;
+  if (legs.bending[e] === 0) {
+    const x1 = movement[freedoms[f + 3]!]!;
+    const y1 = movement[freedoms[f + 4]!]!;
+    const rotation = (shares[s + 6]! * x1 + shares[s + 7]! * y1 - transverseMovement) / legs.length[e]!;
+    return { axialForce, shearForce: 0, bendingMoment: 0, rotation, axialMovement, transverseMovement };
+  }
+  // The couples on both ends and what the loads' shares turn balance: V = (M(L) − M(0)) / L − share.
+  const startCouple = natural[3 * e + 1]!;
+  const endCouple = natural[3 * e + 2]!;
+  const shearForce = (startCouple + endCouple) / legs.length[e]! - along.shares[2 * e + 1]!;
+  const rotation = movement[freedoms[f + 2]!]!;
+  return { axialForce, shearForce, bendingMoment: 0 - startCouple, rotation, axialMovement, transverseMovement };
 }
 
+/** `leg`: its index in the member, and where along the member it lies. Takes the state from the start of the leg to its end. */
 function addPieces(
   system: System,
   along: Along,
   e: number,
-  leg: number,
-  legStart: number,
-  legEnd: number,
+  leg: { readonly index: number; readonly start: number; readonly end: number },
   state: State,
   pieces: FieldPiece[],
 ): void {
   const { legs, segments } = system;
-  const flexibility = 1 / legs.bending[e]!;
+  const bending = legs.bending[e]!;
+  const flexibility = bending === 0 ? 0 : 1 / bending;
   const stretch = 1 / legs.axial[e]!;
   const last = segments.first[e + 1]! - 1;
   for (let g = segments.first[e]!; g <= last; g++) {
@@ -101,94 +95,37 @@ function addPieces(
     const V = state.shearForce;
     const M = state.bendingMoment;
     // dN/ds = −p, dV/ds = w, dM/ds = V; EI dθ/ds = M, dv/ds = θ, EA du/ds = N.
-    const axialForce: Polynomial = [N, 0 - p0, 0 - p1 / 2];
-    const shearForce: Polynomial = [V, w0, w1 / 2];
-    const bendingMoment: Polynomial = [M, V, w0 / 2, w1 / 6];
-    const rotation: Polynomial = [
-      state.rotation,
-      M * flexibility,
-      (V / 2) * flexibility,
-      (w0 / 6) * flexibility,
-      (w1 / 24) * flexibility,
-    ];
-    const transverseMovement: Polynomial = [
-      state.transverseMovement,
-      state.rotation,
-      (M / 2) * flexibility,
-      (V / 6) * flexibility,
-      (w0 / 24) * flexibility,
-      (w1 / 120) * flexibility,
-    ];
-    const axialMovement: Polynomial = [
-      state.axialMovement,
-      N * stretch,
-      (0 - p0 / 2) * stretch,
-      (0 - p1 / 6) * stretch,
-    ];
-    pieces.push({
-      leg,
-      start: legStart + from,
-      end: g === last ? legEnd : legStart + from + length,
-      axialForce,
-      shearForce,
-      bendingMoment,
-      rotation,
-      axialMovement,
-      transverseMovement,
-    });
+    const piece = {
+      leg: leg.index,
+      start: leg.start + from,
+      end: g === last ? leg.end : leg.start + from + length,
+      axialForce: [N, 0 - p0, 0 - p1 / 2],
+      shearForce: [V, w0, w1 / 2],
+      bendingMoment: [M, V, w0 / 2, w1 / 6],
+      rotation: [
+        state.rotation,
+        M * flexibility,
+        (V / 2) * flexibility,
+        (w0 / 6) * flexibility,
+        (w1 / 24) * flexibility,
+      ],
+      axialMovement: [state.axialMovement, N * stretch, (0 - p0 / 2) * stretch, (0 - p1 / 6) * stretch],
+      transverseMovement: [
+        state.transverseMovement,
+        state.rotation,
+        (M / 2) * flexibility,
+        (V / 6) * flexibility,
+        (w0 / 24) * flexibility,
+        (w1 / 120) * flexibility,
+      ],
+    };
+    pieces.push(piece);
     if (g === last) break;
-    state.axialForce = evaluate(axialForce, length);
-    state.shearForce = evaluate(shearForce, length);
-    state.bendingMoment = evaluate(bendingMoment, length);
-    state.rotation = evaluate(rotation, length);
-    state.axialMovement = evaluate(axialMovement, length);
-    state.transverseMovement = evaluate(transverseMovement, length);
+    state.axialForce = evaluate(piece.axialForce, length);
+    state.shearForce = evaluate(piece.shearForce, length);
+    state.bendingMoment = evaluate(piece.bendingMoment, length);
+    state.rotation = evaluate(piece.rotation, length);
+    state.axialMovement = evaluate(piece.axialMovement, length);
+    state.transverseMovement = evaluate(piece.transverseMovement, length);
   }
 }
-
-/** A bar stays straight; only what acts along it makes its force vary. */
-function addBarPieces(
-  system: System,
-  along: Along,
-  e: number,
-  leg: number,
-  legStart: number,
-  legEnd: number,
-  state: State,
-  pieces: FieldPiece[],
-): void {
-  const { legs, segments } = system;
-  const stretch = 1 / legs.axial[e]!;
-  const last = segments.first[e + 1]! - 1;
-  for (let g = segments.first[e]!; g <= last; g++) {
-    const from = segments.breaks[g + e]!;
-    const length = segments.breaks[g + e + 1]! - from;
-    const at = SEGMENT_NUMBERS * g;
-    const p0 = along.segments[at + 2]!;
-    const p1 = along.segments[at + 3]!;
-    state.axialForce -= along.segments[at + 5]!;
-    const N = state.axialForce;
-    const axialForce: Polynomial = [N, 0 - p0, 0 - p1 / 2];
-    const axialMovement: Polynomial = [
-      state.axialMovement,
-      N * stretch,
-      (0 - p0 / 2) * stretch,
-      (0 - p1 / 6) * stretch,
-    ];
-    pieces.push({
-      leg,
-      start: legStart + from,
-      end: g === last ? legEnd : legStart + from + length,
-      axialForce,
-      shearForce: NONE,
-      bendingMoment: NONE,
-      rotation: [state.chord],
-      axialMovement,
-      transverseMovement: [state.transverseMovement + state.chord * from, state.chord],
-    });
-    state.axialForce = evaluate(axialForce, length);
-    state.axialMovement = evaluate(axialMovement, length);
-  }
-}
-
-const NONE: Polynomial = [0];

@@ -1,6 +1,6 @@
 // The public face of the mechanics room: what a structure does under its loads.
 
-export { analyse, MAX_FREEDOMS } from './analyse.ts';
+export { analyse, MAX_FREEDOMS, MAX_PIECES } from './analyse.ts';
 export { type FieldName, type FieldValues, fieldAt, movementAlong, movementAt, pieceAt, type Side } from './field.ts';
 export { measure } from './measure.ts';
 export { MAX_MECHANISMS } from './mechanisms.ts';
@@ -16,4 +16,4 @@ export type {
   Solution,
   Stability,
 } from './solution.ts';
-export { combine, imposedPart, loadPart } from './superposition.ts';
+export { combine, imposedPart, loadPart, superpose } from './superposition.ts';

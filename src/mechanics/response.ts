@@ -2,8 +2,8 @@
 // legs, and what is left unbalanced.
 
 import type { Imposed } from './imposed.ts';
-import type { Loading } from './loading.ts';
 import { expand, gather } from './reduction.ts';
+import type { Loading } from './shares.ts';
 import { addStrains, subtractForces } from './strains.ts';
 import type { System } from './system.ts';
 import { addThrusts } from './thrusts.ts';

@@ -15,8 +15,11 @@ export interface Analysis {
   readonly parts: readonly (CaseParts | undefined)[];
   /** An imposed movement that an axially stiff member would have to change its length for. */
   readonly conflict?: Conflict;
-  /** Not analysed: so many freedoms, or so many movements tied together by axially stiff members, are past what is solved in seconds. */
-  readonly tooLarge?: 'freedoms' | 'axially-stiff';
+  /**
+   * Not analysed, as it would take more than seconds or gigabytes: too many freedoms, too many movements tied together by
+   * axially stiff members, or too many cases for so many legs and loads.
+   */
+  readonly tooLarge?: 'freedoms' | 'axially-stiff' | 'cases';
 }
 
 export interface CaseParts {

@@ -124,7 +124,7 @@ describe('every case', () => {
           expect(Math.abs(x - solution.movements[3 * p]!)).toBeLessThanOrEqual(1e-12 * scale);
           expect(Math.abs(y - solution.movements[3 * p + 1]!)).toBeLessThanOrEqual(1e-12 * scale);
         }
-        if (kind === 'bar') expect(piece.bendingMoment).toEqual([0]);
+        if (kind === 'bar') expect(largest(piece.bendingMoment)).toBe(0);
       });
     });
   });

@@ -1,7 +1,7 @@
 // What is not analysed, and how long large structures take to be refused or solved.
 
 import { describe, expect, it } from 'vitest';
-import { analyse, MAX_FREEDOMS } from '../../src/mechanics/index.ts';
+import { analyse, MAX_FREEDOMS, MAX_PIECES } from '../../src/mechanics/index.ts';
 import { build, fixed } from './building.ts';
 
 describe('limits', () => {
@@ -16,6 +16,15 @@ describe('limits', () => {
     const refused = analyse(withPoints(MAX_FREEDOMS / 3 + 1));
     expect(refused.tooLarge).toBe('freedoms');
     expect(refused.cases).toEqual([]);
+  });
+
+  it('a structure with more cases than there is room for fields is refused', () => {
+    const points: Record<string, readonly [number, number]> = {};
+    for (let k = 0; k <= 1000; k++) points[`P${k}`] = [k, 0];
+    const structure = build({ points, members: [Object.keys(points).join(' ')], supports: { P0: fixed } });
+    const withCases = (count: number) => ({ ...structure, cases: new Array(count).fill({ name: 'dead' }) });
+    expect(analyse(withCases(MAX_PIECES / 1000 + 1)).tooLarge).toBe('cases');
+    expect(analyse(withCases(1)).tooLarge).toBeUndefined();
   });
 
   it('a member without a bending stiffness is a mistake of the caller', () => {

@@ -1,9 +1,12 @@
 import { describe, expect, it } from 'vitest';
-import { bound, derivative, evaluate, extremes, roots, sum } from '../../src/mechanics/index.ts';
+import { bound, derivative, evaluate, extremes, type Polynomial, roots, sum } from '../../src/mechanics/index.ts';
 
 /** The polynomial with these roots, times a factor. */
-const fromRoots = (factor: number, ...zeros: number[]) =>
-  zeros.reduce((p, zero) => sum([0, ...p], p, 1, -zero), [factor] as readonly number[]);
+const fromRoots = (factor: number, ...zeros: number[]) => {
+  let polynomial: Polynomial = [factor];
+  for (const zero of zeros) polynomial = sum([0, ...polynomial], polynomial, 1, -zero);
+  return polynomial;
+};
 
 const expectRoots = (found: readonly number[], expected: readonly number[], tolerance = 1e-12) => {
   expect(found).toHaveLength(expected.length);
