@@ -1,7 +1,7 @@
-// `npm run try`: builds, solves the sample project, writes its pages and says where they are.
+// `npm run try`: builds, solves the sample project, writes its pages, and says how to open them and how to go on.
 import { spawnSync } from 'node:child_process';
 import { mkdirSync, readdirSync } from 'node:fs';
-import { dirname, join, relative } from 'node:path';
+import { dirname, join } from 'node:path';
 import process from 'node:process';
 import { fileURLToPath } from 'node:url';
 
@@ -9,23 +9,35 @@ const root = join(dirname(fileURLToPath(import.meta.url)), '../..');
 const sample = 'media/sample';
 const pages = 'out/pages';
 
-run('src/build/bundle.mjs');
-const checked = run('dist/cli.mjs', 'check', sample);
-mkdirSync(join(root, pages), { recursive: true });
-for (const name of readdirSync(join(root, sample))
-  .filter(file => file.endsWith('.md'))
-  .sort()) {
-  run('dist/cli.mjs', 'print', `${sample}/${name}`, '-o', `${pages}/${name.replace(/\.md$/, '.html')}`);
-}
+run(['src/build/bundle.mjs']);
+run(['dist/cli.mjs', 'check', sample]);
+const written = writePages();
 console.log(`
-The pages are in ${relative(process.cwd(), join(root, pages)) || pages}: open one in a browser.
-To have it in VS Code: npm run package, then code --install-extension out/tautline.vsix
-and open ${sample} with its preview beside it.`);
-process.exitCode = checked > 1 ? checked : 0;
+The same notes as pages, to be opened in a browser or printed:
+${written.map(page => `  ${page}`).join('\n')}
+
+To have it where the notes are written:
+  npm run package && code --install-extension out/tautline.vsix
+  code ${sample}/slip-canopy.md        and open its preview beside it
+On the command line:
+  node dist/cli.mjs --help
+The language is told in media/reference.md.`);
+
+function writePages() {
+  mkdirSync(join(root, pages), { recursive: true });
+  const notes = readdirSync(join(root, sample)).filter(name => name.endsWith('.md'));
+  return notes.sort().map(name => {
+    const page = `${pages}/${name.replace(/\.md$/, '.html')}`;
+    run(['dist/cli.mjs', 'print', `${sample}/${name}`, '-o', page], 'ignore');
+    return page;
+  });
+}
 
 /** Exit status 1 says that a requirement is not met, which a sample may show; more than that is a failure. */
-function run(script, ...rest) {
-  const { status } = spawnSync(process.execPath, [join(root, script), ...rest], { cwd: root, stdio: 'inherit' });
+function run([script, ...rest], out = 'inherit') {
+  const { status } = spawnSync(process.execPath, [join(root, script), ...rest], {
+    cwd: root,
+    stdio: ['ignore', out, 'inherit'],
+  });
   if (status === null || status > 1) process.exit(status ?? 1);
-  return status;
 }
