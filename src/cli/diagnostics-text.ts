@@ -9,16 +9,18 @@ import type { Style } from './style.ts';
 /** A longer source line is cut on both sides of the words. */
 const LONGEST_SOURCE = 140;
 const CUT = '…';
+/** A message may quote a name, and a name may be as long as a fence. */
+const LONGEST_MESSAGE = 400;
 
 export function diagnosticText(diagnostic: Diagnostic, path: string, lines: LineIndex, style: Style): string[] {
   const { severity, code, message, range, hint, related = [] } = diagnostic;
   const coloured = colourOf(severity, style);
   return [
-    `${placeText(path, lines.positionAt(range.start), style)} ${coloured(severity)} ${code}: ${style.strong(safeText(message))}`,
+    `${placeText(path, lines.positionAt(range.start), style)} ${coloured(severity)} ${code}: ${style.strong(shortened(message))}`,
     ...excerpt(range, lines, coloured, style),
-    ...(hint === undefined ? [] : [`${GUTTER_BLANK}${style.hint('hint:')} ${safeText(hint)}`]),
+    ...(hint === undefined ? [] : [`${GUTTER_BLANK}${style.hint('hint:')} ${shortened(hint)}`]),
     ...related.flatMap(place => [
-      `${GUTTER_BLANK}${placeText(path, lines.positionAt(place.range.start), style)} ${safeText(place.message)}`,
+      `${GUTTER_BLANK}${placeText(path, lines.positionAt(place.range.start), style)} ${shortened(place.message)}`,
       ...excerpt(place.range, lines, style.soft, style),
     ]),
   ];
@@ -29,6 +31,10 @@ const GUTTER_BLANK = ' '.repeat(GUTTER + 3);
 
 function placeText(path: string, { line, column }: TextPosition, style: Style): string {
   return style.soft(`${safeText(path)}:${line}:${column}:`);
+}
+
+function shortened(message: string): string {
+  return safeText(message.length > LONGEST_MESSAGE ? message.slice(0, LONGEST_MESSAGE) + CUT : message);
 }
 
 /** The first line that the range touches, and carets under the part of it that the range covers. */
