@@ -4,8 +4,8 @@ import type { Load, Structure } from '../model/structure.ts';
 import { type Cholesky, cholesky, solveCholesky } from './cholesky.ts';
 import { addLoad, emptyLoading, type Loading } from './loading.ts';
 import type { Preference } from './preference.ts';
-import { type ForceState, type PrimaryStructure, primaryForces, primaryStructure } from './primary.ts';
-import { flexibilityOf } from './statics.ts';
+import { type ForceState, type PrimaryStructure, primaryForces, primaryStructureOf } from './primary.ts';
+import { flexibilityOf, isUnknown, type Statics, staticsOf } from './statics.ts';
 import { addState, type UnitState, unitStates, workOf } from './unit-states.ts';
 import { largestForce, strainsOf } from './work.ts';
 
@@ -33,13 +33,22 @@ export interface Response {
  */
 const MOST_DENSE_WORK = 1e8;
 
-/** Undefined for the reasons of `primaryStructure`, and where the redundants are too many. */
+/**
+ * Undefined for the reasons of `primaryStructure`, and where the redundants are too many (found out before any work is
+ * spent on the structure). The primary structure alone may then still serve: see given-forces.ts.
+ */
 export function prepare(structure: Structure, preference?: Preference): ForceMethod | undefined {
-  const primary = primaryStructure(structure, preference);
-  if (!primary) return undefined;
-  const count = primary.elimination.redundants.length;
-  const work = (count * count * (primary.statics.unknownCount + count)) / 2;
-  return work <= MOST_DENSE_WORK ? new ForceMethod(primary) : undefined;
+  const statics = staticsOf(structure);
+  if (!statics || denseWork(statics) > MOST_DENSE_WORK) return undefined;
+  const primary = primaryStructureOf(statics, preference);
+  return primary && new ForceMethod(primary);
+}
+
+/** Of a stable structure: it has as many redundants as unknowns more than equations. */
+function denseWork(statics: Statics): number {
+  let redundants = -statics.rowCount;
+  for (let unknown = 0; unknown < statics.unknownCount; unknown++) if (isUnknown(statics, unknown)) redundants++;
+  return redundants <= 0 ? 0 : (redundants ** 2 * (statics.unknownCount + redundants)) / 2;
 }
 
 /**

@@ -13,12 +13,16 @@ import { bound, derivative, productIntegral, valueAt } from './polynomial.ts';
 import { type PrimaryStructure, virtualSystem } from './primary.ts';
 import type { SpanPiece } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, isUnknown, type StaticLeg, type Statics, unitOf } from './statics.ts';
-import { type RealForces, virtualWork } from './work.ts';
+import { type Movement, type RealForces, roundingOf, virtualWork, workOnGround } from './work.ts';
 
 /** The strains that given forces cause, by unknown (see `strainsOf` in work.ts), with the forces themselves. */
 export interface GivenForces {
   readonly forces: InternalForces;
   readonly strains: Float64Array;
+  /** Imposed movement of each ground along its reaction, m or rad. */
+  readonly ground: Float64Array | undefined;
+  /** The largest force, N: of moments, with the leg's length for a lever. */
+  readonly largest: number;
   /** The largest that any leg's strains could be if they did not change sign along it: movement of one end, m. */
   readonly size: number;
 }
@@ -37,12 +41,22 @@ export function givenForces(
     if (factor !== 0) addLoad(statics, loading, load, factor);
   }
   const ends = new Float64Array(2 * legs.length * COMPONENTS);
+  let largest = 0;
   let size = 0;
   for (let index = 0; index < legs.length; index++) {
     const leg = legs[index]!;
     const pieces = piecesWithin(forces, leg);
     strains.set(strainsWithin(leg, pieces), 3 * index);
-    size = Math.max(size, sizeWithin(leg, pieces));
+    for (const { start, end, axialForce, bendingMoment } of pieces) {
+      const axial = bound(axialForce, end - start);
+      const lever = bound(bendingMoment, end - start) / leg.length;
+      largest = Math.max(largest, axial, lever);
+      size = Math.max(
+        size,
+        axial * leg.axialFlexibility * leg.length,
+        lever * leg.bendingFlexibility * leg.length ** 3,
+      );
+    }
     ends.set(endForces(leg, pieces), 2 * index * COMPONENTS);
   }
   const onPoints = sumAtPoints(statics, ends, loading);
@@ -51,22 +65,23 @@ export function givenForces(
     const reaction = moment ? -onPoints[row]! : -(x * onPoints[row]! + y * onPoints[row + 1]!);
     strains[firstReaction + index] = flexibility * reaction - (loading.ground?.[index] ?? 0);
   }
-  return { forces, strains, size };
+  return { forces, strains, ground: loading.ground, largest, size };
 }
 
 /** As `movement`, with the virtual system on the primary structure and the given forces for the real ones. */
 export function movementFromForces(
   primary: PrimaryStructure,
-  { forces, strains }: GivenForces,
+  { forces, strains, ground, largest }: GivenForces,
   actions: readonly UnitAction[],
-): number {
+): Movement {
   const { statics } = primary;
   const virtual = virtualSystem(primary, actions);
   const spans = new Map<number, { pieces: readonly SpanPiece[] }>();
   for (const leg of virtual.spans.keys()) spans.set(leg, { pieces: piecesWithin(forces, statics.legs[leg]!) });
   // The given pieces hold the whole force, so that nothing is left to stand at the ends.
   const real: RealForces = { unknowns: new Float64Array(statics.unknownCount), spans };
-  return virtualWork(statics, virtual, real, strains);
+  const value = virtualWork(statics, virtual, real, strains);
+  return { value, rounding: roundingOf(statics, virtual, largest, workOnGround(statics, virtual, ground)) };
 }
 
 /**
@@ -125,15 +140,6 @@ function strainsWithin(
     rising += productIntegral(bendingMoment, [start / length, 1 / length], span);
   }
   return [axialFlexibility * axial, bendingFlexibility * falling, bendingFlexibility * rising];
-}
-
-function sizeWithin({ length, axialFlexibility, bendingFlexibility }: StaticLeg, pieces: readonly SpanPiece[]): number {
-  let size = 0;
-  for (const { start, end, axialForce, bendingMoment } of pieces) {
-    const axial = axialFlexibility * bound(axialForce, end - start) * length;
-    size = Math.max(size, axial, bendingFlexibility * bound(bendingMoment, end - start) * length ** 2);
-  }
-  return size;
 }
 
 /** What the leg does to the points at its start and end, `COMPONENTS` each. */

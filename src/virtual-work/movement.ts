@@ -3,7 +3,7 @@
 import type { UnitAction } from '../model/question.ts';
 import type { ForceMethod } from './force-method.ts';
 import { type ForceState, virtualSystem } from './primary.ts';
-import { virtualWork, workOfUnitForce, workOnGround } from './work.ts';
+import { type Movement, roundingOf, virtualWork, workOnGround } from './work.ts';
 
 /**
  * Σ action · movement, m or rad, under the cases with these factors (in the order of the structure's cases). NaN where
@@ -13,15 +13,6 @@ import { virtualWork, workOfUnitForce, workOnGround } from './work.ts';
 export function movement(forceMethod: ForceMethod, factors: readonly number[], actions: readonly UnitAction[]): number {
   return movementOf(forceMethod, factors, virtualSystem(forceMethod.primary, actions)).value;
 }
-
-/** A movement, and the size below which it is nothing but rounding; m or rad. */
-export interface Movement {
-  readonly value: number;
-  readonly rounding: number;
-}
-
-/** Roundings of the largest force that a movement may have in it: some hundreds of terms, each of several steps. */
-const ROUNDING = 1e3 * Number.EPSILON;
 
 /**
  * The same with the virtual system at hand, for one question under many combinations, and with its rounding: what should
@@ -38,8 +29,7 @@ export function movementOf(forceMethod: ForceMethod, factors: readonly number[],
     const { final, strains, largest, contradicted } = forceMethod.case(index);
     value += contradicted ? Number.NaN : factor * virtualWork(statics, virtual, final, strains);
     force += Math.abs(factor) * largest;
-    ground += Math.abs(factor) * workOnGround(statics, virtual, final);
+    ground += Math.abs(factor) * workOnGround(statics, virtual, final.ground);
   }
-  const size = force === 0 ? 0 : force * workOfUnitForce(statics, virtual);
-  return { value, rounding: ROUNDING * (size + ground) };
+  return { value, rounding: roundingOf(statics, virtual, force, ground) };
 }

@@ -30,12 +30,15 @@ const MOST_EFFORT = 5e8;
  * Undefined where the structure can move without strain, where a bending stiffness is not known, or where finding the
  * primary structure would take more than about a second.
  */
-export function primaryStructure(
-  structure: Structure,
+export function primaryStructure(structure: Structure, preference?: Preference): PrimaryStructure | undefined {
+  const statics = staticsOf(structure);
+  return statics && primaryStructureOf(statics, preference);
+}
+
+export function primaryStructureOf(
+  statics: Statics,
   preference: Preference = stiffestFromTheGround,
 ): PrimaryStructure | undefined {
-  const statics = staticsOf(structure);
-  if (!statics) return undefined;
   const columns = {
     rowCount: statics.rowCount,
     maximumEntries: ENTRIES_PER_UNKNOWN,

@@ -43,12 +43,38 @@ export function virtualWork(statics: Statics, virtual: ForceState, real: RealFor
   return work;
 }
 
+/** A movement, and the size below which it is nothing but rounding; m or rad. */
+export interface Movement {
+  readonly value: number;
+  readonly rounding: number;
+}
+
+/** Roundings of the largest force that a movement may have in it: some hundreds of terms, each of several steps. */
+const ROUNDING = 1e3 * Number.EPSILON;
+
 /**
- * The work of the virtual state if every unknown of the real one were as large as a force of 1 N makes it: what the
- * rounding of a movement is relative to. It may be far more than the movement, as of a post that only its axial force,
- * and no rounding, should shorten.
+ * The rounding of a movement: of the work that the virtual state would do if all real forces were as large as the largest
+ * of them, N. That may be far more than the movement, as for the sway of a post that is only pressed. `ground`: the sizes
+ * of Σ r g.
  */
-export function workOfUnitForce({ legs, grounds, firstReaction }: Statics, { unknowns, spans }: ForceState): number {
+export function roundingOf(statics: Statics, virtual: ForceState, largest: number, ground: number): number {
+  return ROUNDING * (largest === 0 ? ground : largest * workOfUnitForce(statics, virtual) + ground);
+}
+
+/** The sizes of Σ r g, summed, for imposed movements g. */
+export function workOnGround(
+  { firstReaction }: Statics,
+  { unknowns }: ForceState,
+  ground: Float64Array | undefined,
+): number {
+  let work = 0;
+  for (let index = 0; ground !== undefined && index < ground.length; index++) {
+    work += Math.abs(unknowns[firstReaction + index]! * ground[index]!);
+  }
+  return work;
+}
+
+function workOfUnitForce({ legs, grounds, firstReaction }: Statics, { unknowns, spans }: ForceState): number {
   let work = 0;
   for (let index = 0; index < legs.length; index++) {
     const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
@@ -62,15 +88,6 @@ export function workOfUnitForce({ legs, grounds, firstReaction }: Statics, { unk
     const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
     work += axialFlexibility * length * Math.abs(endAxial);
     work += bendingFlexibility * length ** 3 * (Math.abs(startShear) + Math.abs(endShear));
-  }
-  return work;
-}
-
-/** The sizes of Σ r g, summed. */
-export function workOnGround({ firstReaction }: Statics, { unknowns }: ForceState, { ground }: ForceState): number {
-  let work = 0;
-  for (let index = 0; ground !== undefined && index < ground.length; index++) {
-    work += Math.abs(unknowns[firstReaction + index]! * ground[index]!);
   }
   return work;
 }

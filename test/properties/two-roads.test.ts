@@ -68,7 +68,10 @@ holds('stiff and soft together, up to 1e12 apart', fc.tuple(structures(), powers
   const structure = { ...plain, sections };
   const analysis = analysed(structure);
   const forceMethod = prepare(structure)!;
+  const tolerance = Math.min(allowed(analysis, 1e-11), 1e-3);
   for (const [index, solution] of analysis.cases.entries()) {
+    // Past what the first road can solve, its residual says so, and the answer is withheld.
+    if (solution.residual > 1e-9) continue;
     const { movement } = scalesOf(structure, read(structure, solution));
     for (const [point, { name }] of structure.points.entries()) {
       const virtual = virtualSystem(forceMethod.primary, [
@@ -76,7 +79,7 @@ holds('stiff and soft together, up to 1e12 apart', fc.tuple(structures(), powers
       ]);
       const { value, rounding } = movementOf(forceMethod, only(index), virtual);
       const [x, y] = solution.movements.subarray(3 * point, 3 * point + 2);
-      expectNear(0.6 * x! - 0.8 * y!, value, Math.max(rounding, allowed(analysis, 1e-11) * movement), name);
+      expectNear(0.6 * x! - 0.8 * y!, value, Math.max(rounding, tolerance * movement), name);
     }
   }
 });
@@ -139,8 +142,8 @@ holds('from the forces of the first road, the second finds its movements, and no
       const [x, y] = solution.movements.subarray(3 * point, 3 * point + 2);
       const at = { kind: 'point', point } as const;
       const tolerance = allowed(analysis, 1e-9) * scale.movement;
-      expectNear(x!, movementFromForces(primary, given, [{ at, x: 1, y: 0, moment: 0 }]), tolerance);
-      expectNear(y!, movementFromForces(primary, given, [{ at, x: 0, y: 1, moment: 0 }]), tolerance);
+      expectNear(x!, movementFromForces(primary, given, [{ at, x: 1, y: 0, moment: 0 }]).value, tolerance);
+      expectNear(y!, movementFromForces(primary, given, [{ at, x: 0, y: 1, moment: 0 }]).value, tolerance);
     }
     // Where nothing moves (forces that run straight into a support), a gap of nothing has no size to compare with.
     const moves = largest([...solution.movements]) > 1e-6 * scale.movement;
