@@ -1,7 +1,7 @@
 // Bundles what is shipped into dist/. The same sources give the same bytes: no dates, no machine's paths.
 // With names behind it (`bundle.mjs cli server`) it makes only those, and leaves the others as they are.
 import { mkdir, readdir, readFile, rm, writeFile } from 'node:fs/promises';
-import { dirname, join } from 'node:path';
+import { dirname, join, relative } from 'node:path';
 import process from 'node:process';
 import { fileURLToPath } from 'node:url';
 import { build } from 'esbuild';
@@ -61,12 +61,27 @@ const unknown = asked.filter(name => !(name in BUNDLES));
 if (unknown.length > 0) {
   throw new Error(`no bundle is named ${unknown.join(', ')}; there are ${Object.keys(BUNDLES).join(', ')}`);
 }
-if (asked.length === 0) await rm(dist, { recursive: true, force: true });
-await mkdir(dist, { recursive: true });
 const wanted = Object.entries(BUNDLES).filter(([name]) => asked.length === 0 || asked.includes(name));
 const made = await Promise.all(wanted.map(([, options]) => bundle(options)));
+await mkdir(dist, { recursive: true });
 await writeFile(join(dist, 'cli.mjs'), CLI_START, { mode: 0o755 });
-if (asked.length === 0) await writeFile(join(dist, 'third-party-licences.txt'), await licences(made));
+if (asked.length === 0) {
+  await writeFile(join(dist, 'third-party-licences.txt'), await licences(made));
+  await removeOthers(['cli.mjs', 'third-party-licences.txt', ...made.flatMap(outputsOf)]);
+}
+
+/** Paths below dist, with forward slashes. */
+function outputsOf({ metafile }) {
+  return Object.keys(metafile.outputs).map(path => path.slice('dist/'.length));
+}
+
+/** What an earlier build left. Last, so that who runs from dist meanwhile finds all files at any time. */
+async function removeOthers(kept) {
+  for (const entry of await readdir(dist, { recursive: true, withFileTypes: true })) {
+    const path = relative(dist, join(entry.parentPath, entry.name)).replaceAll('\\', '/');
+    if (entry.isFile() && !kept.includes(path)) await rm(join(dist, path));
+  }
+}
 
 function bundle(options) {
   return build({
