@@ -4,7 +4,6 @@ import type { DisplayUnits } from '../quantity/display.ts';
 import { FIELD_STYLES, type FieldName, sideOf } from './field-curves.ts';
 import { withUnit } from './figures.ts';
 import type { Spot } from './geometry.ts';
-import type { WordRole } from './ink.ts';
 import type { LabelRequest, Place } from './placing.ts';
 import { jumps, localExtremes, type Reading } from './readings.ts';
 import { forceWords, momentWords, movementInWords, shearWords } from './value-words.ts';
@@ -16,13 +15,6 @@ export interface Told {
   readonly reading: Reading;
   readonly beside: boolean;
 }
-
-export const FIELD_WORDS: Readonly<Record<FieldName, WordRole>> = {
-  axial: 'ink',
-  shear: 'bend',
-  moment: 'bend',
-  movement: 'move',
-};
 
 /** Two values closer than this share of the largest are one. */
 const SAME = 1e-9;
@@ -75,7 +67,7 @@ export function labelOf({ reading, beside }: Told, at: LabelAt): LabelRequest {
   return {
     labels: wordings(reading, side, at),
     places: beside ? placesBeside(reading, side, at) : placesOver(side, at),
-    role: FIELD_WORDS[at.field],
+    role: FIELD_STYLES[at.field].hue,
     rank,
     optional: rank < 1 - SAME,
   };

@@ -4,11 +4,11 @@ import type { Solution } from '../mechanics/solution.ts';
 import type { Structure } from '../model/structure.ts';
 import type { DisplayUnit, DisplayUnits } from '../quantity/display.ts';
 import { labelOf, toldReadings } from './beam-field-labels.ts';
+import { fieldsToDraw } from './field-choice.ts';
 import { drawFieldOnLegs, FIELD_STYLES, type FieldName, sideOf, spotOfReading } from './field-curves.ts';
 import { asGiven, spaced, THIN, withUnit } from './figures.ts';
 import { path, type Spot } from './geometry.ts';
-import type { FillRole } from './ink.ts';
-import { roundedExaggeration } from './moved-shape.ts';
+import { largestMovement, roundedExaggeration } from './moved-shape.ts';
 import { type LabelRequest, placeLabels } from './placing.ts';
 import { largestSize, zeroCrossings } from './readings.ts';
 import type { Sheet } from './sheet.ts';
@@ -32,43 +32,24 @@ export const BETWEEN = 8;
 /** The three lines of a title need this much over and under the axis, px. */
 export const TITLE_UP = 20;
 export const TITLE_DOWN = 26;
-/** Of the largest of its kind, a force smaller than this is rounding. */
-const NO_FORCE = 1e-9;
 
-const DOTS: Readonly<Record<FieldName, FillRole>> = { axial: 'ink', shear: 'bend', moment: 'bend', movement: 'move' };
-const TITLES: Readonly<Record<FieldName, string>> = {
-  axial: 'Axial force',
-  shear: 'Shear',
-  moment: 'Moment',
-  movement: 'Movement',
-};
+/** A movement across the beam below this share of the whole is rounding. */
+const NO_MOVEMENT = 1e-9;
 
 /** Draws them one under the other and returns the height at which they end. */
 export function drawBeamFields(sheet: Sheet, structure: Structure, solution: Solution, place: BeamFieldsAt): number {
   let top = place.top;
   const dots: { readonly field: FieldName; readonly axis: number; readonly spots: readonly Spot[] }[] = [];
   for (const field of fieldsToDraw(structure, solution)) {
+    // A beam that only changes its length moves along its own line, which no ordinate shows.
+    const across = largestSize(solution.members, 'transverseMovement');
+    if (field === 'movement' && across <= NO_MOVEMENT * largestMovement(solution)) continue;
     const drawn = drawBeamField(sheet, structure, solution, field, { ...place, top });
     dots.push({ field, axis: drawn.axis, spots: drawn.levels });
     top = drawn.bottom + BETWEEN;
   }
   guideToExtremes(sheet, dots);
   return top - BETWEEN;
-}
-
-function fieldsToDraw(structure: Structure, solution: Solution): FieldName[] {
-  const shear = largestSize(solution.members, 'shearForce');
-  const axial = largestSize(solution.members, 'axialForce');
-  const moment = largestSize(solution.members, 'bendingMoment');
-  const movement = largestSize(solution.members, 'transverseMovement');
-  const load = Math.max(shear, axial, Math.hypot(solution.applied.x, solution.applied.y));
-  const length = Math.max(...structure.members.map(member => member.length));
-  const fields: FieldName[] = [];
-  if (axial > NO_FORCE * load) fields.push('axial');
-  if (shear > NO_FORCE * load) fields.push('shear');
-  if (moment > NO_FORCE * load * length) fields.push('moment');
-  if (movement > 0) fields.push('movement');
-  return fields;
 }
 
 export interface DrawnField {
@@ -117,7 +98,7 @@ export function drawBeamField(
       const spot = spotOfReading(one.reading, drawn, style, scale);
       const leg = drawn[one.reading.piece.leg];
       if (leg === undefined) continue;
-      sheet.dot(DOTS[field], spot, 2.3);
+      sheet.dot(style.hue, spot, 2.3);
       if (one.reading.kind === 'level') levels.push(spot);
       requests.push(labelOf(one, { field, spot, leg, from, units, largest }));
     }
@@ -180,7 +161,7 @@ export function fieldUnit(field: FieldName, units: DisplayUnits): DisplayUnit {
 
 /** The quantity, and two lines in the smaller size. */
 export function drawFieldTitle(sheet: Sheet, field: FieldName, axis: number, lines: readonly string[]): void {
-  sheet.words([{ text: TITLES[field], as: 'bold' }], { at: { x: 0, y: axis - 8 } });
+  sheet.words([{ text: FIELD_STYLES[field].title, as: 'bold' }], { at: { x: 0, y: axis - 8 } });
   for (const [i, line] of lines.entries()) {
     sheet.words(plain(line), { at: { x: 0, y: axis + 7 + 14 * i }, size: 11, role: 'soft' });
   }

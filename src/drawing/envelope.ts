@@ -4,7 +4,7 @@ import { evaluate } from '../mechanics/polynomial.ts';
 import type { MemberField } from '../mechanics/solution.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import type { Acting } from './acting.ts';
-import { FIELD_WORDS, labelOf } from './beam-field-labels.ts';
+import { labelOf } from './beam-field-labels.ts';
 import { drawFieldTitle, fieldUnit, LABEL_ROOM, ORDINATE, TITLE_DOWN, TITLE_UP } from './beam-fields.ts';
 import { FIELD_STYLES, type FieldName } from './field-curves.ts';
 import { asGiven, spaced, THIN } from './figures.ts';
@@ -37,7 +37,7 @@ export function drawEnvelope(
   name: FieldName,
   at: EnvelopeAt,
 ): number {
-  const { quantity, side, line, wash } = FIELD_STYLES[name];
+  const { quantity, side, line, wash, hue } = FIELD_STYLES[name];
   const hull = hullOf(
     fields.map(({ field }) => field),
     quantity,
@@ -73,7 +73,7 @@ export function drawEnvelope(
     told.map(({ reading, acting }) => {
       const dot = spot(reading.distance, reading.value);
       const leg = legs[reading.piece.leg] ?? (legs[0] as DrawnLeg);
-      sheet.dot(FIELD_WORDS[name] === 'soft' ? 'ink' : (FIELD_WORDS[name] as 'ink' | 'bend' | 'move'), dot, 2.3);
+      sheet.dot(hue, dot, 2.3);
       const request = labelOf(
         { reading, beside: false },
         { field: name, spot: dot, leg, from: at.from, units: at.units, largest },

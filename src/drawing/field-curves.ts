@@ -3,25 +3,35 @@ import { derivative, evaluate, type Polynomial } from '../mechanics/polynomial.t
 import type { FieldPiece, MemberField } from '../mechanics/solution.ts';
 import { type Curve, curveTo, degreeOf } from './curves.ts';
 import { moved, path, px, type Spot } from './geometry.ts';
-import type { LineRole, WashRole } from './ink.ts';
+import type { FillRole, LineRole, WashRole, WordRole } from './ink.ts';
 import type { Quantity, Reading } from './readings.ts';
 import type { Sheet } from './sheet.ts';
 import { type DrawnLeg, spotOnLeg } from './view.ts';
 
 /** A field and the side it is drawn on: `side` 1 puts positive values to the left of the travel, −1 to the right. */
 export interface FieldStyle {
+  readonly title: string;
   readonly quantity: Quantity;
   readonly side: 1 | -1;
   readonly line: LineRole;
   readonly wash: WashRole;
+  /** Of its dots and words. */
+  readonly hue: FillRole & WordRole;
 }
 
 /** Compression and positive shear to the left of the travel, moments on the side in tension, movement where it goes. */
 export const FIELD_STYLES = {
-  axial: { quantity: 'axialForce', side: -1, line: 'axial', wash: 'axial' },
-  shear: { quantity: 'shearForce', side: 1, line: 'bending', wash: 'shear' },
-  moment: { quantity: 'bendingMoment', side: -1, line: 'bending', wash: 'moment' },
-  movement: { quantity: 'transverseMovement', side: 1, line: 'moved', wash: 'movement' },
+  axial: { title: 'Axial force', quantity: 'axialForce', side: -1, line: 'axial', wash: 'axial', hue: 'ink' },
+  shear: { title: 'Shear', quantity: 'shearForce', side: 1, line: 'bending', wash: 'shear', hue: 'bend' },
+  moment: { title: 'Moment', quantity: 'bendingMoment', side: -1, line: 'bending', wash: 'moment', hue: 'bend' },
+  movement: {
+    title: 'Movement',
+    quantity: 'transverseMovement',
+    side: 1,
+    line: 'moved',
+    wash: 'movement',
+    hue: 'move',
+  },
 } as const satisfies Record<string, FieldStyle>;
 
 export type FieldName = keyof typeof FIELD_STYLES;

@@ -6,7 +6,6 @@ import { FIELD_STYLES, type FieldName, sideOf, spotOfReading } from './field-cur
 import { inUnit, signed, withUnit } from './figures.ts';
 import { placesAlong, readable } from './frame-names.ts';
 import type { Spot } from './geometry.ts';
-import type { FillRole } from './ink.ts';
 import type { LabelRequest, Place } from './placing.ts';
 import { jumps, largestSize, localExtremes, type Reading } from './readings.ts';
 import type { Sheet } from './sheet.ts';
@@ -19,7 +18,6 @@ type FrameField = Exclude<FieldName, 'movement'>;
 const SAME = 1e-6;
 /** A moment below this share of the largest is not told. */
 const MINOR = 0.04;
-const DOTS: Readonly<Record<FrameField, FillRole>> = { axial: 'ink', shear: 'bend', moment: 'bend' };
 
 interface Told {
   readonly reading: Reading;
@@ -50,7 +48,7 @@ export function fieldLabels(
       return [{ reading, leg, spot, side: sideOf(reading.value, leg, style) }];
     });
   });
-  for (const { spot } of told) sheet.dot(DOTS[field], spot, 2.3);
+  for (const { spot } of told) sheet.dot(style.hue, spot, 2.3);
   return groups(told, field, largest).map(group => {
     const [first] = group as [Told, ...Told[]];
     const rank = Math.abs(first.reading.value) / largest;
@@ -58,7 +56,7 @@ export function fieldLabels(
     return {
       labels: wordings(group, field, units).map(plain),
       places,
-      role: field === 'axial' ? 'ink' : 'bend',
+      role: style.hue,
       rank,
       optional: rank < 0.999,
     };

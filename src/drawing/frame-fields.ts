@@ -5,6 +5,7 @@ import type { Structure } from '../model/structure.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import { type Acting, PANEL_WIDTH, SHEET_WIDTH } from './acting.ts';
 import { drawJoints, drawOutline } from './bones.ts';
+import { fieldsToDraw } from './field-choice.ts';
 import { drawFieldOnLegs, FIELD_STYLES, type FieldName } from './field-curves.ts';
 import { asGiven, spaced, THIN } from './figures.ts';
 import { barLabels, fieldLabels } from './frame-field-labels.ts';
@@ -28,20 +29,12 @@ export interface Panel {
 
 /** Largest ordinate, px. */
 const ORDINATE: Readonly<Record<FieldName, number>> = { axial: 15, shear: 18, moment: 24, movement: 16 };
-const TITLES: Readonly<Record<FieldName, string>> = {
-  axial: 'Axial force',
-  shear: 'Shear',
-  moment: 'Moment',
-  movement: 'Movement',
-};
 /** The frame takes this share of a panel's width, and no more than so many px of height. */
 const SHARE = 0.62;
 const TALLEST = 190;
 /** Over the frame: labels, and the two lines of the title above them, px. */
 const HEAD = 48;
 const BARS_HEAD = 22;
-/** Of the largest of its kind, a force smaller than this is rounding. */
-const NO_FORCE = 1e-9;
 
 export function frameFields(structure: Structure, acting: Acting, units: DisplayUnits, palette: Palette): Panel[] {
   const { solution } = acting;
@@ -63,20 +56,6 @@ function isWide(structure: Structure): boolean {
 
 function isBar({ kind }: { kind: 'member' | 'bar' }): boolean {
   return kind === 'bar';
-}
-
-function fieldsToDraw(structure: Structure, solution: Solution): FieldName[] {
-  const axial = largestSize(solution.members, 'axialForce');
-  const shear = largestSize(solution.members, 'shearForce');
-  const moment = largestSize(solution.members, 'bendingMoment');
-  const force = Math.max(axial, shear, Math.hypot(solution.applied.x, solution.applied.y));
-  const length = Math.max(0, ...structure.members.map(member => member.length));
-  const fields: FieldName[] = [];
-  if (axial > NO_FORCE * force) fields.push('axial');
-  if (shear > NO_FORCE * force) fields.push('shear');
-  if (moment > NO_FORCE * force * length) fields.push('moment');
-  if (largestMovement(solution) > 0) fields.push('movement');
-  return fields;
 }
 
 function drawPanel(
@@ -104,11 +83,11 @@ function drawPanel(
   drawJoints(sheet, structure, view);
   const exaggeration = roundedExaggeration(ORDINATE.movement / (largestMovement(solution) * view.scale));
   const unit = { axial: units.force, shear: units.force, moment: units.moment, movement: units.deflection }[field];
-  sheet.words([{ text: TITLES[field], as: 'bold' }], { at: { x: 0, y: top - 16 } });
+  sheet.words([{ text: FIELD_STYLES[field].title, as: 'bold' }], { at: { x: 0, y: top - 16 } });
   const line = `${spaced(unit.text)}, ${name}; ${noteOf(structure, field, exaggeration)}`;
   sheet.words(plain(line), { at: { x: 0, y: top - 1 }, size: 11, role: 'soft' });
   drawField(sheet, structure, solution, field, { legs, view, units, exaggeration });
-  return sheet.svg(`${TITLES[field]} of ${structure.title ?? structure.name} under ${name}`);
+  return sheet.svg(`${FIELD_STYLES[field].title} of ${structure.title ?? structure.name} under ${name}`);
 }
 
 /** What the title has to say of the way the field is drawn. */

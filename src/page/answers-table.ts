@@ -3,7 +3,7 @@ import type { Structure } from '../model/structure.ts';
 import type { Answer, NoteResult, StructureResult } from '../note/result.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import { showQuantity } from '../quantity/display.ts';
-import { full, significant } from '../quantity/number.ts';
+import { significant } from '../quantity/number.ts';
 import { sentence, useText } from './head.ts';
 import { escapeHtml, listed, plainHtml, typeset } from './html.ts';
 import { stateMark, stateOf, useBar } from './marks.ts';
@@ -92,12 +92,19 @@ function shownResult(answer: Answer, units: DisplayUnits): string {
   return display;
 }
 
+/** What lies past this many digits is not established by the two methods' agreement. */
+const ALL_DIGITS = 10;
+
 /** `4.443278203 mm down`. */
 export function allDigits(answer: Pick<Answer, 'quantity' | 'display' | 'unit'>, units: DisplayUnits): string {
   const { quantity, display } = answer;
   if (quantity === undefined) return '';
-  const number = full(Math.abs(quantity.value) / unitOf(answer, units).size);
+  const number = trimmed(significant(Math.abs(quantity.value) / unitOf(answer, units).size, ALL_DIGITS));
   return display.replace(/\d+(?:\.\d+)?(?:e-?\d+)?/, number);
+}
+
+function trimmed(number: string): string {
+  return number.includes('.') && !number.includes('e') ? number.replace(/\.?0+$/, '') : number;
 }
 
 /** The unit that the shown words are in. */

@@ -36,7 +36,7 @@ export function inputSchedule(note: NoteResult, result: StructureResult, open: b
   ];
   const without = bare === 0 ? '' : `; ${counted(bare, 'load')} without a source`;
   return (
-    `<details class="tl-inputs"${open ? ' open' : ''}><summary>Inputs<small>${parts.join(', ')}${without}</small></summary>` +
+    `<details class="tl-inputs"${open ? ' open' : ''}><summary>Inputs <small>${parts.join(', ')}${without}</small></summary>` +
     valueTable(note, values, result) +
     sectionTable(structure, result.display) +
     loadTable(loads, result) +

@@ -19,7 +19,7 @@ const MOST_CHOICES = 24;
 
 /** `index`: of the structure in the note, which keeps the groups of radio buttons apart. */
 export function plates(result: StructureResult, structure: Structure, index: number): string {
-  const all = choicesOf(result);
+  const all = choicesOf(result, structure);
   const choices = all.slice(0, MOST_CHOICES);
   if (choices.length === 0) return `<div class="tl-pick">${figure(drawUnloaded(structure, result), '')}</div>`;
   const left = all.length - choices.length;
@@ -43,8 +43,15 @@ export function plates(result: StructureResult, structure: Structure, index: num
   );
 }
 
-/** Combinations first, in the order of the note, then cases alone. */
-function choicesOf({ combinations }: StructureResult): Choice[] {
+/** Combinations first, in the order of the note, then cases alone. Of a structure without a solution, its cases. */
+function choicesOf({ combinations }: StructureResult, { cases }: Structure): Choice[] {
+  if (combinations.length === 0)
+    return cases.map(({ name }, own) =>
+      unsolvedCase(
+        name,
+        cases.map((_, i) => (i === own ? 1 : 0)),
+      ),
+    );
   const ordered = [
     ...combinations.filter(({ kind }) => kind === 'combination'),
     ...combinations.filter(({ kind }) => kind === 'case'),
@@ -56,6 +63,13 @@ function choicesOf({ combinations }: StructureResult): Choice[] {
       alternative,
     })),
   );
+}
+
+function unsolvedCase(name: string, factors: readonly number[]): Choice {
+  const solution = (): Solution => {
+    throw new Error(`case ${name} of a structure that is not solved was asked for its solution`);
+  };
+  return { name, text: '', alternative: { label: undefined, text: name, factors, solution } };
 }
 
 function caption({ name, text, alternative }: Choice): string {

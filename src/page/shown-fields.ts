@@ -27,7 +27,7 @@ export function shownField(result: StructureResult, structure: Structure, show: 
   });
   const what = `${show.envelope ? 'Envelope of ' : ''}${show.measure.kind} in ${show.measure.in?.text ?? ''}`;
   const title = what.charAt(0).toUpperCase() + what.slice(1);
-  return `<div class="tl-keep"><h3>${escapeHtml(title)}<small>${escapeHtml(under)}</small></h3>${drawings.join('')}</div>`;
+  return `<div class="tl-keep"><h3>${escapeHtml(title)} <small>${escapeHtml(under)}</small></h3>${drawings.join('')}</div>`;
 }
 
 const FIELDS: Readonly<Record<MeasureKind, FieldName | undefined>> = {
