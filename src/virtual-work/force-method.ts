@@ -6,7 +6,7 @@ import { addLoad, emptyLoading, type Loading } from './loading.ts';
 import type { Preference } from './preference.ts';
 import { type ForceState, type PrimaryStructure, primaryForces, primaryStructureOf } from './primary.ts';
 import { flexibilityOf, isUnknown, type Statics, staticsOf } from './statics.ts';
-import { addState, type UnitState, unitStates, workOf } from './unit-states.ts';
+import { addState, forcesOfUnit, type UnitState, unitStates, workOf } from './unit-states.ts';
 import { largestForce, strainsOf } from './work.ts';
 
 /** The response to one loading. */
@@ -178,12 +178,9 @@ function gapsAt(states: readonly UnitState[], strains: Float64Array): Float64Arr
 
 function flexibilities({ statics }: PrimaryStructure, states: readonly UnitState[]): Float64Array {
   const result = new Float64Array((states.length * (states.length + 1)) / 2);
-  const unknowns = new Float64Array(statics.unknownCount);
   let at = 0;
   for (let row = 0; row < states.length; row++) {
-    unknowns.fill(0);
-    addState(states[row]!, 1, unknowns);
-    const strains = strainsOf(statics, { unknowns, spans: new Map(), ground: undefined });
+    const strains = strainsOf(statics, forcesOfUnit(statics, states[row]!));
     for (let column = 0; column <= row; column++) result[at++] = workOf(states[column]!, strains);
   }
   return result;

@@ -6,13 +6,13 @@
 // proved apart, by `largestGap`: forces that leave no gap anywhere belong to movements that fit together, and if they
 // also balance the loads (which the caller's own residual says) they are the only ones that do both.
 import type { UnitAction } from '../model/question.ts';
-import { movementsFrom } from './elimination.ts';
 import type { InternalForces } from './internal-forces.ts';
 import { addLoad, emptyLoading, type Loading } from './loading.ts';
 import { bound, derivative, productIntegral, valueAt } from './polynomial.ts';
 import { type PrimaryStructure, virtualSystem } from './primary.ts';
 import type { SpanPiece } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, isUnknown, type StaticLeg, type Statics, unitOf } from './statics.ts';
+import { movementsFrom } from './substitution.ts';
 import { type Movement, type RealForces, roundingOf, virtualWork, workOnGround } from './work.ts';
 
 /** The strains that given forces cause, by unknown (see `strainsOf` in work.ts), with the forces themselves. */

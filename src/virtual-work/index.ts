@@ -8,5 +8,5 @@ export { type ForceState, type PrimaryStructure, primaryStructure, virtualSystem
 export { type UnknownForce, unknownForce } from './redundants.ts';
 export { type SecondMovement, SecondRoad } from './second-road.ts';
 export { withLeastThrusts } from './thrusts.ts';
-export { addState, type UnitState } from './unit-states.ts';
+export { addState, forcesOfUnit, type UnitState } from './unit-states.ts';
 export type { Movement } from './work.ts';

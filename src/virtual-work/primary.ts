@@ -2,11 +2,12 @@
 // equilibrium alone gives its forces under any loads, real or virtual.
 import type { UnitAction } from '../model/question.ts';
 import type { Structure } from '../model/structure.ts';
-import { balance, type Elimination, eliminate } from './elimination.ts';
+import { type Elimination, eliminate } from './elimination.ts';
 import { addAction, emptyLoading, type Loading } from './loading.ts';
 import { type Preference, stiffestFromTheGround } from './preference.ts';
 import { type SpanForces, spanForces } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, type Statics, staticsOf, toPhysicalUnits } from './statics.ts';
+import { balance } from './substitution.ts';
 
 export interface PrimaryStructure {
   readonly statics: Statics;

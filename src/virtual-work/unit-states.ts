@@ -1,7 +1,8 @@
 // The unit states: what one unit of a redundant, and none of the others, causes in the primary structure.
-import { selfBalance } from './elimination.ts';
-import type { PrimaryStructure } from './primary.ts';
-import { toPhysicalUnits, unitOf } from './statics.ts';
+
+import type { ForceState, PrimaryStructure } from './primary.ts';
+import { type Statics, toPhysicalUnits, unitOf } from './statics.ts';
+import { selfBalance } from './substitution.ts';
 
 /** Forces in balance among themselves: `forces[i]`, N or N m, is that of unknown `unknowns[i]`. */
 export interface UnitState {
@@ -31,6 +32,13 @@ export function unitStates({ statics, elimination }: PrimaryStructure): UnitStat
     }
     return { redundant, unknowns, forces };
   });
+}
+
+/** The same as forces by unknown. */
+export function forcesOfUnit(statics: Statics, state: UnitState): ForceState {
+  const unknowns = new Float64Array(statics.unknownCount);
+  addState(state, 1, unknowns);
+  return { unknowns, spans: new Map(), ground: undefined };
 }
 
 /** Work of the state on strains given by unknown. */

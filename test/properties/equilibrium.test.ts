@@ -3,10 +3,11 @@ import { expect } from 'vitest';
 import { fieldAt } from '../../src/mechanics/field.ts';
 import type { FieldPiece, Solution } from '../../src/mechanics/solution.ts';
 import type { Load, Structure } from '../../src/model/structure.ts';
+import { explicit } from './motions.ts';
 import { expectNear, expectSame, largest, leverOf, read, type Scales, scalesOf, times } from './readings.ts';
 import { allowed, analysed, holds } from './run.ts';
 import { determinateStructures, structures } from './structures.ts';
-import { explicit, merged } from './transform.ts';
+import { merged } from './transform.ts';
 
 holds('reactions balance the loads', structures(), structure => {
   const analysis = analysed(structure);

@@ -2,10 +2,11 @@
 // order, in other units.
 import fc from 'fast-check';
 import type { Structure } from '../../src/model/structure.ts';
+import { explicit, mirrored, rotated, translated } from './motions.ts';
 import { expectSame, leverOf, type Reading, read, times } from './readings.ts';
 import { allowed, analysed, holds } from './run.ts';
 import { structures } from './structures.ts';
-import { explicit, inUnits, mirrored, reordered, reversed, rotated, subdivided, translated } from './transform.ts';
+import { inUnits, reordered, reversed, subdivided } from './transform.ts';
 
 /** That the other structure's readings, as `back` brings them to the first one's terms, are those of the first. */
 function sameAs(

@@ -4,9 +4,10 @@ import { expect } from 'vitest';
 import { analyse } from '../../src/mechanics/analyse.ts';
 import type { Structure } from '../../src/model/structure.ts';
 import { primaryStructure } from '../../src/virtual-work/index.ts';
+import { rotated } from './motions.ts';
 import { holds } from './run.ts';
 import { determinateStructures, structures } from './structures.ts';
-import { inUnits, rotated } from './transform.ts';
+import { inUnits } from './transform.ts';
 
 const unloaded = (structure: Structure): Structure => ({ ...structure, loads: [] });
 

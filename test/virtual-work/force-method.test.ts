@@ -4,6 +4,8 @@ import { describe, expect, test } from 'vitest';
 import type { Structure } from '../../src/model/structure.ts';
 import {
   type ForceMethod,
+  type ForceState,
+  forcesOfUnit,
   givenForces,
   internalForces,
   largestGap,
@@ -18,6 +20,7 @@ import {
   withLeastThrusts,
 } from '../../src/virtual-work/index.ts';
 import { valueAt } from '../../src/virtual-work/polynomial.ts';
+import type { Statics } from '../../src/virtual-work/statics.ts';
 import { at, build, HELD, type Sketch } from './build.ts';
 
 const EI = 4.2e6;
@@ -74,6 +77,78 @@ describe('redundants', () => {
     expect(unknownForce(forceMethod.primary.statics, state!.redundant).kind).toBe('reaction');
   });
 });
+
+describe('what a working shows', () => {
+  test('another choice of redundant: the thrust at a foot, with M₀, m₁ and m as polynomials', () => {
+    const [h, L, H] = [3.4, 6, 9.2e3];
+    const structure = build({
+      points: { A: [0, 0], B: [0, h], C: [L, h], D: [L, 0] },
+      members: { P: { chain: 'A B', EI }, G: { chain: 'B C', EI: 2 * EI }, Q: { chain: 'C D', EI } },
+      supports: { A: 'pinned', D: 'pinned' },
+      loads: {
+        all: [
+          { line: 'G', size: w },
+          { force: [H, 0], at: 'B' },
+        ],
+      },
+    });
+    const thrust = (statics: Statics) =>
+      statics.firstReaction + statics.grounds.findIndex(({ point, x }) => point === 3 && x === 1);
+    const forceMethod = prepare(structure, statics => {
+      const freed = thrust(statics);
+      return [...stiffestFromTheGround(statics).map(group => group.filter(unknown => unknown !== freed)), [freed]];
+    })!;
+    const { statics } = forceMethod.primary;
+    const [state] = forceMethod.unitStates;
+    expect(unknownForce(statics, state!.redundant)).toMatchObject({ kind: 'reaction', ground: { point: 3, x: 1 } });
+
+    // D rolls; its thrust is to the right here. Origins at the starts of P (from A), G (from B) and Q (from C).
+    const D0 = (H * h) / L + (w * L) / 2;
+    const moments = (forces: ForceState) =>
+      internalForces(statics, forces).members.map(({ pieces }) => pieces[0]!.bendingMoment);
+    near(
+      moments(forceMethod.case(0).primary),
+      [
+        [0, H],
+        [H * h, w * L - D0, -w / 2],
+        [0, 0],
+      ],
+      H * h,
+    );
+    near(
+      moments(forcesOfUnit(statics, state!)),
+      [
+        [0, 1],
+        [h, 0],
+        [h, -1],
+      ],
+      h,
+    );
+    const virtual = virtualSystem(forceMethod.primary, [{ at: at(structure, 'B'), x: 1, y: 0, moment: 0 }]);
+    near(
+      moments(virtual),
+      [
+        [0, 1],
+        [h, -h / L],
+        [0, 0],
+      ],
+      h,
+    );
+
+    const k = (2 * h) / L;
+    const inwards = H / 2 + (w * L ** 2) / (4 * h * (2 * k + 3));
+    expect(forceMethod.case(0).redundants[0]! / -inwards).toBeCloseTo(1, 12);
+  });
+});
+
+function near(found: readonly (readonly number[])[], wanted: readonly (readonly number[])[], scale: number): void {
+  for (const [member, polynomial] of wanted.entries()) {
+    for (let power = 0; power < Math.max(found[member]!.length, polynomial.length); power++) {
+      const difference = (found[member]![power] ?? 0) - (polynomial[power] ?? 0);
+      expect(Math.abs(difference), `member ${member}, power ${power}`).toBeLessThanOrEqual(1e-12 * scale);
+    }
+  }
+}
 
 describe('internal forces', () => {
   test('fixed beam under a load that grows along it', () => {
