@@ -79,6 +79,9 @@ export interface UnitAction {
   readonly y: number;
   /** Anticlockwise. */
   readonly moment: number;
-  /** Where the member is hinged at the place and runs on: which of its two ends the couple turns, in the direction of travel; `before` if not said. */
+  /**
+   * Where the member is hinged at the place and runs on: which of its two ends the couple turns, in the direction of
+   * travel; `before` if not said.
+   */
   readonly side?: 'before' | 'after';
 }

@@ -3,32 +3,36 @@ import { expect, test } from 'vitest';
 import { analyse } from '../../src/mechanics/analyse.ts';
 import type { Structure } from '../../src/model/structure.ts';
 import { type InternalForces, SecondRoad } from '../../src/virtual-work/index.ts';
-import { at, build, type Sketch } from './build.ts';
+import { at, build } from './build.ts';
+import { frame, girder } from './large.ts';
 
 const never = () => {
   throw new Error('the force method needs no given forces');
 };
 
-/** 31 bays and 31 storeys: 2,976 freedoms, 2,883 redundants. */
-function largeFrame(EA: number | undefined): Structure {
-  const axial = EA === undefined ? {} : { EA };
-  const sketch: Sketch = { points: {}, members: {}, supports: {} };
-  for (let bay = 0; bay < 32; bay++) {
-    sketch.supports[`${bay}/0`] = 'fixed';
-    for (let storey = 0; storey < 32; storey++) {
-      sketch.points[`${bay}/${storey}`] = [5 * bay, 3.2 * storey];
-      if (storey === 0) continue;
-      sketch.members![`C${bay}/${storey}`] = { chain: `${bay}/${storey - 1} ${bay}/${storey}`, EI: 3e6, ...axial };
-      if (bay === 0) continue;
-      sketch.members![`B${bay}/${storey}`] = { chain: `${bay - 1}/${storey} ${bay}/${storey}`, EI: 6e6, ...axial };
-    }
-  }
-  const wind = Array.from({ length: 31 }, (_, storey) => ({ force: [9e3, 0] as const, at: `0/${storey + 1}` }));
-  return build({ ...sketch, loads: { wind: [...wind, { line: 'B3/7', size: 4e3 }] } });
-}
+test.each<[string, Structure, string]>([
+  ['frame of 5 bays and 5 storeys', frame(5, 5, { posts: 3e6, beams: 6e6, EA: 7e8 }, 'fixed'), '0/5'],
+  ['the same, axially stiff', frame(5, 5, { posts: 3e6, beams: 6e6 }, 'fixed'), '0/5'],
+  [
+    'frame of 10 bays and 10 storeys on pinned feet',
+    frame(10, 10, { posts: 3e6, beams: 6e6, EA: 7e8 }, 'pinned'),
+    '0/10',
+  ],
+  ['tower of 60 storeys', frame(1, 60, { posts: 3e6, beams: 6e6, EA: 7e8 }, 'fixed'), '0/60'],
+  ['girder of 24 panels', girder(24, false), 'L12'],
+  ['girder of 120 crossed panels', girder(120, true), 'L60'],
+])('%s: by the force method', (_, structure, name) => {
+  const point = structure.points.findIndex(candidate => candidate.name === name);
+  const [x, y] = analyse(structure).cases[0]!.movements.subarray(3 * point, 3 * point + 2);
+  const action = { at: { kind: 'point', point } as const, x: 0.6, y: -0.8, moment: 0 };
+  const found = new SecondRoad(structure).movement([1], never, [action])!;
+  expect(found.value / (0.6 * x! - 0.8 * y!)).toBeCloseTo(1, 10);
+});
 
+// 2,976 freedoms and 2,883 redundants.
 test.each([7e8, undefined])('a frame past the force method, EA %s: from the forces of the first road', EA => {
-  const structure = largeFrame(EA);
+  const stiffness = EA === undefined ? { posts: 3e6, beams: 6e6 } : { posts: 3e6, beams: 6e6, EA };
+  const structure = frame(31, 31, stiffness, 'fixed');
   const [solution] = analyse(structure).cases;
   const road = new SecondRoad(structure);
   expect(road.forceMethod).toBeUndefined();
