@@ -67,26 +67,25 @@ export function findFreeMovements(system: System, known: readonly Float64Array[]
   const basis: Float64Array[] = [];
   for (const vector of known) addTo(basis, vector, scale, []);
   const found: Float64Array[] = [];
+  const shed = (v: Float64Array, strains: Float64Array) => {
+    const strained = factorisation.solve(gatherStrains(rows, weights, strains, size));
+    return v.map((value, k) => value - strained[k]!);
+  };
 
   for (let seed = 1; found.length < limit; ) {
     let block: Float64Array[] = [];
     for (let k = 0; k < BLOCK && basis.length + block.length < size; k++) {
       addTo(block, scatteredVector(size, seed++), scale, basis);
     }
-    for (let round = 0; round < ROUNDS; round++) {
+    let strains = block.map(v => strainsOf(rows, weights, v));
+    for (let round = 0; round < ROUNDS && strains.some(strain => norm(strain) > CLEAN); round++) {
       const next: Float64Array[] = [];
-      for (const v of block) {
-        const strained = factorisation.solve(gatherStrains(rows, weights, strainsOf(rows, weights, v), size));
-        addTo(
-          next,
-          v.map((value, k) => value - strained[k]!),
-          scale,
-          basis,
-        );
-      }
+      block.forEach((v, i) => {
+        addTo(next, shed(v, strains[i]!), scale, basis);
+      });
       block = next;
+      strains = block.map(v => strainsOf(rows, weights, v));
     }
-    const strains = block.map(v => strainsOf(rows, weights, v));
     separate(strains, block);
     const free = block.filter((_, k) => norm(strains[k]!) <= FREE_STRAIN);
     found.push(...free);
@@ -99,6 +98,9 @@ export function findFreeMovements(system: System, known: readonly Float64Array[]
 /** Vectors worked on at once: more than the movements of a chain of ten thousand legs that are too soft to shrink. */
 const BLOCK = 8;
 const ROUNDS = 5;
+
+/** Strains at which a free movement has shed all that matters to its description. */
+const CLEAN = 1e-3 * FREE_STRAIN;
 
 /** Added to the diagonal, relative to it: above the rounding of a factorisation, below the stiffness of what is not free. */
 const TRACE = 1e-12;

@@ -91,9 +91,12 @@ function apply(sheet: Sheet, load: Load): void {
         return;
       }
       const { point, member } = load.at;
-      const leg = member === undefined ? -1 : legAtPoint(legs, member, point);
-      if (leg < 0) sheet.nodal[freedoms.joint[point]!]! += load.moment;
-      else if (legs.to[leg] === point) applyCouple(sheet, leg, legs.length[leg]!, 'end', load.moment);
+      if (member === undefined) {
+        sheet.nodal[freedoms.joint[point]!]! += load.moment;
+        return;
+      }
+      const leg = legAtPoint(sheet, member, point);
+      if (legs.to[leg] === point) applyCouple(sheet, leg, legs.length[leg]!, 'end', load.moment);
       else applyCouple(sheet, leg, 0, 'start', load.moment);
       return;
     }
@@ -208,14 +211,13 @@ function applyCouple(
   sheet.loaded[leg] = 1;
 }
 
-/** The leg of a member that ends at a point, or else the one that starts there; −1 for none. */
-function legAtPoint(legs: Legs, member: number, point: number): number {
-  let starting = -1;
-  for (let e = legs.first[member]!; e < legs.first[member + 1]!; e++) {
-    if (legs.to[e] === point) return e;
-    if (legs.from[e] === point) starting = e;
-  }
-  return starting;
+/** The leg of a member that ends at a point, or else the one that starts there. */
+function legAtPoint({ structure, legs }: Sheet, member: number, point: number): number {
+  for (let e = legs.first[member]!; e < legs.first[member + 1]!; e++) if (legs.to[e] === point) return e;
+  const first = legs.first[member]!;
+  if (legs.from[first] === point) return first;
+  const { members, points } = structure;
+  throw new Error(`A couple names ${members[member]!.name} at ${points[point]!.name}, which it does not pass`);
 }
 
 function addApplied(sheet: Sheet, atX: number, atY: number, x: number, y: number): void {

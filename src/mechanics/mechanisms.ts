@@ -8,7 +8,7 @@ import type { Mechanism } from './solution.ts';
 import type { System } from './system.ts';
 
 /** More than this many ways to move are not listed. */
-export const MAX_MECHANISMS = 24;
+export const MAX_MECHANISMS = 12;
 
 /** Empty where the structure is stable; at most `MAX_MECHANISMS`. */
 export function findMechanisms(system: System): readonly Mechanism[] {

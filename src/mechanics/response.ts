@@ -48,21 +48,23 @@ export function respond(system: System, loading: Loading | undefined, imposed: I
   // Each step solves for what the one before left. Strains and forces are added up step by step, not worked out from the
   // sum of movements, so that what a small step adds is not lost in the rounding of a large movement.
   let left = Number.POSITIVE_INFINITY;
+  let rest = gather(reduction, state.unbalanced);
   for (let step = 0; step < MOST_STEPS; step++) {
     const movement = new Float64Array(freedoms.count);
-    expand(reduction, factorisation.solve(gather(reduction, state.unbalanced)), movement);
+    expand(reduction, factorisation.solve(rest), movement);
     addStrains(legs, ends, movement, state.strains);
     addShortenings(system, movement, state.shortenings);
     for (let f = 0; f < movement.length; f++) state.movement[f]! += movement[f]!;
     balance(system, loading, state);
+    rest = gather(reduction, state.unbalanced);
     const before = left;
-    left = largestUnknownForce(system, state.unbalanced) / largest;
+    left = largestOf(system, rest) / largest;
     if (step > 0 && (left <= BALANCED || left > 0.5 * before)) break;
   }
   if (thrusts !== undefined) addThrusts(thrusts, legs, ends, state.natural, state.unbalanced);
 
-  const rest = largestForces(system, state.unbalanced, true);
-  const residual = Math.max(rest.force, rest.moment / freedoms.size) / largest;
+  const free = largestForces(system, state.unbalanced, true);
+  const residual = Math.max(free.force, free.moment / freedoms.size) / largest;
   const ground = state.unbalanced;
   addSpringForces(system, state.shortenings, ground, 1);
   for (let f = 0; f < ground.length; f++) ground[f] = 0 - ground[f]!;
@@ -135,15 +137,14 @@ function largestForces(system: System, force: Float64Array, freeOnly: boolean) {
   return largest;
 }
 
-/** Couples count as forces at an arm of the size of the structure. */
-function largestUnknownForce(system: System, force: Float64Array): number {
+/** Of forces on the unknowns; couples count as forces at an arm of the size of the structure. */
+function largestOf(system: System, forces: Float64Array): number {
   const { freedoms, reduction } = system;
   const { first, point, size } = freedoms;
-  const gathered = gather(reduction, force);
   let largest = 0;
-  for (let k = 0; k < gathered.length; k++) {
+  for (let k = 0; k < forces.length; k++) {
     const f = reduction.freedoms[k]!;
-    const value = Math.abs(gathered[k]!);
+    const value = Math.abs(forces[k]!);
     largest = Math.max(largest, f - first[point[f]!]! < 2 ? value : value / size);
   }
   return largest;

@@ -88,7 +88,11 @@ function innerBreaks(structure: Structure, legs: Legs): ReadonlyMap<number, read
   return found;
 }
 
+/** In ascending order, without those that one before stands for. */
 function distinct(distances: number[], tolerance: number): number[] {
-  distances.sort((a, b) => a - b);
-  return distances.filter((distance, k) => k === 0 || distance - distances[k - 1]! > tolerance);
+  const kept: number[] = [];
+  for (const distance of distances.sort((a, b) => a - b)) {
+    if (kept.length === 0 || distance - kept[kept.length - 1]! > tolerance) kept.push(distance);
+  }
+  return kept;
 }
