@@ -17,7 +17,7 @@ import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { answerInWords, displayKind, show } from './phrases.ts';
 import type { Alternative, Answer, AnswerPlace, Check } from './result.ts';
-import { differenceOf, MOST_DIFFERENCE } from './second-road.ts';
+import { hold, MOST_DIFFERENCE } from './second-road.ts';
 import type { Question, Series } from './series.ts';
 import { stiffnessFactor } from './stiffness.ts';
 import type { StructureState } from './structure-state.ts';
@@ -38,7 +38,7 @@ export interface AnswerInputs {
 const AT_THE_LIMIT = 1e-9;
 
 export function answerTo(inputs: AnswerInputs): Answer {
-  const { question, series } = inputs;
+  const { question } = inputs;
   const common = {
     structure: inputs.structureIndex,
     name: question.name.text,
@@ -50,8 +50,9 @@ export function answerTo(inputs: AnswerInputs): Answer {
     range: question.range,
     nameRange: question.name.range,
   } as const;
-  const checked = series === undefined ? undefined : check(inputs, series);
-  if (series === undefined || checked === undefined) return { ...common, ...WITHHELD, unit: unitOf(question.what) };
+  const borneOut = inputs.series === undefined ? undefined : checked(inputs, inputs.series);
+  if (borneOut === undefined) return { ...common, ...WITHHELD, unit: unitOf(question.what) };
+  const { series, check } = borneOut;
   const value = series.values[series.governing]!;
   const limit = question.kind === 'require' ? readLimit(inputs, question.limit, series, value) : undefined;
   return {
@@ -63,7 +64,7 @@ export function answerTo(inputs: AnswerInputs): Answer {
     place: placeOf(series),
     sides: sidesInWords(inputs, series),
     asked: asked(series),
-    check: checked,
+    check,
     ...judge(inputs, series, value, limit),
   };
 }
@@ -347,26 +348,46 @@ function limitSource(limit: Limit, shown: string): string {
 
 // Checks
 
+interface Checked {
+  readonly check: Check;
+  /** The question's values, with what is rounding and nothing else taken as nothing. */
+  readonly series: Series;
+}
+
 /** The worst of the checks of all that took part; undefined, and reported, where they do not bear the answer out. */
-function check(inputs: AnswerInputs, series: Series): Check | undefined {
-  let [difference, residual] = [0, 0];
+function checked(inputs: AnswerInputs, series: Series): Checked | undefined {
+  let [difference, residual, rounding] = [0, 0, 0];
   for (const taken of series.taken) {
-    difference = Math.max(difference, differenceOf(taken) ?? 0);
+    const held = hold(taken);
+    difference = Math.max(difference, held.difference);
     residual = Math.max(residual, taken.solved.solution(taken.factors).residual);
+    rounding = Math.max(rounding, held.rounding);
   }
-  if (difference <= MOST_DIFFERENCE && residual <= MOST_DIFFERENCE) return { difference, residual };
+  const borneOut = difference <= MOST_DIFFERENCE && residual <= MOST_DIFFERENCE;
+  if (borneOut) return { check: { difference, residual }, series: withoutRounding(series, rounding) };
   const { question, report } = inputs;
-  const why =
-    difference > MOST_DIFFERENCE
-      ? `the two methods differ by ${significant(difference, 2)} of it`
-      : `equilibrium leaves ${significant(residual, 2)} of the loads`;
   report.error(
     'answer-withheld',
     question.name.range,
-    `${question.name.text} is withheld: ${why}, and at most ${MOST_DIFFERENCE} is accepted.`,
+    `${question.name.text} is withheld: ${whyWithheld(difference, residual)}.`,
     {
       hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
     },
   );
   return undefined;
+}
+
+function whyWithheld(difference: number, residual: number): string {
+  if (difference === Infinity) return 'the second method finds no answer to hold it against';
+  const accepted = `and at most ${MOST_DIFFERENCE} is accepted`;
+  if (difference > MOST_DIFFERENCE) return `the two methods differ by ${significant(difference, 2)} of it, ${accepted}`;
+  return Number.isFinite(residual)
+    ? `equilibrium leaves ${significant(residual, 2)} of the loads, ${accepted}`
+    : 'equilibrium cannot be shown';
+}
+
+function withoutRounding(series: Series, rounding: number): Series {
+  const { value, dimension } = series.values[series.governing]!;
+  if (series.measure === undefined || value === 0 || Math.abs(value) > rounding) return series;
+  return { ...series, values: series.values.with(series.governing, { value: 0, dimension }) };
 }

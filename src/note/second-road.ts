@@ -3,7 +3,6 @@ import type { ResolvedMeasure, UnitAction } from '../model/question.ts';
 import { isMovement } from '../model/questions.ts';
 import { positionAlong } from '../model/spans.ts';
 import type { Location, Structure } from '../model/structure.ts';
-import { movement } from '../virtual-work/index.ts';
 import type { Solved } from './solved.ts';
 
 /** Past this relative difference, or residual, an answer is withheld. */
@@ -27,21 +26,39 @@ interface Place {
   readonly distance: number;
 }
 
-/**
- * Relative difference of the two roads to a movement: 0 where the measure is none, undefined where the structure is past
- * the bound of the second road.
- */
-export function differenceOf({ measure, place, value, factors, solved }: Taken): number | undefined {
+/** What the second road says of a measure. */
+export interface Held {
+  /** Relative difference of the two roads, 0 where the measure is no movement, Infinity where the second has no answer. */
+  readonly difference: number;
+  /** The size below which a movement is rounding and nothing else, m or rad. */
+  readonly rounding: number;
+}
+
+export function hold({ measure, place, value, factors, solved }: Taken): Held {
   const actions = unitActions(measure, place, solved.analysis.structure);
-  if (actions === undefined) return 0;
-  const forceMethod = solved.forceMethod();
-  if (forceMethod === undefined) return undefined;
-  const other = movement(forceMethod, factors, actions);
-  if (Number.isNaN(other)) return undefined;
-  const magnitudes = solved.magnitudes(solved.solution(factors));
+  if (actions === undefined) return { difference: 0, rounding: 0 };
+  // Over a hinge a member that runs on has a rotation on either side: the one that was meant is the nearer.
+  const ways =
+    measure.kind === 'rotation' && place !== undefined
+      ? [onSide(actions, 'before'), onSide(actions, 'after')]
+      : [actions];
+  const solution = solved.solution(factors);
+  const magnitudes = solved.magnitudes(solution);
   const largest = measure.kind === 'rotation' ? magnitudes.rotation : magnitudes.movement;
-  const scale = Math.max(Math.abs(value), Math.abs(other), SMALL_ANSWER * largest);
-  return scale === 0 ? 0 : Math.abs(value - other) / scale;
+  let held: Held = { difference: Infinity, rounding: 0 };
+  for (const way of ways) {
+    const other = solved.secondRoad.movement(factors, () => solution, way);
+    if (other === undefined || Number.isNaN(other.value)) continue;
+    const apart = Math.abs(value - other.value);
+    const scale = Math.max(Math.abs(value), Math.abs(other.value), SMALL_ANSWER * largest);
+    const difference = (apart <= other.rounding ? 0 : apart / scale) + other.gap;
+    if (difference < held.difference) held = { difference, rounding: other.rounding };
+  }
+  return held;
+}
+
+function onSide(actions: readonly UnitAction[], side: 'before' | 'after'): readonly UnitAction[] {
+  return actions.map(action => ({ ...action, side }));
 }
 
 /** The virtual loads of a movement, in the sense in which the measure is positive; undefined for what is no movement. */

@@ -4,17 +4,18 @@ import { analyse } from '../mechanics/analyse.ts';
 import type { Analysis, Solution } from '../mechanics/solution.ts';
 import { combine } from '../mechanics/superposition.ts';
 import type { Structure } from '../model/structure.ts';
-import { type ForceMethod, prepare } from '../virtual-work/index.ts';
+import { SecondRoad } from '../virtual-work/index.ts';
 import { type Magnitudes, magnitudesOf } from './magnitudes.ts';
 
 export class Solved {
   readonly analysis: Analysis;
+  readonly secondRoad: SecondRoad;
   readonly #solutions = new Map<string, Solution>();
   readonly #magnitudes = new Map<Solution, Magnitudes>();
-  #forceMethod: ForceMethod | undefined | null = null;
 
   constructor(structure: Structure) {
     this.analysis = analyse(structure);
+    this.secondRoad = new SecondRoad(structure);
   }
 
   solution(factors: readonly number[]): Solution {
@@ -34,12 +35,6 @@ export class Solved {
       this.#magnitudes.set(solution, magnitudes);
     }
     return magnitudes;
-  }
-
-  /** The second road; undefined where the structure is past its bound. */
-  forceMethod(): ForceMethod | undefined {
-    if (this.#forceMethod === null) this.#forceMethod = prepare(this.analysis.structure);
-    return this.#forceMethod;
   }
 }
 
