@@ -70,7 +70,7 @@ function simplify(system: System, free: readonly Float64Array[]): void {
       for (const vector of waiting) {
         const place = largestOf(vector, candidates);
         if (place < 0) continue;
-        if (chosen === undefined || Math.abs(vector[place]!) > Math.abs(chosen[pivot]!) * (1 + 1e-9)) {
+        if (chosen === undefined || Math.abs(vector[place]!) > Math.abs(chosen[pivot]!) * (1 + EQUAL)) {
           chosen = vector;
           pivot = place;
         }
@@ -88,12 +88,15 @@ function simplify(system: System, free: readonly Float64Array[]): void {
 /** Entries smaller than this beside the largest movement are rounding. */
 const STILL = 1e-7;
 
+/** Sizes that differ by less, relatively, are equal; the first of them counts. */
+const EQUAL = 1e-9;
+
 /** The candidate where the vector is largest, the first among equals; −1 where it is zero at all. */
 function largestOf(vector: Float64Array, candidates: readonly number[]): number {
   let place = -1;
   let largest = STILL * vector.reduce((most, value) => Math.max(most, Math.abs(value)), 0);
   for (const f of candidates) {
-    if (Math.abs(vector[f]!) <= largest * (1 + 1e-9)) continue;
+    if (Math.abs(vector[f]!) <= largest * (1 + EQUAL)) continue;
     place = f;
     largest = Math.abs(vector[f]!);
   }
@@ -108,66 +111,57 @@ function eliminate(vector: Float64Array, by: Float64Array, pivot: number): void 
 }
 
 function describe(system: System, kind: Mechanism['kind'], movement: Float64Array): Mechanism {
-  const { structure, freedoms, legs } = system;
-  const { first, axisX, axisY, size, startRotation, endRotation } = freedoms;
-  const movements = new Float64Array(2 * structure.points.length);
-  let largest = 0;
-  let greatest = -1;
-  for (let p = 0; p < structure.points.length; p++) {
-    const f = first[p]!;
-    if (f === first[p + 1]) continue;
-    movements[2 * p] = axisX[p]! * movement[f]! - axisY[p]! * movement[f + 1]!;
-    movements[2 * p + 1] = axisY[p]! * movement[f]! + axisX[p]! * movement[f + 1]!;
-    const length = Math.hypot(movements[2 * p]!, movements[2 * p + 1]!);
-    if (length <= largest * (1 + 1e-9)) continue;
-    largest = length;
-    greatest = p;
-  }
-  let turned = 0;
-  for (let f = 0; f < movement.length; f++) {
-    if (f - first[freedoms.point[f]!]! >= 2) turned = Math.max(turned, size * Math.abs(movement[f]!));
-  }
-
-  // Where something turns in place and nothing moves beside it, the movements are rounding.
-  if (largest <= STILL * turned) {
-    largest = 0;
-    movements.fill(0);
-  }
-  const still = STILL * (largest > 0 ? largest : turned);
-  if (largest > 0) {
-    // The way that a load would push it: to the right, or down.
-    const x = movements[2 * greatest]!;
-    const y = movements[2 * greatest + 1]!;
-    const sign = Math.abs(x) >= Math.abs(y) ? Math.sign(x) : -Math.sign(y);
-    for (let k = 0; k < movements.length; k++) {
-      movements[k] = Math.abs(movements[k]!) <= still ? 0 : (sign * movements[k]!) / largest;
-    }
-  }
+  const { structure, legs, freedoms } = system;
+  const { first, startRotation, endRotation, size } = freedoms;
+  const { movements, still } = globalMovements(system, movement);
+  const turns = (f: number) => size * Math.abs(movement[f]!) > still;
 
   const points: number[] = [];
   const turning: number[] = [];
   for (let p = 0; p < structure.points.length; p++) {
     if (movements[2 * p] !== 0 || movements[2 * p + 1] !== 0) points.push(p);
-    else if (turns(freedoms, movement, p, still)) turning.push(p);
+    else for (let f = first[p]! + 2; f < first[p + 1]!; f++) if (turns(f) && turning.at(-1) !== p) turning.push(p);
   }
   const moving = new Set(points);
   const members = new Set<number>();
   for (let e = 0; e < legs.count; e++) {
     const bends = legs.bending[e] !== 0;
-    const ends = moving.has(legs.from[e]!) || moving.has(legs.to[e]!);
-    const rotates = bends && Math.max(rotationOf(startRotation[e]!), rotationOf(endRotation[e]!)) > still;
-    if (ends || rotates) members.add(legs.member[e]!);
+    const moves = moving.has(legs.from[e]!) || moving.has(legs.to[e]!);
+    if (moves || (bends && (turns(startRotation[e]!) || turns(endRotation[e]!)))) members.add(legs.member[e]!);
   }
   return { kind, movements, points, members: [...members], turning };
-
-  function rotationOf(f: number): number {
-    return size * Math.abs(movement[f]!);
-  }
 }
 
-function turns(freedoms: System['freedoms'], movement: Float64Array, p: number, still: number): boolean {
-  for (let f = freedoms.first[p]! + 2; f < freedoms.first[p + 1]!; f++) {
-    if (freedoms.size * Math.abs(movement[f]!) > still) return true;
+/**
+ * By point, x and y, the largest being 1 and pointing to the right or down, as a load would push it; none where something
+ * turns in place and the movements beside it are rounding. `still`: what of `movement` is rounding.
+ */
+function globalMovements(system: System, movement: Float64Array) {
+  const { structure, freedoms } = system;
+  const { first, point, axisX, axisY, size } = freedoms;
+  const movements = new Float64Array(2 * structure.points.length);
+  let largest = 0;
+  let sign = 1;
+  for (let p = 0; p < structure.points.length; p++) {
+    const f = first[p]!;
+    if (f === first[p + 1]) continue;
+    const x = axisX[p]! * movement[f]! - axisY[p]! * movement[f + 1]!;
+    const y = axisY[p]! * movement[f]! + axisX[p]! * movement[f + 1]!;
+    movements[2 * p] = x;
+    movements[2 * p + 1] = y;
+    const length = Math.hypot(x, y);
+    if (length <= largest * (1 + EQUAL)) continue;
+    largest = length;
+    sign = Math.abs(x) >= Math.abs(y) ? Math.sign(x) : -Math.sign(y);
   }
-  return false;
+  let turned = 0;
+  for (let f = 0; f < movement.length; f++) {
+    if (f - first[point[f]!]! >= 2) turned = Math.max(turned, size * Math.abs(movement[f]!));
+  }
+  if (largest <= STILL * turned) return { movements: movements.fill(0), still: STILL * turned };
+  const still = STILL * largest;
+  for (let k = 0; k < movements.length; k++) {
+    movements[k] = Math.abs(movements[k]!) <= still ? 0 : (sign * movements[k]!) / largest;
+  }
+  return { movements, still };
 }
