@@ -12,7 +12,12 @@ export interface ActingCase {
   readonly stretches: readonly Stretch[];
   readonly singles: readonly Single[];
   readonly movements: readonly Extract<Load, { kind: 'movement' }>[];
+  /** Stretches of line loads that are too many to be drawn; then `stretches` holds self-weight alone. */
+  readonly undrawn: number;
 }
+
+/** A case with more stretches of line loads than this cannot be read as bands. */
+const MOST_STRETCHES = 400;
 
 /** Part of a line load on one leg. Intensities are factored, N/m, as stated: per level length where `onPlan`. */
 export interface Stretch {
@@ -41,6 +46,8 @@ export interface Single {
   /** Index of the point it stands at, where it stands at one. */
   readonly point: number | undefined;
   readonly row: number | undefined;
+  /** Of its row: how many loads it has, drawn or not, and m between two of them. */
+  readonly inRow: { readonly count: number; readonly step: number } | undefined;
   readonly load: number;
 }
 
@@ -73,7 +80,17 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
       }
     }
     if (stretches.length + singles.length + movements.length > 0) {
-      cases.push({ name, factor, stretches, singles, movements });
+      const weights = stretches.filter(({ kind }) => kind === 'weight');
+      const lines = stretches.length - weights.length;
+      const isTooMany = lines > MOST_STRETCHES;
+      cases.push({
+        name,
+        factor,
+        stretches: isTooMany ? weights : stretches,
+        singles: thinned(singles),
+        movements,
+        undrawn: isTooMany ? lines : 0,
+      });
     }
   }
   return cases;
@@ -83,6 +100,30 @@ function firstOfStatement({ loads }: Structure, index: number): number {
   const { range } = loads[index] as Load;
   if (range.end === range.start) return index;
   return loads.findIndex(load => load.range.start === range.start && load.range.end === range.end);
+}
+
+/** So many arrows of one row, and so many single loads of one case, can be told apart. */
+const MOST_IN_ROW = 40;
+const MOST_SINGLES = 60;
+
+/** A long row keeps its ends and an even choice between them; of many single loads the largest stay. */
+function thinned(singles: readonly Single[]): Single[] {
+  const byRow = new Map<number, Single[]>();
+  const lone: Single[] = [];
+  for (const one of singles) {
+    if (one.row === undefined) lone.push(one);
+    else if (byRow.get(one.row)?.push(one) === undefined) byRow.set(one.row, [one]);
+  }
+  const rows = [...byRow.values()].flatMap(row => {
+    const step = Math.ceil((row.length - 1) / MOST_IN_ROW) || 1;
+    const [first, second] = row as [Single, Single | undefined];
+    const apart = second === undefined ? 0 : Math.hypot(second.place.x - first.place.x, second.place.y - first.place.y);
+    const inRow = { count: row.length, step: apart };
+    return row.filter((_, i) => i % step === 0 || i === row.length - 1).map(one => ({ ...one, inRow }));
+  });
+  const size = ({ x, y, moment }: Single): number => Math.hypot(x, y) + Math.abs(moment);
+  const kept = lone.length > MOST_SINGLES ? [...lone].sort((a, b) => size(b) - size(a)).slice(0, MOST_SINGLES) : lone;
+  return [...kept, ...rows];
 }
 
 /** Global components of a stretch per metre of its leg, at its two ends, N/m. */
@@ -169,7 +210,7 @@ function single(
     load.kind === 'force'
       ? { x: load.x * factor, y: load.y * factor, moment: 0 }
       : { x: 0, y: 0, moment: load.moment * factor };
-  return { kind: load.kind, ...acts, place, point, row: load.row, load: index };
+  return { kind: load.kind, ...acts, place, point, row: load.row, inRow: undefined, load: index };
 }
 
 function placeOf(structure: Structure, at: Location): Pick<Single, 'place' | 'point'> {

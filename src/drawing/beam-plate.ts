@@ -2,9 +2,11 @@
 import type { Structure } from '../model/structure.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import { type Acting, SHEET_WIDTH } from './acting.ts';
+import { actingCases } from './acting-loads.ts';
 import { drawBeamFields } from './beam-fields.ts';
 import { drawBeamLoads } from './beam-loads.ts';
 import { drawBones } from './bones.ts';
+import { tellUndrawn } from './case-name.ts';
 import { distinct, drawLevelDimensions } from './dimensions.ts';
 import { path } from './geometry.ts';
 import type { Palette } from './ink.ts';
@@ -33,6 +35,7 @@ export function beamPlate(structure: Structure, acting: Acting, units: DisplayUn
   const loads = drawBeamLoads(sheet, structure, view, acting.factors, units);
   const bottom = drawFoot(sheet, structure, view, loads.depth, units);
   placeLabels(sheet, [...pointLabels(structure, view), ...memberLabels(structure, view), ...loads.labels]);
+  tellUndrawn(sheet, actingCases(structure, acting.factors));
   let end = bottom;
   if (acting.solution !== undefined) {
     end = drawBeamFields(sheet, structure, acting.solution, { view, units, name: acting.name, top: bottom + 8 });

@@ -27,12 +27,16 @@ export function drawBones(sheet: Sheet, structure: Structure, view: View): void 
 
 /** The structure behind a field: thin, without names or undersides. */
 export function drawOutline(sheet: Sheet, structure: Structure, view: View, role: LineRole = 'outline'): void {
+  let d = '';
   for (const [index, member] of structure.members.entries()) {
     const legs = member.legs.map(leg => drawnLeg(index, leg, view));
-    sheet.line(role, chainPath(legs), 'back');
-    sheet.obstacles.push(...legs.map(segmentOf));
-    sheet.reach(...legs.flatMap(({ from, to }) => [from.y, to.y]));
+    d += chainPath(legs);
+    for (const leg of legs) {
+      sheet.obstacles.push(segmentOf(leg));
+      sheet.reach(leg.from.y, leg.to.y);
+    }
   }
+  sheet.line(role, d, 'back');
 }
 
 /** Hinges on members and the joints of bars. */

@@ -4,6 +4,15 @@ import { asGiven, THIN } from './figures.ts';
 import type { Sheet } from './sheet.ts';
 import type { Run } from './words.ts';
 
+/** Of a case whose line loads are too many to be drawn, a line over everything else. */
+export function tellUndrawn(sheet: Sheet, cases: readonly ActingCase[]): void {
+  for (const { name, undrawn } of cases) {
+    if (undrawn === 0) continue;
+    const words: Run[] = [{ text: name, as: 'bold' }, { text: ` ${undrawn} stretches of line loads, not drawn` }];
+    sheet.words(words, { at: { x: 0, y: Math.floor(Math.min(0, sheet.top)) - 8 }, role: 'load' });
+  }
+}
+
 /** At the left edge of the sheet. */
 export function drawCaseName(sheet: Sheet, { name, factor }: ActingCase, baseline: number): void {
   const times: Run[] = factor === 1 ? [] : [{ text: `${THIN}×${THIN}${asGiven(factor, { text: '', size: 1 })}` }];

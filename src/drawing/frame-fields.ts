@@ -17,7 +17,7 @@ import { placeLabels } from './placing.ts';
 import { largestSize } from './readings.ts';
 import { Sheet } from './sheet.ts';
 import { drawSupport, waysFrom } from './supports.ts';
-import { type DrawnLeg, drawnLeg, extentOf, fitted, pointsInUse, type View } from './view.ts';
+import { type DrawnLeg, drawnLeg, extentOf, fitted, legCount, pointsInUse, type View } from './view.ts';
 import { plain } from './words.ts';
 
 export interface Panel {
@@ -50,7 +50,7 @@ export function frameFields(structure: Structure, acting: Acting, units: Display
 /** Long or many-membered frames need the page's width for their figures. */
 function isWide(structure: Structure): boolean {
   const { left, right, bottom, top } = extentOf(structure);
-  const legs = structure.members.reduce((sum, member) => sum + member.legs.length, 0);
+  const legs = legCount(structure);
   return legs > 12 || (right - left > 3.2 * (top - bottom) && legs > 3) || structure.members.every(isBar);
 }
 

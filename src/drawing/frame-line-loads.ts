@@ -47,7 +47,8 @@ export function tallestIntensity(cases: readonly ActingCase[]): number {
 export function drawLineLoads(acting: ActingCase, at: FrameLoadsAt): LabelRequest[] {
   const byLoad = new Map<number, Stretch[]>();
   for (const stretch of acting.stretches) {
-    if (stretch.kind !== 'weight') byLoad.set(stretch.load, [...(byLoad.get(stretch.load) ?? []), stretch]);
+    if (stretch.kind === 'weight') continue;
+    if (byLoad.get(stretch.load)?.push(stretch) === undefined) byLoad.set(stretch.load, [stretch]);
   }
   const labels: LabelRequest[] = [];
   for (const stretches of [...byLoad.values()].flatMap(connected)) {

@@ -4,6 +4,7 @@ import type { DisplayUnits } from '../quantity/display.ts';
 import { type Acting, SHEET_WIDTH } from './acting.ts';
 import { type ActingCase, actingCases, type Stretch } from './acting-loads.ts';
 import { drawBones } from './bones.ts';
+import { tellUndrawn } from './case-name.ts';
 import { distinct, drawLevelDimensions, drawUprightDimensions } from './dimensions.ts';
 import { asGivenWithUnit } from './figures.ts';
 import { drawLineLoads, type FrameLoadsAt, tallestIntensity } from './frame-line-loads.ts';
@@ -65,6 +66,7 @@ export function framePlate(structure: Structure, acting: Acting, units: DisplayU
   ]);
   drawDimensions(sheet, structure, view, uprightLine(sheet, structure, view), units);
   tellWeights(sheet, structure, cases, units);
+  tellUndrawn(sheet, cases);
   return sheet.svg(`${structure.title ?? structure.name} with its loads under ${acting.name}, and its dimensions`);
 }
 

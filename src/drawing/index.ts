@@ -8,5 +8,6 @@ export type { Palette } from './ink.ts';
 export { mechanismDrawing } from './mechanism.ts';
 export { type MemberPlate, memberPlate } from './member-plate.ts';
 export { memberSketch } from './member-sketch.ts';
-export { type StructureDrawing, structureDrawing } from './structure-drawing.ts';
+export { MOST_LEGS, type StructureDrawing, structureDrawing } from './structure-drawing.ts';
+export { legCount } from './view.ts';
 export { escapeText } from './words.ts';

@@ -26,7 +26,7 @@ export function rowsOf(singles: readonly Single[]): Single[][] {
   const rows = new Map<string, Single[]>();
   for (const single of singles) {
     const key = single.row === undefined ? `${single.x} ${single.y} ${single.moment}` : `row ${single.row}`;
-    rows.set(key, [...(rows.get(key) ?? []), single]);
+    if (rows.get(key)?.push(single) === undefined) rows.set(key, [single]);
   }
   return [...rows.values()].flatMap(row =>
     row[0]?.row === undefined && row.length < MANY ? row.map(one => [one]) : [row],
@@ -44,14 +44,13 @@ function askew({ x, y }: Single): string {
 const DEGREES = { text: 'deg', size: 1 };
 
 function rowCount(row: readonly Single[]): string {
-  return row.length > 1 ? `${row.length}${THIN}×${THIN}` : '';
+  const count = row[0]?.inRow?.count ?? row.length;
+  return count > 1 ? `${count}${THIN}×${THIN}` : '';
 }
 
 function rowStep(row: readonly Single[], units: DisplayUnits): string {
-  const [first, second] = row;
-  if (first?.row === undefined || second === undefined) return '';
-  const step = Math.hypot(second.place.x - first.place.x, second.place.y - first.place.y);
-  return ` at every ${asGivenWithUnit(step, units.length)}`;
+  const inRow = row[0]?.inRow;
+  return inRow === undefined || inRow.count < 2 ? '' : ` at every ${asGivenWithUnit(inRow.step, units.length)}`;
 }
 
 export function movementWords({ freedom, amount }: Extract<Load, { kind: 'movement' }>, units: DisplayUnits): string {

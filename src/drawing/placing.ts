@@ -38,10 +38,13 @@ const SHORTER_COST = 16;
 /** Above this an optional label is left out. */
 const TOO_CROWDED = 70;
 
+/** More labels than this no sheet of this size can hold. */
+const MOST_LABELS = 160;
+
 /** Writes the labels on the sheet, those of highest rank first. Equal words close by stand for each other. */
 export function placeLabels(sheet: Sheet, requests: readonly LabelRequest[]): void {
   const written: { readonly text: string; readonly at: Spot }[] = [];
-  for (const request of [...requests].sort((a, b) => b.rank - a.rank)) {
+  for (const request of [...requests].sort((a, b) => b.rank - a.rank).slice(0, MOST_LABELS)) {
     const first = request.places[0];
     const longest = request.labels[0];
     if (first === undefined || longest === undefined) continue;

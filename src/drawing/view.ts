@@ -91,6 +91,10 @@ export function segmentOf(drawn: DrawnLeg): Segment {
   return [drawn.from, drawn.to];
 }
 
+export function legCount({ members }: Structure): number {
+  return members.reduce((sum, { legs }) => sum + legs.length, 0);
+}
+
 /** All members on one level line: drawn as a beam, its fields under it. */
 export function isBeam(structure: Structure): boolean {
   const { bottom, top, left, right } = extentOf(structure);

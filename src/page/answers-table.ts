@@ -8,6 +8,7 @@ import { sentence, useText } from './head.ts';
 import { escapeHtml, listed, plainHtml, typeset } from './html.ts';
 import { stateMark, stateOf, useBar } from './marks.ts';
 import { messageHtml } from './messages.ts';
+import { diagnosticsIn, statementAt } from './note-index.ts';
 
 export function answersTable(note: NoteResult, result: StructureResult): string {
   const answers = result.answers.flatMap(index => note.answers[index] ?? []);
@@ -52,21 +53,13 @@ function limitWords(note: NoteResult, answer: Answer, structure: Structure | und
 
 /** Where the limit has no value, its words. */
 function writtenLimit(note: NoteResult, { range }: Answer): string {
-  for (const { statements } of note.fences) {
-    for (const statement of statements) {
-      if (statement.kind !== 'require' || statement.range.start !== range.start) continue;
-      return note.text.slice(statement.limit.range.start, statement.limit.range.end);
-    }
-  }
-  return '';
+  const statement = statementAt(note, range.start);
+  return statement?.kind === 'require' ? note.text.slice(statement.limit.range.start, statement.limit.range.end) : '';
 }
 
 /** The mistake in the question itself, or why nothing of the structure is told. */
 function whyWithheld(note: NoteResult, answer: Answer, { withheld }: StructureResult): string {
-  const own = note.diagnostics.find(
-    ({ range, severity }) =>
-      severity === 'error' && range.start >= answer.range.start && range.start <= answer.range.end,
-  );
+  const own = diagnosticsIn(note, answer.range).find(({ severity }) => severity === 'error');
   return messageHtml(own?.message ?? withheld ?? 'something that it depends on is withheld');
 }
 

@@ -3,6 +3,7 @@ import type { Fence, NoteResult } from '../note/result.ts';
 import { escapeHtml } from './html.ts';
 import { valueTable } from './inputs.ts';
 import { messagesIn } from './messages.ts';
+import { structuresEndingIn } from './note-index.ts';
 import { PATTERNS } from './patterns.ts';
 import { structureBlock } from './structure-block.ts';
 
@@ -18,8 +19,8 @@ export interface FenceAt {
 }
 
 export function fenceBlock(note: NoteResult, fence: Fence, at: FenceAt): string {
-  const index = note.fences.indexOf(fence);
-  const ending = fence.structures.filter(s => lastFenceOf(note, s) === index);
+  // A structure may be interrupted by prose; it is shown where it has been said in full.
+  const ending = structuresEndingIn(note, fence);
   const code = codeBlock(fence, at);
   const messages = messagesIn(note, fence.range);
   const classes = (own: string): string => escapeHtml([own, at.classes].filter(Boolean).join(' '));
@@ -35,11 +36,6 @@ export function fenceBlock(note: NoteResult, fence: Fence, at: FenceAt): string 
   const patterns = ending.includes(0) ? PATTERNS : '';
   const blocks = ending.map((s, i) => structureBlock(note, s, i === 0 ? messages : ''));
   return `<section class="${classes('tautline')}"${at.attributes}>${patterns}${source}${blocks.join('')}</section>\n`;
-}
-
-/** A structure may be interrupted by prose; it is shown where it has been said in full. */
-function lastFenceOf(note: NoteResult, structure: number): number {
-  return note.fences.findLastIndex(({ structures }) => structures.includes(structure));
 }
 
 function codeBlock({ firstLine }: Fence, { content, marksLines }: FenceAt): string {

@@ -1,6 +1,5 @@
 // The input schedule: values, sections, loads by case and combinations, each with where it comes from. Folded on screen.
 import { loadSum } from '../drawing/index.ts';
-import type { Statement } from '../language/syntax.ts';
 import type { Load, Section, Structure } from '../model/structure.ts';
 import type { NamedValue, NoteResult, StructureResult } from '../note/result.ts';
 import type { Dimension } from '../quantity/dimension.ts';
@@ -17,6 +16,7 @@ import type { DisplayUnits } from '../quantity/display.ts';
 import { showQuantity } from '../quantity/display.ts';
 import { significant } from '../quantity/number.ts';
 import { counted, decimalColumn, escapeHtml, listed, plainHtml, typeset, unitHtml } from './html.ts';
+import { statementAt } from './note-index.ts';
 import { alternativeName, factorsOf } from './reactions-table.ts';
 
 /** Standard gravity, m/s². */
@@ -51,22 +51,13 @@ export function valueTable(note: NoteResult, values: readonly NamedValue[], resu
   const shown = values.map(({ display, quantity }) => plainHtml(quantity === undefined ? 'withheld' : display));
   const rows = values.map((value, i) => {
     const own = result === undefined ? value.name : value.name.slice(result.name.length + 1);
-    const statement = letStatement(note, value);
+    const statement = statementAt(note, value.range.start);
     const words =
       statement?.kind === 'let' ? note.text.slice(statement.value.range.start, statement.value.range.end) : '';
     const source = statement?.source === undefined ? 'none given' : statement.source.text;
     return [escapeHtml(own), shown[i] ?? '', escapeHtml(oneLine(words)), escapeHtml(source)];
   });
   return schedule(['Value', '', 'as written', 'source'], ['110px', '110px', '', '190px'], rows);
-}
-
-function letStatement(note: NoteResult, value: NamedValue): Statement | undefined {
-  for (const fence of note.fences) {
-    for (const statement of fence.statements) {
-      if (statement.kind === 'let' && statement.name.range.start === value.nameRange.start) return statement;
-    }
-  }
-  return undefined;
 }
 
 function usedSections(structure: Structure): number[] {

@@ -3,6 +3,7 @@ import { mechanismDrawing } from '../drawing/index.ts';
 import type { NoteResult, StructureResult } from '../note/result.ts';
 import { stateMark } from './marks.ts';
 import { messageHtml } from './messages.ts';
+import { diagnosticsIn } from './note-index.ts';
 
 /** So many independent ways to move are drawn. */
 const MOST = 3;
@@ -11,9 +12,7 @@ export function instability(note: NoteResult, { structure, analysis, range }: St
   if (structure === undefined || analysis === undefined || analysis.stability.stable) return '';
   const { mechanisms } = analysis.stability;
   if (mechanisms.length === 0) return '';
-  const diagnostic = note.diagnostics.find(
-    ({ code, range: { start } }) => code === 'unstable-structure' && start >= range.start && start <= range.end,
-  );
+  const diagnostic = diagnosticsIn(note, range).find(({ code }) => code === 'unstable-structure');
   const words = diagnostic === undefined ? '' : `<p>${messageHtml(diagnostic.message)}</p>`;
   const hint =
     diagnostic?.hint === undefined ? '' : `<p class="tl-small tl-soft-text">${messageHtml(diagnostic.hint)}</p>`;

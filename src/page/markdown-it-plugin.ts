@@ -7,6 +7,7 @@ import type { NoteResult } from '../note/result.ts';
 import { fenceBlock } from './fence-block.ts';
 import { escapeHtml } from './html.ts';
 import { messagesIn } from './messages.ts';
+import { fenceAtLine } from './note-index.ts';
 import { findProseValue, isProseValue, proseValue } from './prose-value.ts';
 
 export interface TautlineOptions {
@@ -41,7 +42,7 @@ export function tautlinePlugin(md: MarkdownIt, options: TautlineOptions = {}): v
     if (mark === undefined) return usual();
     try {
       const note = resultOf(mark.text, env);
-      const own = note.fences.find(({ firstLine }) => firstLine === token.map?.[0]);
+      const own = fenceAtLine(note, token.map?.[0] ?? -1);
       if (own === undefined) return usual();
       if (own.kind !== 'calculation') return usual() + messageBlock(messagesIn(note, own.range));
       return fenceBlock(note, own, { content: token.content, ...hostAttributes(token) });

@@ -1,24 +1,22 @@
 // Diagnostics on the page: what is wrong, at which line, and what would mend it. What a table tells already is left out.
 import type { Diagnostic } from '../language/diagnostic.ts';
-import { indexLines } from '../note/line-index.ts';
 import type { NoteResult } from '../note/result.ts';
 import type { Range } from '../quantity/range.ts';
 import { escapeHtml, plainHtml } from './html.ts';
+import { diagnosticsIn, lineOf } from './note-index.ts';
 
 /** Told in the answers, or where the page leaves something out. */
 const TOLD_ELSEWHERE: ReadonlySet<string> = new Set(['limit-exceeded', 'limit-without-source']);
 
 /** Errors and warnings whose words lie in the range, in order. */
 export function messagesIn(note: NoteResult, range: Range): string {
-  const found = note.diagnostics.filter(
-    diagnostic => isShown(diagnostic) && liesIn(diagnostic.range, range) && !isDrawn(note, diagnostic),
-  );
-  if (found.length === 0) return '';
-  const lines = indexLines(note.text);
-  return found.map(diagnostic => message(diagnostic, lines.positionAt(diagnostic.range.start).line)).join('');
+  return diagnosticsIn(note, range)
+    .filter(diagnostic => isShown(diagnostic) && !isDrawn(note, diagnostic))
+    .map(diagnostic => message(diagnostic, lineOf(note, diagnostic.range.start)))
+    .join('');
 }
 
-export function message(diagnostic: Diagnostic, line: number): string {
+function message(diagnostic: Diagnostic, line: number): string {
   const hint =
     diagnostic.hint === undefined
       ? ''

@@ -1,6 +1,6 @@
 // The drawings of a structure: the loads and fields of whatever combination or case the reader chooses, by radio buttons
 // that the stylesheet reads, and a sketch of every case under them.
-import { caseSketch, type StructureDrawing, structureDrawing } from '../drawing/index.ts';
+import { caseSketch, legCount, MOST_LEGS, type StructureDrawing, structureDrawing } from '../drawing/index.ts';
 import type { Solution } from '../mechanics/solution.ts';
 import type { Structure } from '../model/structure.ts';
 import type { Alternative, StructureResult } from '../note/result.ts';
@@ -14,13 +14,16 @@ interface Choice {
   readonly alternative: Alternative;
 }
 
-/** So many choices are drawn; a page with more is slow to read and to make. */
+/** So many choices are drawn, and so many legs in all of them; a page with more is slow to read and to make. */
 const MOST_CHOICES = 24;
+const MOST_LEGS_DRAWN = 1500;
 
 /** `index`: of the structure in the note, which keeps the groups of radio buttons apart. */
 export function plates(result: StructureResult, structure: Structure, index: number): string {
   const all = choicesOf(result, structure);
-  const choices = all.slice(0, MOST_CHOICES);
+  const legs = legCount(structure);
+  const most = legs > MOST_LEGS ? 1 : Math.max(1, Math.min(MOST_CHOICES, Math.floor(MOST_LEGS_DRAWN / legs)));
+  const choices = all.slice(0, most);
   if (choices.length === 0) return `<div class="tl-pick">${figure(drawUnloaded(structure, result), '')}</div>`;
   const left = all.length - choices.length;
   const rest = left === 0 ? '' : `<p class="tl-aside">${left} further alternatives are not drawn here.</p>`;
@@ -129,7 +132,7 @@ function keyOf(structure: Structure, { display }: StructureResult, name: string)
 
 /** A small sketch of every case, so that none is hidden behind a choice; none where there is one case only. */
 function sketches({ display, analysis }: StructureResult, structure: Structure): string {
-  if (structure.cases.length < 2) return '';
+  if (structure.cases.length < 2 || legCount(structure) > MOST_LEGS) return '';
   const drawn = structure.cases.map((_, i) => caseSketch(structure, i, analysis?.cases[i]?.applied, display, 'page'));
   return `<div class="tl-cases">${drawn.join('')}</div>`;
 }

@@ -3,12 +3,11 @@ import type { NoteResult, ProseValue } from '../note/result.ts';
 import { METRIC } from '../quantity/display.ts';
 import { allDigits } from './answers-table.ts';
 import { plainHtml } from './html.ts';
+import { diagnosticsIn } from './note-index.ts';
 
 export function proseValue(note: NoteResult, value: ProseValue): string {
   if (value.quantity === undefined) {
-    const why = note.diagnostics.find(
-      ({ range }) => range.start >= value.range.start && range.start <= value.range.end,
-    );
+    const [why] = diagnosticsIn(note, value.range);
     const title = `${value.text}: ${why?.message ?? 'a result that it needs is withheld'}`;
     return `<output class="tautline-value tautline-withheld" title="${plainHtml(title)}">withheld</output>`;
   }

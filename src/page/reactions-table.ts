@@ -42,8 +42,13 @@ export function factorsOf({ text }: Alternative): string {
   return colon < 0 ? '' : text.slice(colon + 1).trim();
 }
 
-export function reactionsTable(structure: Structure, rows: readonly ReactionRow[], units: DisplayUnits): string {
-  if (rows.length === 0 || structure.supports.length === 0) return '';
+/** So many rows, and so many supports, a reader can take in. */
+const MOST_ROWS = 64;
+const MOST_SUPPORTS = 42;
+
+export function reactionsTable(structure: Structure, all: readonly ReactionRow[], units: DisplayUnits): string {
+  if (all.length === 0 || structure.supports.length === 0) return '';
+  const rows = all.slice(0, MOST_ROWS);
   const reactions = reactionGroups(structure, rows, units);
   const sums = sumGroups(structure, rows, units);
   const count = (groups: readonly Group[]): number => groups.reduce((sum, { columns }) => sum + columns.length, 0);
@@ -51,7 +56,7 @@ export function reactionsTable(structure: Structure, rows: readonly ReactionRow[
     count(reactions) + count(sums) <= 6
       ? [table(rows, [...reactions, ...sums])]
       : [...chunks(reactions).map(groups => table(rows, groups)), table(rows, sums)];
-  return `<div class="tl-keep"><h3>Reactions</h3>${tables.join('<p class="tl-aside"></p>')}${foot(structure, rows)}</div>`;
+  return `<div class="tl-keep"><h3>Reactions</h3>${tables.join('<p class="tl-aside"></p>')}${foot(structure, all)}</div>`;
 }
 
 interface Group {
@@ -81,7 +86,7 @@ function reactionGroups(structure: Structure, rows: readonly ReactionRow[], unit
   const force = largestForce(rows);
   return COMPONENTS.flatMap(({ key, title, kind }) => {
     const largest = kind === 'force' ? force : Math.max(...allReactions(rows).map(({ moment }) => Math.abs(moment)));
-    const columns = structure.supports.flatMap(({ point }, s) => {
+    const columns = structure.supports.slice(0, MOST_SUPPORTS).flatMap(({ point }, s) => {
       const values = rows.map(({ solution }) => solution.reactions[s]?.[key] ?? 0);
       if (values.every(value => Math.abs(value) <= NOISE * largest)) return [];
       return [{ head: `at ${pointHtml(structure, point)}`, values, unit: units[kind].size, largest }];
@@ -142,8 +147,12 @@ function allReactions(rows: readonly ReactionRow[]): Reaction[] {
 }
 
 function largestForce(rows: readonly ReactionRow[]): number {
-  const forces = [...allReactions(rows), ...rows.map(({ solution }) => solution.applied)];
-  return Math.max(0, ...forces.map(({ x, y }) => Math.max(Math.abs(x), Math.abs(y))));
+  let largest = 0;
+  for (const { solution } of rows) {
+    for (const { x, y } of [...solution.reactions, solution.applied])
+      largest = Math.max(largest, Math.abs(x), Math.abs(y));
+  }
+  return largest;
 }
 
 /** The moment of a system given about the origin, taken about another point. */
@@ -214,6 +223,13 @@ function pointHtml(structure: Structure, point: number): string {
 function foot(structure: Structure, rows: readonly ReactionRow[]): string {
   const sentences: string[] = [];
   const largest = largestForce(rows);
+  if (rows.length > MOST_ROWS)
+    sentences.push(`The first ${MOST_ROWS} of ${rows.length} cases and alternatives are shown.`);
+  if (structure.supports.length > MOST_SUPPORTS) {
+    sentences.push(
+      `The first ${MOST_SUPPORTS} of ${structure.supports.length} supports are shown; the sums are those of all.`,
+    );
+  }
   if (allReactions(rows).every(({ x }) => Math.abs(x) <= NOISE * largest))
     sentences.push('No support carries a level force.');
   const lifts = structure.supports.some((_, s) =>
