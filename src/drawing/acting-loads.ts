@@ -1,6 +1,7 @@
 // The loads that act together, case by case, spread onto legs and multiplied by their factors: what both the beam's and
 // the frame's drawing draw from.
 import type { Leg, LineDirection, Load, Location, Structure } from '../model/structure.ts';
+import { thinned } from './thinning.ts';
 
 /** Standard gravity, m/s². */
 const GRAVITY = 9.80665;
@@ -102,37 +103,13 @@ function firstOfStatement({ loads }: Structure, index: number): number {
   return loads.findIndex(load => load.range.start === range.start && load.range.end === range.end);
 }
 
-/** So many arrows of one row, and so many single loads of one case, can be told apart. */
-const MOST_IN_ROW = 40;
-const MOST_SINGLES = 60;
-
-/** A long row keeps its ends and an even choice between them; of many single loads the largest stay. */
-function thinned(singles: readonly Single[]): Single[] {
-  const byRow = new Map<number, Single[]>();
-  const lone: Single[] = [];
-  for (const one of singles) {
-    if (one.row === undefined) lone.push(one);
-    else if (byRow.get(one.row)?.push(one) === undefined) byRow.set(one.row, [one]);
-  }
-  const rows = [...byRow.values()].flatMap(row => {
-    const step = Math.ceil((row.length - 1) / MOST_IN_ROW) || 1;
-    const [first, second] = row as [Single, Single | undefined];
-    const apart = second === undefined ? 0 : Math.hypot(second.place.x - first.place.x, second.place.y - first.place.y);
-    const inRow = { count: row.length, step: apart };
-    return row.filter((_, i) => i % step === 0 || i === row.length - 1).map(one => ({ ...one, inRow }));
-  });
-  const size = ({ x, y, moment }: Single): number => Math.hypot(x, y) + Math.abs(moment);
-  const kept = lone.length > MOST_SINGLES ? [...lone].sort((a, b) => size(b) - size(a)).slice(0, MOST_SINGLES) : lone;
-  return [...kept, ...rows];
-}
-
 /** Global components of a stretch per metre of its leg, at its two ends, N/m. */
 export function perMetre(stretch: Stretch): { readonly start: number; readonly end: number } {
   const share = stretch.kind === 'plan' ? Math.abs(stretch.leg.cosine) : 1;
   return { start: stretch.startIntensity * share, end: stretch.endIntensity * share };
 }
 
-function weights(
+export function weights(
   structure: Structure,
   load: Extract<Load, { kind: 'self-weight' }>,
   index: number,
@@ -161,7 +138,12 @@ function weights(
   );
 }
 
-function spread(structure: Structure, load: Extract<Load, { kind: 'line' }>, index: number, factor: number): Stretch[] {
+export function spread(
+  structure: Structure,
+  load: Extract<Load, { kind: 'line' }>,
+  index: number,
+  factor: number,
+): Stretch[] {
   const slope = (load.endIntensity - load.startIntensity) / (load.end - load.start || 1);
   const at = (along: number): number => (load.startIntensity + slope * (along - load.start)) * factor;
   return (structure.members[load.member]?.legs ?? []).flatMap(leg => {
@@ -230,32 +212,4 @@ function placeOf(structure: Structure, at: Location): Pick<Single, 'place' | 'po
         ? leg.to
         : undefined;
   return { place: { x: from.x + leg.cosine * along, y: from.y + leg.sine * along }, point };
-}
-
-/** Sum of one load as it is given, unfactored: N, global components. None for an imposed movement or a couple. */
-export function loadSum(structure: Structure, index: number): { readonly x: number; readonly y: number } | undefined {
-  const load = structure.loads[index];
-  switch (load?.kind) {
-    case undefined:
-    case 'couple':
-    case 'movement':
-      return undefined;
-    case 'force':
-      return { x: load.x, y: load.y };
-    case 'self-weight':
-      return sumOf(weights(structure, load, index, 1));
-    case 'line':
-      return sumOf(spread(structure, load, index, 1));
-  }
-}
-
-function sumOf(stretches: readonly Stretch[]): { readonly x: number; readonly y: number } {
-  let [x, y] = [0, 0];
-  for (const stretch of stretches) {
-    const { start, end } = perMetre(stretch);
-    const total = ((start + end) / 2) * (stretch.end - stretch.start);
-    x += stretch.x * total;
-    y += stretch.y * total;
-  }
-  return { x, y };
 }

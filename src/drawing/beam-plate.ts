@@ -120,7 +120,7 @@ function memberLabels(structure: Structure, view: View): LabelRequest[] {
   });
 }
 
-export function sectionWords(name: string, description: string): string {
+function sectionWords(name: string, description: string): string {
   return description === '' || description === name ? name : `${name}, ${description}`;
 }
 

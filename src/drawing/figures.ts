@@ -38,6 +38,6 @@ export function spaced(unit: string): string {
 
 const RAISED: Readonly<Record<string, string>> = { '2': '²', '3': '³', '4': '⁴' };
 
-export function trueMinus(text: string): string {
+function trueMinus(text: string): string {
   return text.replaceAll('-', '−');
 }

@@ -74,7 +74,7 @@ export function placesAlong(leg: DrawnLeg, off: number): Place[] {
 }
 
 /** On the line itself, which the words' rim interrupts. */
-export function placesOnLine(leg: DrawnLeg): Place[] {
+function placesOnLine(leg: DrawnLeg): Place[] {
   return [0.5, 0.36, 0.64].map((share): Place => {
     const { x, y } = between(leg.from, leg.to, share);
     return { at: { x, y: y + 4 }, anchor: 'middle', onLine: true };

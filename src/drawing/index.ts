@@ -1,10 +1,10 @@
 // The public face of the drawing room: structures, loads and fields as SVG.
 export type { Acting } from './acting.ts';
-export { loadSum } from './acting-loads.ts';
 export { caseSketch } from './case-sketch.ts';
 export type { FieldName } from './field-curves.ts';
 export type { Panel } from './frame-fields.ts';
 export type { Palette } from './ink.ts';
+export { loadSum } from './load-sum.ts';
 export { mechanismDrawing } from './mechanism.ts';
 export { type MemberPlate, memberPlate } from './member-plate.ts';
 export { memberSketch } from './member-sketch.ts';

@@ -31,7 +31,7 @@ export function movedPath(
   return d;
 }
 
-export function movedCurve(piece: FieldPiece, leg: DrawnLeg, scale: number): Curve {
+function movedCurve(piece: FieldPiece, leg: DrawnLeg, scale: number): Curve {
   const start = spotOnLeg(leg, piece.start);
   const pxPerMetre = leg.leg.length === 0 ? 0 : leg.length / leg.leg.length;
   const [along, across] = [piece.axialMovement, piece.transverseMovement];

@@ -19,7 +19,7 @@ export interface Reading {
 const NEGLIGIBLE = 1e-9;
 
 /** Every candidate along the member: the ends of all pieces and the places of level slope, in order. */
-export function readingsAlong(field: MemberField, quantity: Quantity): Reading[] {
+function readingsAlong(field: MemberField, quantity: Quantity): Reading[] {
   const readings = field.pieces.flatMap(piece => {
     const length = piece.end - piece.start;
     if (!(length > 0)) return [];

@@ -6,7 +6,7 @@ import type { LineRole } from './ink.ts';
 import type { Sheet } from './sheet.ts';
 
 /** px below the point that a support standing upright takes, hatch included. */
-export const SUPPORT_DEPTH = 22;
+const SUPPORT_DEPTH = 22;
 
 /** What a support amounts to; `held` in any other way is told by what it holds. */
 type Form = 'pin' | 'roller' | 'wall' | 'guide' | 'clamp' | 'none';

@@ -67,10 +67,6 @@ export function viewAt(structure: Structure, scale: number, x0: number, y0: numb
   };
 }
 
-export function drawnLegs(structure: Structure, view: View): DrawnLeg[] {
-  return structure.members.flatMap((member, index) => member.legs.map(leg => drawnLeg(index, leg, view)));
-}
-
 export function drawnLeg(member: number, leg: Leg, view: View): DrawnLeg {
   const from = view.point(leg.from);
   const to = view.point(leg.to);

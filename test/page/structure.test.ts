@@ -173,7 +173,9 @@ describe('the choice of combination', () => {
 
 describe('show', () => {
   const titles = (statements: string): string[] =>
-    [...render(fenced(CANTILEVER + statements)).matchAll(/<(?:h3|summary)>([^<]+)</g)].map(([, title = '']) => title.trim());
+    [...render(fenced(CANTILEVER + statements)).matchAll(/<(?:h3|summary)>([^<]+)</g)].map(([, title = '']) =>
+      title.trim(),
+    );
 
   it('chooses what the page shows, and its order', () => {
     expect(titles('find tip: deflection at B\nshow: reactions by case\nshow: results\nshow: inputs')).toEqual([
