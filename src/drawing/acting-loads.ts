@@ -1,7 +1,7 @@
 // The loads that act together, case by case, spread onto legs and multiplied by their factors: what both the beam's and
 // the frame's drawing draw from.
 import type { Leg, LineDirection, Load, Location, Structure } from '../model/structure.ts';
-import { thinned } from './thinning.ts';
+import { leftOut, thinned } from './thinning.ts';
 
 /** Standard gravity, m/s². */
 const GRAVITY = 9.80665;
@@ -14,7 +14,9 @@ export interface ActingCase {
   readonly singles: readonly Single[];
   readonly movements: readonly Extract<Load, { kind: 'movement' }>[];
   /** Stretches of line loads that are too many to be drawn; then `stretches` holds self-weight alone. */
-  readonly undrawn: number;
+  readonly undrawnLines: number;
+  /** Single loads left out beside larger ones. */
+  readonly undrawnSingles: number;
 }
 
 /** A case with more stretches of line loads than this cannot be read as bands. */
@@ -90,7 +92,8 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
         stretches: isTooMany ? weights : stretches,
         singles: thinned(singles),
         movements,
-        undrawn: isTooMany ? lines : 0,
+        undrawnLines: isTooMany ? lines : 0,
+        undrawnSingles: leftOut(singles),
       });
     }
   }

@@ -4,11 +4,15 @@ import { asGiven, THIN } from './figures.ts';
 import type { Sheet } from './sheet.ts';
 import type { Run } from './words.ts';
 
-/** Of a case whose line loads are too many to be drawn, a line over everything else. */
+/** Of a case whose loads are too many to be drawn, a line over everything else. */
 export function tellUndrawn(sheet: Sheet, cases: readonly ActingCase[]): void {
-  for (const { name, undrawn } of cases) {
-    if (undrawn === 0) continue;
-    const words: Run[] = [{ text: name, as: 'bold' }, { text: ` ${undrawn} stretches of line loads, not drawn` }];
+  for (const { name, undrawnLines, undrawnSingles } of cases) {
+    const parts = [
+      ...(undrawnLines > 0 ? [`${undrawnLines} stretches of line loads`] : []),
+      ...(undrawnSingles > 0 ? [`the ${undrawnSingles} smallest of its single loads`] : []),
+    ];
+    if (parts.length === 0) continue;
+    const words: Run[] = [{ text: name, as: 'bold' }, { text: ` not drawn: ${parts.join(', ')}` }];
     sheet.words(words, { at: { x: 0, y: Math.floor(Math.min(0, sheet.top)) - 8 }, role: 'load' });
   }
 }

@@ -14,6 +14,11 @@ interface Placed {
 const MOST_IN_ROW = 40;
 const MOST_SINGLES = 60;
 
+/** How many single loads, those of rows apart, `thinned` leaves out. */
+export function leftOut(singles: readonly Pick<Placed, 'row'>[]): number {
+  return Math.max(0, singles.filter(({ row }) => row === undefined).length - MOST_SINGLES);
+}
+
 /** A long row keeps its ends and an even choice between them; of many single loads the largest stay. */
 export function thinned<Single extends Placed>(singles: readonly Single[]): Single[] {
   const byRow = new Map<number, Single[]>();

@@ -83,6 +83,39 @@ describe('a structure that is not held', () => {
   });
 });
 
+describe('very many loads', () => {
+  it('are thinned, and what is left out is told', () => {
+    const structure = build({
+      points: { A: [0, 0], B: [10, 0] },
+      members: { M: ['A', 'B'] },
+      supports: [['A', 'fixed']],
+      cases: ['row', 'lone'],
+      loads: () => [
+        ...Array.from({ length: 101 }, (_, i) => ({
+          case: 'row',
+          kind: 'force' as const,
+          x: 0,
+          y: -2000,
+          at: { kind: 'along' as const, member: 0, distance: i / 10 },
+          row: 0,
+        })),
+        ...Array.from({ length: 70 }, (_, i) => ({
+          case: 'lone',
+          kind: 'force' as const,
+          x: 0,
+          y: -1000 - i,
+          at: { kind: 'along' as const, member: 0, distance: 1 + i / 10 },
+        })),
+      ],
+    });
+    const { main } = structureDrawing(structure, acting(structure, [1, 1]), METRIC);
+    checkDrawing(main);
+    expect(textsOf(main)).toEqual(
+      expect.arrayContaining(['101 × 2 kN at every 0.1 m', 'lone not drawn: the 10 smallest of its single loads']),
+    );
+  });
+});
+
 describe('shapes at the edge', () => {
   const right = { kind: 'global' as const, x: 1, y: 0, onPlan: false };
   const down = { kind: 'global' as const, x: 0, y: -1, onPlan: false };
