@@ -5,6 +5,7 @@ export { type FieldName, type FieldValues, fieldAt, movementAlong, movementAt, p
 export { measure } from './measure.ts';
 export { MAX_MECHANISMS } from './mechanisms.ts';
 export { bound, derivative, evaluate, extremes, type Polynomial, roots, sum } from './polynomial.ts';
+export { type Sizes, sizesOf } from './rounding.ts';
 export type {
   Analysis,
   CaseParts,

@@ -24,12 +24,13 @@ export function sameValue(solution: Solution, kind: Kind, a: number, b: number):
   return Math.abs(a - b) <= 100 * ROUNDING * sizesOf(solution)[kind];
 }
 
-type Sizes = Readonly<Record<Kind, number>>;
+/** The largest of each kind in a solution: N, N m, m, rad. */
+export type Sizes = Readonly<Record<Kind, number>>;
 
 const known = new WeakMap<Solution, Sizes>();
 
 /** Looking at every piece once a solution is enough. */
-function sizesOf(solution: Solution): Sizes {
+export function sizesOf(solution: Solution): Sizes {
   let sizes = known.get(solution);
   if (sizes === undefined) {
     sizes = findSizes(solution);

@@ -6,7 +6,7 @@ import { wordsOf } from '../language/lines.ts';
 import { parseProse, parseStatements } from '../language/parse.ts';
 import { resolveNames } from '../model/names.ts';
 import { divide, type Part } from '../model/scope.ts';
-import { type Change, changeBetween } from './change.ts';
+import { changeBetween } from './change.ts';
 import { NoteEvaluation } from './evaluation.ts';
 import { readSource, type Source, type SourceFence } from './fences.ts';
 import { fingerprintOf } from './fingerprint.ts';
@@ -53,10 +53,10 @@ function advance(last: NoteState | undefined, text: string, options: EvaluateOpt
       : movedSource(last.source, last.result.text, text, change);
   if (last === undefined || change === undefined || moved === undefined) return begin(text, options, memory);
   const { source, changed } = moved;
+  if (changed === undefined) return { ...last, source, result: movedResult(last.result, text, change) };
   const reads = source.fences.map((fence, i) =>
-    i === changed ? readFence(fence, text) : moveFence(last.reads[i]!, change),
+    i === changed ? readFence(fence, text) : readAt(last.reads[i]!, fence),
   );
-  if (changed === undefined) return { ...last, source, reads, result: movedResult(last.result, text, change) };
   return { front: last.front, source, reads, result: resultOf(text, options, memory, last.front, source, reads) };
 }
 
@@ -88,6 +88,7 @@ function resultOf(
     const { value, diagnostics } = parseProse(span.text, span.start);
     return evaluation.prose(span, value, diagnostics);
   });
+  let fingerprint: string | undefined;
   const diagnostics = [...reads.flatMap(fence => fence.diagnostics), ...names.diagnostics, ...evaluation.diagnostics()];
   return {
     path,
@@ -100,7 +101,9 @@ function resultOf(
     prose,
     names: names.entries,
     diagnostics: inOrder(diagnostics),
-    fingerprint: fingerprintOf(structures, answers, values),
+    get fingerprint() {
+      return (fingerprint ??= fingerprintOf(structures, answers, values));
+    },
   };
 }
 
@@ -108,6 +111,7 @@ function readFence(fence: SourceFence, text: string): FenceRead {
   if (fence.kind !== 'calculation') {
     const what = fence.kind === 'record' ? 'A record' : 'A signature';
     return {
+      start: fence.range.start,
       statements: [],
       parts: [],
       diagnostics: [
@@ -124,7 +128,12 @@ function readFence(fence: SourceFence, text: string): FenceRead {
     const message = `This fence holds ${size} characters; at most ${MOST_FENCE} are read.`;
     // What it would have defined is unknown, and so is all that may depend on it.
     const broken: Part = { kind: 'broken', broken: { keyword: '', name: undefined, start: fence.range.start } };
-    return { statements: [], parts: [broken], diagnostics: [error('too-large', firstLine(fence, text), message)] };
+    return {
+      start: fence.range.start,
+      statements: [],
+      parts: [broken],
+      diagnostics: [error('too-large', firstLine(fence, text), message)],
+    };
   }
   const { statements, broken, diagnostics } = parseStatements(fence.lines);
   const parts: Part[] = statements.map(statement => ({ kind: 'statement', statement }));
@@ -137,19 +146,20 @@ function readFence(fence: SourceFence, text: string): FenceRead {
       parts.push({ kind: 'broken', broken: { keyword: '', name: undefined, start: range.start } });
   }
   parts.sort((a, b) => startOf(a) - startOf(b));
-  return { statements, parts, diagnostics };
+  return { start: fence.range.start, statements, parts, diagnostics };
 }
 
-/** What was read of a fence that moved as a whole. */
-function moveFence(read: FenceRead, change: Change): FenceRead {
-  if (change.shift === 0) return read;
-  const statements = shifted(read.statements, change);
-  const moved = new Map(read.statements.map((statement, i) => [statement, statements[i]!]));
+/** What was read of a fence, where it stands now: it moved as a whole, or not at all. */
+function readAt(read: FenceRead, { range }: SourceFence): FenceRead {
+  const moved = { oldEnd: 0, shift: range.start - read.start };
+  if (moved.shift === 0) return read;
+  const statements = shifted(read.statements, moved);
+  const renewed = new Map(read.statements.map((statement, i) => [statement, statements[i]!]));
   const parts = read.parts.map(
     (part): Part =>
-      part.kind === 'statement' ? { kind: 'statement', statement: moved.get(part.statement)! } : shifted(part, change),
+      part.kind === 'statement' ? { kind: 'statement', statement: renewed.get(part.statement)! } : shifted(part, moved),
   );
-  return { statements, parts, diagnostics: shifted(read.diagnostics, change) };
+  return { start: range.start, statements, parts, diagnostics: shifted(read.diagnostics, moved) };
 }
 
 function startOf(part: Part): number {

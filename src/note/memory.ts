@@ -10,6 +10,8 @@ import { Solved } from './solved.ts';
 
 /** What one fence says. */
 export interface FenceRead {
+  /** Where the fence stood when it was read. */
+  readonly start: number;
   readonly statements: readonly Statement[];
   /** The statements and the lines that could not be read, in the order of the text. */
   readonly parts: readonly Part[];

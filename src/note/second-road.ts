@@ -1,4 +1,5 @@
 // Holds each movement against the second road: the virtual work of unit actions at the place that the first road found.
+import { sizesOf } from '../mechanics/index.ts';
 import type { ResolvedMeasure, UnitAction } from '../model/question.ts';
 import { isMovement } from '../model/questions.ts';
 import { positionAlong } from '../model/spans.ts';
@@ -43,8 +44,7 @@ export function hold({ measure, place, value, factors, solved }: Taken): Held {
       ? [onSide(actions, 'before'), onSide(actions, 'after')]
       : [actions];
   const solution = solved.solution(factors);
-  const magnitudes = solved.magnitudes(solution);
-  const largest = measure.kind === 'rotation' ? magnitudes.rotation : magnitudes.movement;
+  const largest = sizesOf(solution)[measure.kind === 'rotation' ? 'rotation' : 'movement'];
   let held: Held = { difference: Infinity, rounding: 0 };
   for (const way of ways) {
     const other = solved.secondRoad.movement(factors, () => solution, way);

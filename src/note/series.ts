@@ -1,7 +1,7 @@
 // A question worked one alternative at a time: a measure, or an expression of measures, earlier results and values. Never
 // a mixture of two alternatives.
 import type { Measure, Operand, StatementOf, Under } from '../language/syntax.ts';
-import { measure as takeMeasure } from '../mechanics/measure.ts';
+import { measure as takeMeasure } from '../mechanics/index.ts';
 import { type AlternativeModel, alternativesUnder } from '../model/combinations.ts';
 import type { Figures } from '../model/figures.ts';
 import type { Definition } from '../model/names.ts';
@@ -10,7 +10,6 @@ import type { Measured, ResolvedMeasure, Seek } from '../model/question.ts';
 import { dimensionOf, resolveMeasure } from '../model/questions.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
-import { magnitudeFor, withoutNoise } from './magnitudes.ts';
 import type { Refusal } from './once.ts';
 import type { Taken } from './second-road.ts';
 import type { Solved } from './solved.ts';
@@ -206,7 +205,12 @@ class SeriesReader {
       taken.push(here);
       const value = this.#evaluate(i, asked => {
         const measure = resolved.get(asked)!;
-        const found = this.#take(asked, measure, factors, solved, alone === undefined ? 'size' : this.#seek());
+        const found = takeMeasure(
+          solved.analysis.structure,
+          solved.solution(factors),
+          measure,
+          alone === undefined ? 'size' : this.#seek(),
+        );
         measured.push(found);
         here.push({ measure, place: found.place, value: found.value, factors, solved });
         return { value: found.value, dimension: dimensionOf(asked) };
@@ -224,16 +228,6 @@ class SeriesReader {
       measured: alone === undefined ? [] : measured,
       taken: [...before, ...taken[governing]!],
       solved,
-    };
-  }
-
-  #take(asked: Measure, resolved: ResolvedMeasure, factors: readonly number[], solved: Solved, seek: Seek): Measured {
-    const solution = solved.solution(factors);
-    const found = takeMeasure(solved.analysis.structure, solution, resolved, seek);
-    const isMoment = asked.kind === 'reaction' && asked.component === 'moment';
-    return {
-      ...found,
-      value: withoutNoise(found.value, magnitudeFor(asked.kind, isMoment, solved.magnitudes(solution))),
     };
   }
 

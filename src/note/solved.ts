@@ -1,17 +1,13 @@
 // A structure with what it does: its analysis, the solutions of combinations and the second road, each worked once, when
 // first asked for. A structure that did not change is taken from memory with all of them.
-import { analyse } from '../mechanics/analyse.ts';
-import type { Analysis, Solution } from '../mechanics/solution.ts';
-import { combine } from '../mechanics/superposition.ts';
+import { type Analysis, analyse, combine, type Solution } from '../mechanics/index.ts';
 import type { Structure } from '../model/structure.ts';
 import { SecondRoad } from '../virtual-work/index.ts';
-import { type Magnitudes, magnitudesOf } from './magnitudes.ts';
 
 export class Solved {
   readonly analysis: Analysis;
   readonly secondRoad: SecondRoad;
   readonly #solutions = new Map<string, Solution>();
-  readonly #magnitudes = new Map<Solution, Magnitudes>();
 
   constructor(structure: Structure) {
     this.analysis = analyse(structure);
@@ -26,15 +22,6 @@ export class Solved {
       this.#solutions.set(key, solution);
     }
     return solution;
-  }
-
-  magnitudes(solution: Solution): Magnitudes {
-    let magnitudes = this.#magnitudes.get(solution);
-    if (magnitudes === undefined) {
-      magnitudes = magnitudesOf(solution);
-      this.#magnitudes.set(solution, magnitudes);
-    }
-    return magnitudes;
   }
 }
 

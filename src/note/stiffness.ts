@@ -1,7 +1,6 @@
 // By what factor all stiffness must rise to meet an exceeded movement limit. What a settlement imposes does not scale, so
 // the factor comes from the part that stiffness governs, and is found on the real model.
-import { measure } from '../mechanics/measure.ts';
-import { imposedPart, loadPart, superpose } from '../mechanics/superposition.ts';
+import { imposedPart, loadPart, measure, superpose } from '../mechanics/index.ts';
 import type { ResolvedMeasure } from '../model/question.ts';
 import { isMovement } from '../model/questions.ts';
 import type { Solved } from './solved.ts';

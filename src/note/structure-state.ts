@@ -1,8 +1,7 @@
 // One structure of a note on its way from statements to a solution. Each stage is worked out when it is first asked for;
 // a value that asks for a later stage than it may is a circle, and told as one.
 
-import { MAX_FREEDOMS } from '../mechanics/analyse.ts';
-import type { Analysis, Conflict } from '../mechanics/solution.ts';
+import { type Analysis, type Conflict, MAX_FREEDOMS } from '../mechanics/index.ts';
 import { buildStructure } from '../model/build.ts';
 import { type CombinationModel, caseAlone, readCombinations } from '../model/combinations.ts';
 import { type Geometry, layOut } from '../model/geometry.ts';
@@ -149,23 +148,19 @@ export class StructureState {
     if (structure === undefined || this.report.flawed) return undefined;
     const solved = this.#inputs.memory.solve(structure, solutionKey(structure));
     const { stability, tooLarge, conflict } = solved.analysis;
-    if (tooLarge !== undefined) {
-      this.#excuse = 'the structure is too large';
-      this.report.error(
-        'too-large',
-        structure.range,
-        `${structure.name} has more joints than are solved: about ${MAX_FREEDOMS} freedoms are taken, three a joint.`,
-        {
-          hint: 'divide it into structures that hand reactions on',
-        },
-      );
-      return undefined;
-    }
+    if (tooLarge !== undefined) return this.#refuseSize(structure, tooLarge);
     if (conflict !== undefined) return this.#conflict(structure, conflict);
     if (stability.stable) return solved;
     this.unstable = solved.analysis;
     this.#excuse = 'it can move freely';
     this.report.diagnostics.push(...describeInstability(structure, solved.analysis));
+    return undefined;
+  }
+
+  #refuseSize(structure: Structure, tooLarge: NonNullable<Analysis['tooLarge']>): undefined {
+    this.#excuse = 'the structure is too large';
+    const { message, hint } = TOO_LARGE[tooLarge];
+    this.report.error('too-large', structure.range, `${structure.name} ${message}`, { hint });
     return undefined;
   }
 
@@ -197,6 +192,23 @@ export class StructureState {
     return [...own, ...shared.filter(({ name }) => !names.has(name)), ...alone];
   }
 }
+
+const TOO_LARGE: Readonly<
+  Record<NonNullable<Analysis['tooLarge']>, { readonly message: string; readonly hint: string }>
+> = {
+  freedoms: {
+    message: `has more joints than are solved: ${MAX_FREEDOMS} freedoms are taken, three a joint.`,
+    hint: 'divide it into structures that hand reactions on',
+  },
+  'axially-stiff': {
+    message: 'has longer chains of axially stiff members than are solved.',
+    hint: 'give their sections an area',
+  },
+  cases: {
+    message: 'has more cases than are solved for so many members and loads.',
+    hint: 'join cases that always act together, or divide the structure',
+  },
+};
 
 /** Keywords whose broken line costs less than the whole structure: what it would have defined is missed where it is used. */
 const CONTAINED = [

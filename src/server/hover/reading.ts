@@ -1,11 +1,10 @@
-// Reads one solution for a hover: a measure's value without noise, and the same in words. The measures are mechanics'
+// Reads one solution for a hover: a measure's value, and the same in words. The measures are mechanics'
 // own, so that a hover and an answer cannot disagree.
 import { measure as take } from '../../mechanics/index.ts';
 import type { Solution } from '../../mechanics/solution.ts';
 import type { Measured, ResolvedMeasure } from '../../model/question.ts';
 import { dimensionOf } from '../../model/questions.ts';
 import type { Structure } from '../../model/structure.ts';
-import { type Magnitudes, magnitudeFor, magnitudesOf, withoutNoise } from '../../note/magnitudes.ts';
 import { answerInWords } from '../../note/phrases.ts';
 import type { Alternative, Combination } from '../../note/result.ts';
 import type { DisplayUnits } from '../../quantity/display.ts';
@@ -13,20 +12,16 @@ import type { DisplayUnits } from '../../quantity/display.ts';
 export interface Reading {
   readonly structure: Structure;
   readonly solution: Solution;
-  readonly magnitudes: Magnitudes;
   readonly units: DisplayUnits;
 }
 
 export function readingOf(structure: Structure, alternative: Alternative, units: DisplayUnits): Reading {
-  const solution = alternative.solution();
-  return { structure, solution, magnitudes: magnitudesOf(solution), units };
+  return { structure, solution: alternative.solution(), units };
 }
 
-/** The largest in size, with its sign; 0 where it is noise beside the largest of its kind. */
-export function measuredOf({ structure, solution, magnitudes }: Reading, asked: ResolvedMeasure): Measured {
-  const measured = take(structure, solution, asked, 'size');
-  const isMoment = asked.kind === 'reaction' && asked.component === 'moment';
-  return { ...measured, value: withoutNoise(measured.value, magnitudeFor(asked.kind, isMoment, magnitudes)) };
+/** The largest in size, with its sign. */
+export function measuredOf({ structure, solution }: Reading, asked: ResolvedMeasure): Measured {
+  return take(structure, solution, asked, 'size');
 }
 
 /** `4.443 mm down`, `12.30 kN m, tension below`, `3.100 kN compression`. */
