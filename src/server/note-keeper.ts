@@ -92,7 +92,7 @@ export class NoteKeeper {
     const start = performance.now();
     try {
       const result = evaluateNote(text, { path: fileName(document.uri), memory: kept.memory });
-      return result.fences.length === 0 ? undefined : { document, result };
+      return result.isCalculation ? { document, result } : undefined;
     } catch (error) {
       this.#log(error instanceof Error ? (error.stack ?? error.message) : String(error));
       return undefined;

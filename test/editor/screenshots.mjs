@@ -9,15 +9,15 @@ import { openBrowser, workbenchAddress } from './browser.mjs';
 import { installEditor, pause, startEditor } from './code-server.mjs';
 
 const THEMES = {
-  light: 'Default Light Modern',
-  dark: 'Default Dark Modern',
-  'high-contrast': 'Default High Contrast',
-  'high-contrast-light': 'Default High Contrast Light',
+  light: 'Light Modern',
+  dark: 'Dark Modern',
+  'high-contrast': 'Dark High Contrast',
+  'high-contrast-light': 'Light High Contrast',
 };
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '../..');
 const target = join(root, 'out/screenshots');
-const [note = 'slip-canopy.md', words = 'member R1'] = process.argv.slice(2);
+const [note = 'slip-canopy.md', words = 'sag of R1'] = process.argv.slice(2);
 
 mkdirSync(target, { recursive: true });
 const main = installEditor(root);
@@ -26,29 +26,30 @@ for (const [name, theme] of Object.entries(THEMES)) await picture(name, theme);
 await browser.close();
 
 async function picture(name, theme) {
-  const folder = mkdtempSync(join(tmpdir(), 'tautline-pictures-'));
+  const work = mkdtempSync(join(tmpdir(), 'tautline-pictures-'));
+  const folder = join(work, 'boathouse');
   cpSync(join(root, 'media/sample'), folder, { recursive: true });
   const settings = {
-    'workbench.colorTheme': theme,
-    'window.autoDetectColorScheme': false,
     'workbench.startupEditor': 'none',
     'workbench.secondarySideBar.defaultVisibility': 'hidden',
     'workbench.activityBar.location': 'hidden',
     'chat.disableAIFeatures': true,
     'editor.minimap.enabled': false,
+    'window.commandCenter': false,
+    'editor.stickyScroll.enabled': false,
+    'editor.fontSize': 13,
     'editor.hover.delay': 100,
     'git.enabled': false,
   };
   const server = await startEditor(main, { settings });
   try {
-    const page = await browser.newPage({ viewport: { width: 1600, height: 1000 } });
+    const page = await browser.newPage({ viewport: { width: 1680, height: 1050 } });
     await page.goto(workbenchAddress(server.port, { folder, extension: root }));
     await page.locator('.monaco-workbench').waitFor();
-    await page.keyboard.press('Control+p');
-    await page.keyboard.type(note);
-    await page.locator('.quick-input-list .monaco-list-row').first().waitFor();
-    await pause(500);
-    await page.keyboard.press('Enter');
+    await pause(3000);
+    await pick(page, 'F1', '>Preferences: Color Theme', /^Preferences: Color Theme/);
+    await pick(page, undefined, theme, theme);
+    await pick(page, 'Control+p', note, note);
     await page.locator('.monaco-editor .view-line').first().waitFor();
     await page.keyboard.press('Control+b');
     await pause(500);
@@ -62,8 +63,19 @@ async function picture(name, theme) {
     await page.close();
   } finally {
     await server.stop();
-    rmSync(folder, { recursive: true, force: true });
+    rmSync(work, { recursive: true, force: true });
   }
+}
+
+/** Opens a quick pick with a key (or takes the one that is open), types the words and takes the row that says `row`. */
+async function pick(page, key, words, row) {
+  if (key !== undefined) await page.keyboard.press(key);
+  const input = page.locator('.quick-input-widget input').last();
+  await input.waitFor();
+  await pause(500);
+  await input.fill(words);
+  await page.locator('.quick-input-list .monaco-list-row').filter({ hasText: row }).first().click();
+  await pause(500);
 }
 
 /** The preview lies in nested frames; it is there when one of them has a drawing. */

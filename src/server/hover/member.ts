@@ -44,15 +44,15 @@ interface Governing {
 function governingMovement(note: NoteResult, result: StructureResult, index: number): Governing | undefined {
   const { structure, analysis, display } = result;
   if (structure === undefined || analysis === undefined || !analysis.stability.stable) return undefined;
-  const alternatives = movementAlternatives(note, result);
+  const chosen = alternativesOf(result.combinations).length > 1;
   let governing: Governing | undefined;
-  for (const alternative of alternatives) {
+  for (const alternative of movementAlternatives(note, result)) {
     const reading = readingOf(structure, alternative, display);
     for (const kind of ['deflection', 'sway'] as const) {
       const asked = { kind, along: [index] };
       const measured = measuredOf(reading, asked);
       if (governing !== undefined && Math.abs(measured.value) <= Math.abs(governing.measured.value)) continue;
-      governing = { alternative, reading, asked, measured, chosen: alternatives.length > 1 };
+      governing = { alternative, reading, asked, measured, chosen };
     }
   }
   return governing;
