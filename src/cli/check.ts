@@ -28,7 +28,7 @@ function solve(note: FoundNote): NoteResult[] {
     return [refusedNote(note.path, reading.tooLarge ? 'too-large' : 'unreadable-note', reading.problem)];
   }
   const result = evaluateNote(reading.text, { path: note.path });
-  return note.named || result.fences.length > 0 ? [result] : [];
+  return note.named || result.isCalculation ? [result] : [];
 }
 
 function writeForPerson(results: readonly NoteResult[], world: World, colour: ColourChoice): void {

@@ -7,6 +7,7 @@ export function refusedNote(path: string, code: DiagnosticCode, message: string)
     path,
     text: '',
     frontMatter: {},
+    isCalculation: true,
     fences: [],
     structures: [],
     answers: [],

@@ -94,6 +94,7 @@ function resultOf(
     path,
     text,
     frontMatter: front.values,
+    isCalculation: true,
     fences: fencesOf(source, reads, evaluation),
     structures,
     answers,
@@ -151,8 +152,9 @@ function readFence(fence: SourceFence, text: string): FenceRead {
 
 /** What was read of a fence, where it stands now: it moved as a whole, or not at all. */
 function readAt(read: FenceRead, { range }: SourceFence): FenceRead {
-  const moved = { oldEnd: 0, shift: range.start - read.start };
-  if (moved.shift === 0) return read;
+  const shift = range.start - read.start;
+  if (shift === 0) return read;
+  const moved = [{ oldEnd: 0, shift }];
   const statements = shifted(read.statements, moved);
   const renewed = new Map(read.statements.map((statement, i) => [statement, statements[i]!]));
   const parts = read.parts.map(
@@ -209,6 +211,7 @@ function nothing(text: string, { path }: EvaluateOptions, front: FrontMatterBloc
     path,
     text,
     frontMatter: front.values,
+    isCalculation: false,
     fences: [],
     structures: [],
     answers: [],

@@ -9,8 +9,8 @@ import { shifted } from './shift.ts';
 /** Which result a moved one was made of, and by which changes in turn. */
 const origins = new WeakMap<NoteResult, { readonly base: NoteResult; readonly changes: readonly Change[] }>();
 
-/** Past so many changes the parts are moved once for all. */
-const MOST_CHANGES = 24;
+/** Past so many changes a new base is begun, so that no place is moved by a long history. */
+const MOST_CHANGES = 200;
 
 export function movedResult(result: NoteResult, text: string, change: Change): NoteResult {
   const { base, changes } = origins.get(result) ?? { base: result, changes: [] };
@@ -27,28 +27,28 @@ function later(
   last: Change,
   changes: readonly Change[],
 ): NoteResult {
-  const inTurn = <T>(data: T, move: (data: T, change: Change) => T): T => changes.reduce(move, data);
   const settled: { -readonly [K in keyof NoteResult]?: NoteResult[K] } = {};
   return {
     path: base.path,
     text,
     frontMatter: base.frontMatter,
-    diagnostics: shifted(before.diagnostics, last),
-    prose: before.prose.map(span => ({ ...span, range: shifted(span.range, last) })),
+    isCalculation: base.isCalculation,
+    diagnostics: shifted(before.diagnostics, [last]),
+    prose: before.prose.map(span => ({ ...span, range: shifted(span.range, [last]) })),
     get fences() {
-      return (settled.fences ??= inTurn(base.fences, shifted));
+      return (settled.fences ??= shifted(base.fences, changes));
     },
     get structures() {
-      return (settled.structures ??= inTurn(base.structures, moveStructures));
+      return (settled.structures ??= moveStructures(base.structures, changes));
     },
     get answers() {
-      return (settled.answers ??= inTurn(base.answers, moveAnswers));
+      return (settled.answers ??= moveAnswers(base.answers, changes));
     },
     get values() {
-      return (settled.values ??= inTurn(base.values, moveValues));
+      return (settled.values ??= moveValues(base.values, changes));
     },
     get names() {
-      return (settled.names ??= inTurn(base.names, moveNames));
+      return (settled.names ??= moveNames(base.names, changes));
     },
     get fingerprint() {
       return base.fingerprint;
@@ -56,48 +56,51 @@ function later(
   };
 }
 
-function moveAnswers(answers: readonly Answer[], change: Change): readonly Answer[] {
+function moveAnswers(answers: readonly Answer[], changes: readonly Change[]): readonly Answer[] {
   return answers.map(answer => ({
     ...answer,
-    range: shifted(answer.range, change),
-    nameRange: shifted(answer.nameRange, change),
+    range: shifted(answer.range, changes),
+    nameRange: shifted(answer.nameRange, changes),
   }));
 }
 
-function moveValues(values: readonly NamedValue[], change: Change): readonly NamedValue[] {
+function moveValues(values: readonly NamedValue[], changes: readonly Change[]): readonly NamedValue[] {
   return values.map(value => ({
     ...value,
-    range: shifted(value.range, change),
-    nameRange: shifted(value.nameRange, change),
+    range: shifted(value.range, changes),
+    nameRange: shifted(value.nameRange, changes),
   }));
 }
 
-function moveNames(names: readonly NameEntry[], change: Change): readonly NameEntry[] {
+function moveNames(names: readonly NameEntry[], changes: readonly Change[]): readonly NameEntry[] {
   return names.map(({ namespace, name, structure, definition, uses }) => ({
     namespace,
     name,
     structure,
-    definition: shifted(definition, change),
-    uses: shifted(uses, change),
+    definition: shifted(definition, changes),
+    uses: shifted(uses, changes),
   }));
 }
 
 /** An analysis knows no places; what it was made of does. */
-function moveStructures(structures: readonly StructureResult[], change: Change): readonly StructureResult[] {
+function moveStructures(
+  structures: readonly StructureResult[],
+  changes: readonly Change[],
+): readonly StructureResult[] {
   return structures.map(result => ({
     ...result,
-    structure: result.structure && moveStructure(result.structure, change),
-    range: shifted(result.range, change),
-    shows: shifted(result.shows, change),
+    structure: result.structure && moveStructure(result.structure, changes),
+    range: shifted(result.range, changes),
+    shows: shifted(result.shows, changes),
   }));
 }
 
-function moveStructure(structure: Structure, change: Change): Structure {
+function moveStructure(structure: Structure, changes: readonly Change[]): Structure {
   const move = <T extends { readonly range: Range }>(parts: readonly T[]): T[] =>
-    parts.map(part => ({ ...part, range: shifted(part.range, change) }));
+    parts.map(part => ({ ...part, range: shifted(part.range, changes) }));
   return {
     ...structure,
-    range: shifted(structure.range, change),
+    range: shifted(structure.range, changes),
     points: move(structure.points),
     sections: move(structure.sections),
     members: move(structure.members),

@@ -40,7 +40,7 @@ function moveAll(source: Source, change: Change): Source {
 function moveFence(fence: SourceFence, change: Change): SourceFence {
   if (fence.range.end < change.oldEnd) return fence;
   const lines = fence.lines.map(line => moveLine(line, change));
-  return { ...fence, range: shifted(fence.range, change), lines };
+  return { ...fence, range: shifted(fence.range, [change]), lines };
 }
 
 function moveLine(line: SourceLine, change: Change): SourceLine {
@@ -49,7 +49,7 @@ function moveLine(line: SourceLine, change: Change): SourceLine {
 
 function moveSpan(span: SourceSpan, change: Change): SourceSpan {
   if (span.range.start < change.oldEnd) return span;
-  return { ...span, range: shifted(span.range, change), start: span.start + change.shift };
+  return { ...span, range: shifted(span.range, [change]), start: span.start + change.shift };
 }
 
 function withLine(fence: SourceFence, moved: SourceFence, index: number, after: string, change: Change): SourceFence {

@@ -14,7 +14,9 @@ export interface NoteResult {
   readonly path: string;
   readonly text: string;
   readonly frontMatter: FrontMatter;
-  /** In the order of the text. A note without a tautline fence has none, and an otherwise empty result. */
+  /** Whether the text holds a fence of ours; without one the rest is empty. */
+  readonly isCalculation: boolean;
+  /** In the order of the text. */
   readonly fences: readonly Fence[];
   readonly structures: readonly StructureResult[];
   /** Every `find` and `require`, in the order of the text. */

@@ -9,6 +9,7 @@ export function resultWith(parts: Partial<NoteResult>): NoteResult {
     path: 'rafter.md',
     text: '',
     frontMatter: {},
+    isCalculation: true,
     fences: [],
     structures: [],
     answers: [],
