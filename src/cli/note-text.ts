@@ -13,6 +13,7 @@ export function noteText(result: NoteResult, width: number, style: Style): strin
   const blocks = [
     [style.strong(safeText(result.path)) + (title === undefined ? '' : `  ${safeText(title)}`)],
     ...(result.structures.length === 0 ? [valuesText(result)] : []),
+    ...(isProse(result) ? [['  no tautline fence']] : []),
     ...result.structures.map(structure => structureText(result, structure, width, style)),
     ...result.diagnostics.map(diagnostic => diagnosticText(diagnostic, result.path, lines, style)),
   ];
@@ -43,6 +44,10 @@ export function summaryText(results: readonly NoteResult[], style: Style): strin
     ...(warnings > 0 ? [style.warning(counted(warnings, 'warning'))] : []),
   ];
   return `${parts.join(', ')}\n`;
+}
+
+function isProse({ fences, structures, values, diagnostics }: NoteResult): boolean {
+  return [fences, structures, values, diagnostics].every(({ length }) => length === 0);
 }
 
 /** A note that only holds values shows them; with a structure they are its inputs, and would be in the way. */

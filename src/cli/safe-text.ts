@@ -34,7 +34,8 @@ export function widthOf(text: string): number {
   return width;
 }
 
-const PLAIN = /^[ -~]*$/;
+/** Latin letters, dashes, quotes, arrows and signs: one column each, known without the slow look at Unicode's properties. */
+const PLAIN = /^[ -~\u00a0-\u00ac\u00ae-\u02ff\u2010-\u2027\u2190-\u22ff]*$/;
 const ZERO_WIDTH = /^[\p{Mn}\p{Me}\p{Cf}]$/u;
 const WIDE =
   /^[\p{Script=Han}\p{Script=Hiragana}\p{Script=Katakana}\p{Script=Hangul}\u3000-\u303e\uff01-\uff60\uffe0-\uffe6\p{Emoji_Presentation}]$/u;

@@ -94,6 +94,14 @@ describe('folders', () => {
     expect(pathsOf((await folder.run('check', '--json', 'notes/b.md', 'notes')).out)[0]).toBe('notes/b.md');
   });
 
+  it('are not needed: a note without a calculation may be named, and is well', async () => {
+    const { status, out } = await open({ 'README.md': '# Nothing\n' }).run('check', 'README.md');
+    expect({ status, out }).toEqual({
+      status: 0,
+      out: 'README.md\n\n  no tautline fence\n\n1 note, 0 of 0 requirements met\n',
+    });
+  });
+
   it('without a note say so', async () => {
     const { status, out, error } = await open({ 'a/README.md': '# Nothing\n' }).run('check', 'a');
     expect({ status, out }).toEqual({ status: 0, out: '' });
