@@ -11,7 +11,7 @@ import { NoteEvaluation } from './evaluation.ts';
 import { readSource, type Source, type SourceFence } from './fences.ts';
 import { fingerprintOf } from './fingerprint.ts';
 import { type FrontMatterBlock, readFrontMatter } from './front-matter.ts';
-import { type FenceRead, Memory, type NoteState } from './memory.ts';
+import { type FenceRead, Memory, type NoteState, SolvedStructures } from './memory.ts';
 import { movedResult } from './moved-result.ts';
 import { movedSource } from './moved-source.ts';
 import type { Fence, NoteResult } from './result.ts';
@@ -38,41 +38,44 @@ export function createMemory(): Memory {
 export function evaluateNote(text: string, options: EvaluateOptions): NoteResult {
   if (text.length > MOST_TEXT) return tooLarge(text, options);
   const memory = options.memory ?? createMemory();
-  const state = advance(memory.lastOf(options.path), text, options, memory);
+  const state = advance(memory.lastOf(options.path), text, options);
   memory.keep(options.path, state);
   return state.result;
 }
 
 /** The state of a note, from that before a change where the change leaves its blocks as they were. */
-function advance(last: NoteState | undefined, text: string, options: EvaluateOptions, memory: Memory): NoteState {
+function advance(last: NoteState | undefined, text: string, options: EvaluateOptions): NoteState {
   const change = last === undefined ? undefined : changeBetween(last.result.text, text);
   if (last !== undefined && change === undefined) return last;
   const moved =
     last === undefined || change === undefined || change.start < last.front.length
       ? undefined
       : movedSource(last.source, last.result.text, text, change);
-  if (last === undefined || change === undefined || moved === undefined) return begin(text, options, memory);
+  if (last === undefined || change === undefined || moved === undefined) return begin(text, options, last?.solved);
   const { source, changed } = moved;
   if (changed === undefined) return { ...last, source, result: movedResult(last.result, text, change) };
   const reads = source.fences.map((fence, i) =>
     i === changed ? readFence(fence, text) : readAt(last.reads[i]!, fence),
   );
-  return { front: last.front, source, reads, result: resultOf(text, options, memory, last.front, source, reads) };
+  const solved = new SolvedStructures(last.solved);
+  const { front } = last;
+  return { front, source, reads, solved, result: resultOf(text, options, solved, front, source, reads) };
 }
 
-function begin(text: string, options: EvaluateOptions, memory: Memory): NoteState {
+function begin(text: string, options: EvaluateOptions, before: SolvedStructures | undefined): NoteState {
+  const solved = new SolvedStructures(before);
   const front = readFrontMatter(text);
   const source = readSource(text, front.length);
   const reads = source.fences.map(fence => readFence(fence, text));
   const result =
-    source.fences.length === 0 ? nothing(text, options, front) : resultOf(text, options, memory, front, source, reads);
-  return { front, source, reads, result };
+    source.fences.length === 0 ? nothing(text, options, front) : resultOf(text, options, solved, front, source, reads);
+  return { front, source, reads, solved, result };
 }
 
 function resultOf(
   text: string,
   { path }: EvaluateOptions,
-  memory: Memory,
+  solved: SolvedStructures,
   front: FrontMatterBlock,
   source: Source,
   reads: readonly FenceRead[],
@@ -82,7 +85,7 @@ function resultOf(
     fileName(path),
   );
   const names = resolveNames(scopes);
-  const evaluation = new NoteEvaluation({ text, scopes, names, memory, wordsOf: range => wordsOf(text, range) });
+  const evaluation = new NoteEvaluation({ text, scopes, names, solved, wordsOf: range => wordsOf(text, range) });
   const { structures, answers, values } = evaluation.run();
   const prose = source.spans.map(span => {
     const { value, diagnostics } = parseProse(span.text, span.start);

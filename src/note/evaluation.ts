@@ -16,7 +16,7 @@ import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { answerTo, spanOf } from './answers.ts';
 import type { SourceSpan } from './fences.ts';
-import type { Memory } from './memory.ts';
+import type { SolvedStructures } from './memory.ts';
 import { Descent, Once } from './once.ts';
 import { show } from './phrases.ts';
 import { remarksOn } from './remarks.ts';
@@ -29,7 +29,7 @@ export interface EvaluationInputs {
   readonly text: string;
   readonly scopes: Scopes;
   readonly names: Names;
-  readonly memory: Memory;
+  readonly solved: SolvedStructures;
   readonly wordsOf: (range: Range) => string;
 }
 
@@ -76,7 +76,7 @@ export class NoteEvaluation {
           names,
           values: this.#values,
           library: this.#library,
-          memory: inputs.memory,
+          solved: inputs.solved,
           descent: this.#descent,
           wordsOf: inputs.wordsOf,
         }),

@@ -24,12 +24,12 @@ export interface NoteState {
   readonly source: Source;
   /** For each fence. */
   readonly reads: readonly FenceRead[];
+  readonly solved: SolvedStructures;
   readonly result: NoteResult;
 }
 
-/** Structures solved lately, by all that their solution depends on, and the last state of each note. One memory serves many evaluations of many notes. */
+/** The last state of each note. One memory serves many evaluations of many notes. */
 export class Memory {
-  readonly #solved = new Map<string, Solved>();
   readonly #notes = new Map<string, NoteState>();
 
   lastOf(path: string): NoteState | undefined {
@@ -37,24 +37,31 @@ export class Memory {
   }
 
   keep(path: string, state: NoteState): void {
+    // Used last, dropped last.
     this.#notes.delete(path);
     this.#notes.set(path, state);
-    if (this.#notes.size > MOST_REMEMBERED) this.#notes.delete(this.#notes.keys().next().value!);
-  }
-
-  solve(structure: Structure, key: string): Solved {
-    const known = this.#solved.get(key);
-    if (known !== undefined) {
-      // Used last, dropped last.
-      this.#solved.delete(key);
-      this.#solved.set(key, known);
-      return known;
-    }
-    const solved = new Solved(structure);
-    this.#solved.set(key, solved);
-    if (this.#solved.size > MOST_REMEMBERED) this.#solved.delete(this.#solved.keys().next().value!);
-    return solved;
+    if (this.#notes.size > MOST_NOTES) this.#notes.delete(this.#notes.keys().next().value!);
   }
 }
 
-const MOST_REMEMBERED = 64;
+const MOST_NOTES = 64;
+
+/**
+ * The structures that one evaluation solves. One that the evaluation before solved too is taken from there; what neither
+ * asked for is let go, since a drawn-out edit would otherwise leave a solution for each keystroke.
+ */
+export class SolvedStructures {
+  readonly #before: ReadonlyMap<string, Solved>;
+  readonly #now = new Map<string, Solved>();
+
+  constructor(before: SolvedStructures | undefined) {
+    this.#before = before === undefined ? new Map() : before.#now;
+  }
+
+  /** `key` is all that the solution depends on. */
+  solve(structure: Structure, key: string): Solved {
+    const solved = this.#now.get(key) ?? this.#before.get(key) ?? new Solved(structure);
+    this.#now.set(key, solved);
+    return solved;
+  }
+}

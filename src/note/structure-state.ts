@@ -14,7 +14,7 @@ import { nearest } from '../quantity/nearest.ts';
 import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
 import { describeInstability } from './instability.ts';
-import type { Memory } from './memory.ts';
+import type { SolvedStructures } from './memory.ts';
 import { type Descent, Once, type Refusal } from './once.ts';
 import { type Solved, solutionKey } from './solved.ts';
 import type { Values } from './values.ts';
@@ -25,7 +25,7 @@ export interface StateInputs {
   readonly names: Names;
   readonly values: Values;
   readonly library: Library;
-  readonly memory: Memory;
+  readonly solved: SolvedStructures;
   readonly descent: Descent;
   readonly wordsOf: (range: Range) => string;
 }
@@ -146,7 +146,7 @@ export class StructureState {
   #solve(): Solved | undefined {
     const structure = this.structure();
     if (structure === undefined || this.report.flawed) return undefined;
-    const solved = this.#inputs.memory.solve(structure, solutionKey(structure));
+    const solved = this.#inputs.solved.solve(structure, solutionKey(structure));
     const { stability, tooLarge, conflict } = solved.analysis;
     if (tooLarge !== undefined) return this.#refuseSize(structure, tooLarge);
     if (conflict !== undefined) return this.#conflict(structure, conflict);
