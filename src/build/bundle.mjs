@@ -1,6 +1,6 @@
 // Bundles what is shipped into dist/. The same sources give the same bytes: no dates, no machine's paths.
 // With names behind it (`bundle.mjs cli server`) it makes only those, and leaves the others as they are.
-import { mkdir, readdir, readFile, rm, writeFile } from 'node:fs/promises';
+import { chmod, mkdir, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { dirname, join, relative } from 'node:path';
 import process from 'node:process';
 import { fileURLToPath } from 'node:url';
@@ -15,15 +15,11 @@ const MODULE = { target: 'node20', format: 'esm', outExtension: { '.js': '.mjs' 
 // VS Code for the Web reads an extension as CommonJS from a file that ends in .js.
 const BROWSER = { platform: 'browser', target: 'es2022', format: 'cjs' };
 
-/** CommonJS packages inside an ES module ask for Node's own modules with `require`. */
-const REQUIRE = "import { createRequire } from 'node:module';const require = createRequire(import.meta.url);";
-
-/** The compile cache keeps V8's code between runs, which halves the start. Node 20 has none and does without. */
-const CLI_START = `#!/usr/bin/env node
-import module from 'node:module';
-module.enableCompileCache?.();
-await import('./cli/main.mjs');
-`;
+/** What an ES module would know of its own place, for one that is bundled as CommonJS. */
+const PLACE = {
+  define: { 'import.meta.url': 'place' },
+  banner: { js: "const place = require('node:url').pathToFileURL(__filename).href;" },
+};
 
 /**
  * The desktop extension is three files, so that opening a README in VS Code reads the smallest of them only: the client
@@ -46,14 +42,15 @@ const BUNDLES = {
     mainFields: ['module', 'main'],
     entryPoints: { 'markdown-it-plugin': 'src/page/index.ts' },
   },
-  cli: {
-    ...MODULE,
-    platform: 'node',
-    splitting: true,
-    entryPoints: { 'cli/main': 'src/cli/main.ts' },
-    chunkNames: 'cli/[name]-[hash]',
-    banner: { js: REQUIRE },
+  // A small file starts the program from compiled code. The server is a file of its own, which no other command reads.
+  cli: { ...NODE, entryPoints: { cli: 'src/cli/start.ts' }, banner: { js: '#!/usr/bin/env node' } },
+  'cli-program': {
+    ...NODE,
+    ...PLACE,
+    entryPoints: { 'cli/program': 'src/cli/main.ts' },
+    plugins: [apart('../server/node.ts', './language-server.cjs')],
   },
+  'cli-language-server': { ...NODE, entryPoints: { 'cli/language-server': 'src/server/node.ts' } },
 };
 
 const asked = process.argv.slice(2);
@@ -64,10 +61,10 @@ if (unknown.length > 0) {
 const wanted = Object.entries(BUNDLES).filter(([name]) => asked.length === 0 || asked.includes(name));
 const made = await Promise.all(wanted.map(([, options]) => bundle(options)));
 await mkdir(dist, { recursive: true });
-await writeFile(join(dist, 'cli.mjs'), CLI_START, { mode: 0o755 });
+if (wanted.some(([name]) => name === 'cli')) await chmod(join(dist, 'cli.cjs'), 0o755);
 if (asked.length === 0) {
   await writeFile(join(dist, 'third-party-licences.txt'), await licences(made));
-  await removeOthers(['cli.mjs', 'third-party-licences.txt', ...made.flatMap(outputsOf)]);
+  await removeOthers(['third-party-licences.txt', ...made.flatMap(outputsOf)]);
 }
 
 /** Paths below dist, with forward slashes. */
@@ -93,8 +90,20 @@ function bundle(options) {
     legalComments: 'none',
     logLevel: 'warning',
     metafile: true,
+    // The build of yaml for Node asks for modules of Node that nothing here needs.
+    alias: { yaml: './node_modules/yaml/browser/index.js' },
     ...options,
   });
+}
+
+/** Leaves one module of the sources out of a bundle: it is read from a file of its own when it is asked for. */
+function apart(source, file) {
+  return {
+    name: `apart ${source}`,
+    setup: ({ onResolve }) => {
+      onResolve({ filter: /./ }, ({ path }) => (path === source ? { path: file, external: true } : undefined));
+    },
+  };
 }
 
 /** The licences of the packages that went into the bundles, by name. A package without one stops the build. */

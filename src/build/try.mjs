@@ -10,7 +10,7 @@ const sample = 'media/sample';
 const pages = 'out/pages';
 
 run(['src/build/bundle.mjs']);
-run(['dist/cli.mjs', 'check', sample]);
+run(['dist/cli.cjs', 'check', sample]);
 const written = writePages();
 console.log(`
 The same notes as pages, to be opened in a browser or printed:
@@ -20,7 +20,7 @@ To have it where the notes are written:
   npm run package && code --install-extension out/tautline.vsix
   code ${sample}/slip-canopy.md        and open its preview beside it
 On the command line:
-  node dist/cli.mjs --help
+  node dist/cli.cjs --help
 The language is told in media/reference.md.`);
 
 function writePages() {
@@ -28,7 +28,7 @@ function writePages() {
   const notes = readdirSync(join(root, sample)).filter(name => name.endsWith('.md'));
   return notes.sort().map(name => {
     const page = `${pages}/${name.replace(/\.md$/, '.html')}`;
-    run(['dist/cli.mjs', 'print', `${sample}/${name}`, '-o', page], 'ignore');
+    run(['dist/cli.cjs', 'print', `${sample}/${name}`, '-o', page], 'ignore');
     return page;
   });
 }

@@ -1,5 +1,4 @@
 // `tautline print NOTE -o FILE`: a note with its results as one HTML page that needs nothing else.
-import { randomBytes } from 'node:crypto';
 import { readFileSync, realpathSync, renameSync, rmSync, statSync, writeFileSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
 import packageFile from '../../package.json' with { type: 'json' };
@@ -57,9 +56,9 @@ function writeWhole(file: string, page: string, note: FoundNote): void {
   if (there !== undefined && realpathSync(file) === realpathSync(note.file)) {
     throw new UsageError('the page would overwrite its note');
   }
-  const draft = join(dirname(file), `.tautline-${randomBytes(6).toString('hex')}`);
+  const draft = join(dirname(file), `.tautline-${process.pid}-${Date.now()}`);
   try {
-    writeFileSync(draft, page);
+    writeFileSync(draft, page, { flag: 'wx' });
     renameSync(draft, file);
   } catch (error) {
     rmSync(draft, { force: true });

@@ -1,7 +1,9 @@
-// The command line: picks the command, and turns wrong usage into a line and an exit status. Commands are loaded when
-// they are called, so that none pays for another's libraries.
+// The command line: picks the command, and turns wrong usage into a line and an exit status. The language server brings
+// a library of its own, so it is loaded when it is called.
 import packageFile from '../../package.json' with { type: 'json' };
+import { check } from './check.ts';
 import { type Arguments, COMMANDS, type CommandName, helpText, readArguments } from './options.ts';
+import { print } from './print.ts';
 import { safeText } from './safe-text.ts';
 import { EXIT, UsageError, type World } from './world.ts';
 
@@ -17,8 +19,8 @@ export async function run(args: readonly string[], world: World): Promise<number
 }
 
 const RUN: Readonly<Record<CommandName, (args: Arguments, world: World) => Promise<number>>> = {
-  check: async (args, world) => (await import('./check.ts')).check(args, world),
-  print: async (args, world) => (await import('./print.ts')).print(args, world),
+  check: async (args, world) => check(args, world),
+  print: async (args, world) => print(args, world),
   'language-server': async args => (await import('./language-server.ts')).languageServer(args),
 };
 

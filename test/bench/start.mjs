@@ -17,7 +17,7 @@ try {
   ]) {
     const file = join(folder, `${name.replace(' ', '-')}.md`);
     writeFileSync(file, text);
-    const run = ['dist/cli.mjs', 'check', file];
+    const run = ['dist/cli.cjs', 'check', file];
     // The first runs fill the compile cache and the disk's.
     for (let i = 0; i < 3; i += 1) time(run);
     const pairs = Array.from({ length: PAIRS }, () => ({ floor: time(['-e', '0']), check: time(run) }));

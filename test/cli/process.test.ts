@@ -4,7 +4,7 @@ import { join } from 'node:path';
 import { describe, expect, it } from 'vitest';
 
 const root = join(import.meta.dirname, '../..');
-const cli = join(root, 'dist/cli.mjs');
+const cli = join(root, 'dist/cli.cjs');
 
 describe('the bundle', () => {
   it('solves the sample project, whose one failure is its own', () => {
