@@ -24,12 +24,14 @@ export function installEditor(root) {
 }
 
 /**
- * Starts a server of its own, with empty settings folders.
+ * Starts a server of its own, with empty settings folders. `vsix`: a package to install first, as a user does.
  * Resolves with its port, and a function that ends it and removes the folders.
  */
-export async function startEditor(main, { environment = {}, settings = {} } = {}) {
+export async function startEditor(main, { environment = {}, settings = {}, vsix } = {}) {
   const port = await freePort();
   const data = mkdtempSync(join(tmpdir(), 'tautline-editor-'));
+  const folders = ['--extensions-dir', join(data, 'extensions'), '--server-data-dir', data];
+  if (vsix !== undefined) install(main, vsix, folders);
   mkdirSync(join(data, 'data/Machine'), { recursive: true });
   writeFileSync(join(data, 'data/Machine/settings.json'), JSON.stringify(settings));
   const server = spawn(
@@ -38,7 +40,7 @@ export async function startEditor(main, { environment = {}, settings = {} } = {}
       main,
       ...['--host', '127.0.0.1', '--port', String(port), '--without-connection-token'],
       ...['--accept-server-license-terms', '--enable-smoke-test-driver', '--disable-workspace-trust'],
-      ...['--telemetry-level', 'off', '--extensions-dir', join(data, 'extensions'), '--server-data-dir', data],
+      ...['--telemetry-level', 'off', ...folders],
     ],
     { env: { ...process.env, ...environment }, stdio: ['ignore', 'pipe', 'pipe'] },
   );
@@ -63,6 +65,12 @@ export async function startEditor(main, { environment = {}, settings = {} } = {}
   }
   await stop();
   throw new Error(`the VS Code server did not start:\n${output}`);
+}
+
+function install(main, vsix, folders) {
+  const parameters = [main, '--install-extension', vsix, '--accept-server-license-terms', ...folders];
+  const { status, stdout, stderr } = spawnSync(process.execPath, parameters, { encoding: 'utf8' });
+  if (status !== 0) throw new Error(`${vsix} could not be installed:\n${stdout}${stderr}`);
 }
 
 export function pause(milliseconds) {

@@ -1,6 +1,7 @@
-// The editor suite in a real VS Code: `node test/editor/run.mjs [desktop|server|web]`. `desktop` downloads VS Code,
-// `server` uses the VS Code server in Chromium, `web` VS Code for the Web there; without a word it is the desktop where
-// that can be had, and the server otherwise.
+// The editor suite in a real VS Code: `node test/editor/run.mjs [desktop|server|installed|web]`. `desktop`
+// downloads VS Code, `server` uses the VS Code server in Chromium, `installed` the same with the packaged extension,
+// installed as a user does, `web` VS Code for the Web; without a word it is the desktop where that can be had, and the
+// server otherwise.
 import { cpSync, existsSync, mkdirSync, mkdtempSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { dirname, join } from 'node:path';
@@ -39,6 +40,7 @@ try {
 async function runner() {
   const [asked = process.env.TAUTLINE_EDITOR] = process.argv.slice(2);
   if (asked === 'server') return inServer;
+  if (asked === 'installed') return inServerInstalled;
   if (asked === 'web') return onWeb;
   const { downloadAndUnzipVSCode } = await import('@vscode/test-electron');
   try {
@@ -64,13 +66,28 @@ async function onDesktop(vscodeExecutablePath) {
   return readResults();
 }
 
-async function inServer() {
+function inServer() {
+  return runInServer(root);
+}
+
+/** The extension under development is an empty one: it only brings the suite along. */
+async function inServerInstalled() {
+  await import('../../src/build/package.mjs');
+  const bearer = join(work, 'bearer');
+  mkdirSync(bearer);
+  const manifest = { name: 'suite', publisher: 'tautline', version: '0.0.0', engines: { vscode: '*' } };
+  writeFileSync(join(bearer, 'package.json'), JSON.stringify(manifest));
+  return runInServer(bearer, join(root, 'out/tautline.vsix'));
+}
+
+async function runInServer(extension, vsix) {
   await bundleForNode();
-  const server = await startEditor(installEditor(root), { environment: { TAUTLINE_RESULTS: resultsFile } });
+  const environment = { TAUTLINE_RESULTS: resultsFile };
+  const server = await startEditor(installEditor(root), { environment, vsix });
   const browser = await openBrowser();
   try {
     const page = await browser.newPage();
-    await page.goto(workbenchAddress(server.port, { folder, extension: root, suite }));
+    await page.goto(workbenchAddress(server.port, { folder, extension, suite }));
     const end = Date.now() + LIMIT;
     while (!existsSync(resultsFile) && Date.now() < end) await pause(250);
     if (!existsSync(resultsFile)) await giveUp(page, server.output());

@@ -1,5 +1,6 @@
 // Pictures of the real thing, to be looked at: a note beside its preview, with a hover, in each theme.
-// `node test/editor/screenshots.mjs [NOTE [WORDS]]` writes out/screenshots/THEME.png; WORDS is where the pointer rests.
+// `node test/editor/screenshots.mjs [NOTE [WORDS]]` writes out/screenshots/THEME.png from the
+// packaged extension (`npm run package` first); WORDS is where the pointer rests.
 import { cpSync, mkdirSync, mkdtempSync, rmSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { dirname, join } from 'node:path';
@@ -16,6 +17,7 @@ const THEMES = {
 };
 
 const root = join(dirname(fileURLToPath(import.meta.url)), '../..');
+const vsix = join(root, 'out/tautline.vsix');
 const target = join(root, 'out/screenshots');
 const [note = 'slip-canopy.md', words = 'sag of R1'] = process.argv.slice(2);
 
@@ -36,15 +38,17 @@ async function picture(name, theme) {
     'chat.disableAIFeatures': true,
     'editor.minimap.enabled': false,
     'window.commandCenter': false,
+    // biome-ignore lint/suspicious/noTemplateCurlyInString: the editor's own placeholder
+    'window.title': '${activeEditorShort}',
     'editor.stickyScroll.enabled': false,
     'editor.fontSize': 13,
     'editor.hover.delay': 100,
     'git.enabled': false,
   };
-  const server = await startEditor(main, { settings });
+  const server = await startEditor(main, { settings, vsix });
   try {
     const page = await browser.newPage({ viewport: { width: 1680, height: 1050 } });
-    await page.goto(workbenchAddress(server.port, { folder, extension: root }));
+    await page.goto(workbenchAddress(server.port, { folder }));
     await page.locator('.monaco-workbench').waitFor();
     await pause(3000);
     await pick(page, 'F1', '>Preferences: Color Theme', /^Preferences: Color Theme/);
