@@ -1,6 +1,6 @@
 // Keeps the open notes: each version of a text is evaluated once, whoever asks first, and its diagnostics are sent as
 // soon as the writer can use them.
-import type { Diagnostic } from 'vscode-languageserver';
+import { type Diagnostic, DiagnosticSeverity } from 'vscode-languageserver';
 import type { TextDocument } from 'vscode-languageserver-textdocument';
 import { mayHoldCalculation } from '../note/calculation-mark.ts';
 import { createMemory, evaluateNote } from '../note/evaluate.ts';
@@ -19,11 +19,22 @@ interface Kept {
   timer: ReturnType<typeof setTimeout> | undefined;
   /** Whether the editor shows diagnostics of ours for this text. */
   reported: boolean;
+  /** Whether the program itself failed on this version. */
+  failed: boolean;
 }
 
 /** An evaluation that is over within one frame of the screen answers each keystroke; a longer one waits for a pause. */
 const AT_ONCE = 16;
 const LONGEST_WAIT = 400;
+
+/** No diagnostic of the note: its code is not one of the language's. */
+const FAILURE: Diagnostic = {
+  range: { start: { line: 0, character: 0 }, end: { line: 0, character: 1 } },
+  severity: DiagnosticSeverity.Error,
+  source: 'tautline',
+  code: 'program-failure',
+  message: 'The program failed on this note, which is its own mistake: no figure is shown. Its output has the details.',
+};
 
 export class NoteKeeper {
   readonly #kept = new Map<string, Kept>();
@@ -71,6 +82,7 @@ export class NoteKeeper {
       duration: 0,
       timer: undefined,
       reported: false,
+      failed: false,
     };
     this.#kept.set(uri, fresh);
     return fresh;
@@ -80,13 +92,15 @@ export class NoteKeeper {
   #report(document: TextDocument): void {
     const note = this.noteOf(document);
     const kept = this.#keptOf(document.uri);
-    if (note === undefined && !kept.reported) return;
-    kept.reported = note !== undefined;
-    this.#send(document.uri, document.version, note === undefined ? [] : diagnosticsOf(note));
+    const diagnostics = note === undefined ? (kept.failed ? [FAILURE] : []) : diagnosticsOf(note);
+    if (note === undefined && !kept.failed && !kept.reported) return;
+    kept.reported = note !== undefined || kept.failed;
+    this.#send(document.uri, document.version, diagnostics);
   }
 
-  /** A throw is a mistake in the program: it is logged, and costs the figures of this version of the note only. */
+  /** A throw is a mistake in the program: it is logged and told, and costs the figures of this version of the note only. */
   #evaluate(document: TextDocument, kept: Kept): OpenNote | undefined {
+    kept.failed = false;
     const text = document.getText();
     if (!mayHoldCalculation(text)) return undefined;
     const start = performance.now();
@@ -95,6 +109,7 @@ export class NoteKeeper {
       return result.isCalculation ? { document, result } : undefined;
     } catch (error) {
       this.#log(error instanceof Error ? (error.stack ?? error.message) : String(error));
+      kept.failed = true;
       return undefined;
     } finally {
       kept.duration = performance.now() - start;
