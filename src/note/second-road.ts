@@ -50,8 +50,14 @@ export function hold({ measure, place, value, factors, solved }: Taken): Held {
     const other = solved.secondRoad.movement(factors, () => solution, way);
     if (other === undefined || Number.isNaN(other.value)) continue;
     const apart = Math.abs(value - other.value);
-    const scale = Math.max(Math.abs(value), Math.abs(other.value), SMALL_ANSWER * largest);
-    const difference = (apart <= other.rounding ? 0 : apart / scale) + other.gap;
+    // Against the last term, two roads that differ by rounding alone agree.
+    const scale = Math.max(
+      Math.abs(value),
+      Math.abs(other.value),
+      SMALL_ANSWER * largest,
+      other.rounding / MOST_DIFFERENCE,
+    );
+    const difference = (scale === 0 ? 0 : apart / scale) + other.gap;
     if (difference < held.difference) held = { difference, rounding: other.rounding };
   }
   return held;
