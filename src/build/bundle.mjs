@@ -48,9 +48,10 @@ const BUNDLES = {
     ...NODE,
     ...PLACE,
     entryPoints: { 'cli/program': 'src/cli/main.ts' },
-    plugins: [apart('../server/node.ts', './language-server.cjs')],
+    // A script that is started from compiled code may require, not import.
+    supported: { 'dynamic-import': false },
+    plugins: [apart('../server/node-main.ts', '../server.cjs')],
   },
-  'cli-language-server': { ...NODE, entryPoints: { 'cli/language-server': 'src/server/node.ts' } },
 };
 
 const asked = process.argv.slice(2);

@@ -1,7 +1,7 @@
-// The command line: picks the command, and turns wrong usage into a line and an exit status. The language server brings
-// a library of its own, so it is loaded when it is called.
+// The command line: picks the command, and turns wrong usage into a line and an exit status.
 import packageFile from '../../package.json' with { type: 'json' };
 import { check } from './check.ts';
+import { languageServer } from './language-server.ts';
 import { type Arguments, COMMANDS, type CommandName, helpText, readArguments } from './options.ts';
 import { print } from './print.ts';
 import { safeText } from './safe-text.ts';
@@ -21,7 +21,7 @@ export async function run(args: readonly string[], world: World): Promise<number
 const RUN: Readonly<Record<CommandName, (args: Arguments, world: World) => Promise<number>>> = {
   check: async (args, world) => check(args, world),
   print: async (args, world) => print(args, world),
-  'language-server': async args => (await import('./language-server.ts')).languageServer(args),
+  'language-server': languageServer,
 };
 
 async function dispatch([first, ...rest]: readonly string[], world: World): Promise<number> {
