@@ -13,8 +13,6 @@ await createVSIX({
   packagePath: target,
   dependencies: false,
   allowMissingRepository: true,
-  // The command line may not have left its compiled code, which is not to be packed.
-  allowUnusedFilesPattern: true,
   rewriteRelativeLinks: false,
 });
 console.log(`out/tautline.vsix, ${Math.round(statSync(target).size / 1024)} kB
