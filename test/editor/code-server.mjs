@@ -18,7 +18,9 @@ export function installEditor(root) {
   writeFileSync(join(folder, 'package.json'), '{ "private": true }\n');
   console.log(`Installing code-server ${VERSION} into .editor/ …`);
   const parameters = ['install', `code-server@${VERSION}`, '--loglevel=error', '--no-progress', '--no-package-lock'];
-  const { status } = spawnSync('npm', parameters, { cwd: folder, stdio: 'inherit' });
+  // Its install script takes the word of an npm further out for the version of Node.
+  const own = Object.entries(process.env).filter(([name]) => !/^npm_/i.test(name));
+  const { status } = spawnSync('npm', parameters, { cwd: folder, env: Object.fromEntries(own), stdio: 'inherit' });
   if (status !== 0 || !existsSync(main)) throw new Error('code-server could not be installed');
   return main;
 }
