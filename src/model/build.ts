@@ -15,7 +15,8 @@ export interface Building {
   readonly scope: Scope;
   readonly names: Names;
   readonly geometry: Geometry;
-  readonly library: Library;
+  /** Materials and sections. */
+  readonly stock: Library;
   readonly figures: Figures;
   readonly report: Report;
   /** Titles of cases, from `case` lines of the structure and of the head. */
@@ -85,7 +86,7 @@ class Sections {
   /** Index of the leg's section; that of an empty one, and the structure flawed, where there is none. */
   #sectionOf(leg: LaidLeg, member: LaidMember): number {
     const definition = leg.section === undefined ? this.#onlySection(member) : this.#find(leg.section);
-    const found = definition === undefined ? undefined : this.#building.library.section(definition);
+    const found = definition === undefined ? undefined : this.#building.stock.section(definition);
     if (definition === undefined || found === undefined) {
       this.#building.report.flawed = true;
       return this.#index('', () => UNKNOWN_SECTION);

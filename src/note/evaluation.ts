@@ -66,7 +66,7 @@ export class NoteEvaluation {
       (item: Item) => inputs.wordsOf(item.range),
       this.#report,
     );
-    this.#values.library = this.#library;
+    this.#values.stock = this.#library;
     this.#readDisplay();
     this.#states = scopes.structures.map(
       scope =>
@@ -75,7 +75,7 @@ export class NoteEvaluation {
           head: scopes.head,
           names,
           values: this.#values,
-          library: this.#library,
+          stock: this.#library,
           solved: inputs.solved,
           descent: this.#descent,
           wordsOf: inputs.wordsOf,

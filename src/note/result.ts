@@ -3,11 +3,14 @@
 import type { Diagnostic } from '../language/diagnostic.ts';
 import type { Statement } from '../language/syntax.ts';
 import type { Analysis, Solution } from '../mechanics/solution.ts';
+import type { NameEntry } from '../model/names.ts';
 import type { ResolvedMeasure } from '../model/question.ts';
 import type { Structure } from '../model/structure.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
+
+export type { NameEntry, Namespace } from '../model/names.ts';
 
 export interface NoteResult {
   /** As given by the face, with forward slashes; used in messages and in JSON. */
@@ -163,26 +166,4 @@ export interface ProseValue {
   readonly display: string;
   /** The whole code span, its backticks included. */
   readonly range: Range;
-}
-
-export type Namespace =
-  | 'structure'
-  | 'point'
-  | 'member'
-  | 'section'
-  | 'material'
-  | 'case'
-  | 'combination'
-  | 'value'
-  | 'result';
-
-/** One name with all its places: what hover, completion, go-to-definition and rename read. */
-export interface NameEntry {
-  readonly namespace: Namespace;
-  readonly name: string;
-  /** Name of the structure that owns it; undefined for the note's head. */
-  readonly structure: string | undefined;
-  /** Where it is defined first (for a point: first named in a chain or placed). */
-  readonly definition: Range;
-  readonly uses: readonly Range[];
 }

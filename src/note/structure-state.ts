@@ -24,7 +24,7 @@ export interface StateInputs {
   readonly head: Scope;
   readonly names: Names;
   readonly values: Values;
-  readonly library: Library;
+  readonly stock: Library;
   readonly solved: SolvedStructures;
   readonly descent: Descent;
   readonly wordsOf: (range: Range) => string;
@@ -78,7 +78,7 @@ export class StructureState {
   }
 
   #build(): Structure | undefined {
-    const { scope, head, names, values, library } = this.#inputs;
+    const { scope, head, names, values, stock } = this.#inputs;
     const geometry = this.geometry();
     if (geometry === undefined) return undefined;
     if (brokenBeyond(scope.broken)) this.report.flawed = true;
@@ -98,7 +98,7 @@ export class StructureState {
       scope,
       names,
       geometry,
-      library,
+      stock,
       figures: values.figures(scope, this.report),
       report: this.report,
       titles,

@@ -43,8 +43,8 @@ export class Values {
   readonly #structures: Structures;
   readonly #descent: Descent;
   readonly #lets = new Map<Definition, Once<Quantity>>();
-  /** Set once the library is there: materials are read with values, and values read materials. */
-  library: Library | undefined;
+  /** Materials and sections, set once they are there: materials are read with values, and values read materials. */
+  stock: Library | undefined;
 
   constructor(names: Names, report: Report, structures: Structures, descent: Descent) {
     this.#descent = descent;
@@ -118,7 +118,7 @@ export class Values {
   #property(scope: Scope, property: Name, of: Name, range: Range, report: Report, frame: Frame): Quantity | undefined {
     const owner = this.#names.find(scope, ['section', 'material', 'structure'], of.text);
     if (owner === undefined) return undefined;
-    if (owner.namespace !== 'structure') return this.library?.property(owner, property);
+    if (owner.namespace !== 'structure') return this.stock?.property(owner, property);
     const found = this.#names.entries.find(
       entry =>
         entry.name === property.text &&
