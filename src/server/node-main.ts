@@ -1,5 +1,5 @@
-// The server in a Node process: over IPC when VS Code forks it, over standard streams for any editor. The process's own
-// arguments say which: `--node-ipc`, `--stdio`, `--pipe`, `--socket`. It serves as soon as it is loaded.
+// Entry of the server in a Node process. It speaks the way that the arguments of the process name: `--node-ipc` when
+// VS Code forks it, `--stdio` for any other editor.
 import { createConnection, ProposedFeatures } from 'vscode-languageserver/node';
 import { serve } from './server.ts';
 
