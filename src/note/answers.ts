@@ -248,6 +248,8 @@ function replaceSpans(limit: Value, words: string, wordsOf: (range: Range) => st
           .replace(/^ /, '')
           .replace(/ \/(?=\S)/g, ' / ')
           .replace(/ {2,}/g, ' ')
+          .replace(/\( /g, '(')
+          .replace(/ ([,)])/g, '$1')
       : text
   ).trim();
 }

@@ -48,3 +48,15 @@ test('a reaction that is nothing does not fail a limit of nothing', () => {
   );
   expect(seat!.status).toBe('ok');
 });
+
+test('a limit spells its span out where it stands', () => {
+  const [mid] = answers(
+    'section S: EI 10 MN m2',
+    'member R: A -- 5 m -- B',
+    'support A: pinned',
+    'support B: roller',
+    'load q: 1 kN/m down on R',
+    'require mid: deflection of R <= min(span/200, 30 mm) "brief"',
+  );
+  expect(mid!.limitDisplay).toBe('min(span A–B 5.000 m / 200, 30 mm) = 25.00 mm');
+});
