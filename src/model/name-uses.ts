@@ -36,7 +36,19 @@ export interface NameUse {
   readonly property?: Name;
 }
 
-export function usesIn(statement: Statement): NameUse[] {
+/** A statement does not change, so its uses are looked for once; most statements outlive a keystroke elsewhere. */
+export function usesIn(statement: Statement): readonly NameUse[] {
+  let uses = known.get(statement);
+  if (uses === undefined) {
+    uses = findUses(statement);
+    known.set(statement, uses);
+  }
+  return uses;
+}
+
+const known = new WeakMap<Statement, readonly NameUse[]>();
+
+function findUses(statement: Statement): NameUse[] {
   switch (statement.kind) {
     case 'structure':
     case 'case':

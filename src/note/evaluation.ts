@@ -286,11 +286,15 @@ export class NoteEvaluation {
     const { structure, statement, name, scope } = definition;
     // Without a `structure` line the values are the whole note's.
     const owner = scope.structure === undefined ? undefined : structure;
+    const displayOf = (value: Value, shown: Quantity): string => this.#show(scope, value, shown);
     return {
       name: owner === undefined ? name : `${owner}.${name}`,
       quantity,
       unit: quantity === undefined ? '' : siUnit(quantity.dimension),
-      display: quantity === undefined || statement.kind !== 'let' ? '' : this.#show(scope, statement.value, quantity),
+      // Shown when a face asks: most values are not, between one keystroke and the next.
+      get display() {
+        return quantity === undefined || statement.kind !== 'let' ? '' : displayOf(statement.value, quantity);
+      },
       range: statement.range,
       nameRange: definition.definition,
     };
