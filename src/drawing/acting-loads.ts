@@ -1,5 +1,6 @@
 // The loads that act together, case by case, spread onto legs and multiplied by their factors: what both the beam's and
 // the frame's drawing draw from.
+import { wholeCase } from '../model/patterns.ts';
 import type { Leg, LineDirection, Load, Location, Structure } from '../model/structure.ts';
 import { leftOut, thinned } from './thinning.ts';
 
@@ -57,14 +58,18 @@ export interface Single {
 /** The cases that have a load and a factor, in order. */
 export function actingCases(structure: Structure, factors: readonly number[]): ActingCase[] {
   const cases: ActingCase[] = [];
-  for (const [index, { name }] of structure.cases.entries()) {
-    const factor = factors[index] ?? 0;
-    if (factor === 0) continue;
+  for (const [index, { name, span }] of structure.cases.entries()) {
+    if (span !== undefined) continue;
+    // What is loaded of a patterned case stands with the rest of it.
+    const factorOf = (of: number): number => (wholeCase(structure.cases, of) === index ? (factors[of] ?? 0) : 0);
+    const acting = structure.cases.map((_, of) => factorOf(of)).find(one => one !== 0);
+    if (acting === undefined) continue;
     const stretches: Stretch[] = [];
     const singles: Single[] = [];
     const movements: Extract<Load, { kind: 'movement' }>[] = [];
     for (const [own, statement] of structure.loads.entries()) {
-      if (statement.case !== index) continue;
+      const factor = factorOf(statement.case);
+      if (factor === 0) continue;
       const load = firstOfStatement(structure, own);
       switch (statement.kind) {
         case 'self-weight':
@@ -88,7 +93,7 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
       const isTooMany = lines > MOST_STRETCHES;
       cases.push({
         name,
-        factor,
+        factor: acting,
         stretches: isTooMany ? weights : stretches,
         singles: thinned(singles),
         movements,

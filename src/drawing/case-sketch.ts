@@ -1,5 +1,6 @@
 // A small sketch of one case, unfactored: enough to see what it loads and which way it acts.
 import type { Reaction } from '../mechanics/solution.ts';
+import { wholeCase } from '../model/patterns.ts';
 import type { Structure } from '../model/structure.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import { type ActingCase, actingCases } from './acting-loads.ts';
@@ -34,7 +35,7 @@ export function caseSketch(
   palette: Palette,
 ): string {
   const sheet = new Sheet(WIDTH, palette);
-  const factors = structure.cases.map((_, i) => (i === index ? 1 : 0));
+  const factors = structure.cases.map((_, i) => (wholeCase(structure.cases, i) === index ? 1 : 0));
   const acting = actingCases(structure, factors)[0];
   const isFromSide = !isBeam(structure) && acting?.stretches.some(({ x, y }) => Math.abs(x) > Math.abs(y)) === true;
   const margin = isFromSide ? SIDE : MARGIN;

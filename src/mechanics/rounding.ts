@@ -19,6 +19,11 @@ export function rounded(solution: Solution, kind: Kind, value: number): number {
   return Math.abs(value) <= ROUNDING * sizesOf(solution)[kind] ? 0 : value + 0;
 }
 
+/** Values of a kind that are no larger are rounding. */
+export function roundingIn(solution: Solution, kind: Kind): number {
+  return ROUNDING * sizesOf(solution)[kind];
+}
+
 /** A difference between two sides of a place that is no jump: each side may err, and was integrated on its own. */
 export function sameValue(solution: Solution, kind: Kind, a: number, b: number): boolean {
   return Math.abs(a - b) <= 100 * ROUNDING * sizesOf(solution)[kind];

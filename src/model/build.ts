@@ -6,6 +6,7 @@ import { distanceOf } from './geometry.ts';
 import type { Library, SectionFigures } from './library.ts';
 import { readLoads } from './loads.ts';
 import type { Definition, Names } from './names.ts';
+import { dividePatterns } from './patterns.ts';
 import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
 import type { Hinge, Member, Section, Structure } from './structure.ts';
@@ -52,7 +53,7 @@ export function buildStructure(building: Building): Structure {
     report,
   );
   const title = scope.structure?.title?.text;
-  return {
+  return dividePatterns({
     name: scope.name ?? '',
     ...(title === undefined ? {} : { title }),
     range: scope.structure?.name.range ?? geometry.members[0]?.range ?? { start: 0, end: 0 },
@@ -64,7 +65,7 @@ export function buildStructure(building: Building): Structure {
     supports,
     cases,
     loads,
-  };
+  });
 }
 
 /** Sections in the order in which legs first name them. */

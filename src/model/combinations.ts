@@ -3,6 +3,7 @@ import type { StatementOf, Term, Under } from '../language/syntax.ts';
 import { DIMENSIONLESS } from '../quantity/dimension.ts';
 import type { Range } from '../quantity/range.ts';
 import type { Due, Figures } from './figures.ts';
+import { wholeCase } from './patterns.ts';
 import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
 import type { LoadCase } from './structure.ts';
@@ -68,10 +69,10 @@ export function readCombinations(
   return combinations;
 }
 
-/** A case alone: one alternative with the factor 1. */
+/** A whole case alone: one alternative with the factor 1. */
 export function caseAlone(cases: readonly LoadCase[], index: number): CombinationModel {
   const { name } = cases[index]!;
-  const factors = cases.map((_, i) => (i === index ? 1 : 0));
+  const factors = cases.map((_, i) => (wholeCase(cases, i) === index ? 1 : 0));
   const alternative = { label: undefined, line: undefined, text: name, factors, cases: [name] };
   return { name, kind: 'case', alternatives: [alternative], sound: true };
 }
@@ -130,8 +131,9 @@ function alternative(
   let doubled = 0;
   statement.terms.forEach((term, i) => {
     const sign = signOf(term, chosen[term.sign === '+-' ? doubled++ : 0]);
-    const index = cases.findIndex(other => other.name === term.case.text);
-    if (index >= 0) totals[index]! += sign * factors[i]!;
+    // Its spans, where it is patterned, bear its name.
+    for (const [index, { name: other }] of cases.entries())
+      if (other === term.case.text) totals[index]! += sign * factors[i]!;
   });
   return {
     label: label === '' ? undefined : label,

@@ -164,7 +164,6 @@ class LoadReader {
   }
 
   #line(body: Extract<LoadBody, { kind: 'line' }>, common: Common): boolean {
-    if (body.patterned) return this.#notYet(body.range, 'A patterned load');
     const from = this.#intensity(body.intensity);
     const to = body.to === undefined ? from : this.#intensity(body.to);
     const members = this.#membersOf(body.on);
@@ -191,6 +190,7 @@ class LoadReader {
         startIntensity,
         endIntensity,
         direction,
+        ...(body.patterned ? { patterned: true } : {}),
       });
     }
     return sound;

@@ -24,6 +24,18 @@ export function spansAt(structure: Structure, place: Location, within?: MemberSt
   });
 }
 
+/** The spans of a member from its start to its end, overhangs included: distances along it, and the points between which they lie. */
+export function spansAlong(
+  structure: Structure,
+  member: Member,
+): (MemberStretch & { readonly from: string; readonly to: string })[] {
+  const bounds = boundsOf(structure, member, undefined, PLACE_TOLERANCE * member.length);
+  return bounds.slice(1).map((to, i) => {
+    const from = bounds[i]!;
+    return { start: from.distance, end: to.distance, from: from.name, to: to.name };
+  });
+}
+
 /** Coordinates of a place along a member. */
 export function positionAlong(
   structure: Structure,

@@ -127,6 +127,11 @@ export interface SupportSymbol {
 export interface LoadCase {
   readonly name: string;
   readonly title?: string;
+  /**
+   * Stands behind all whole cases, for the patterned loads of one of them (an index) on one span, `A–B`. It bears that
+   * case's name and acts with its factor or, where another set of spans is worse, not at all.
+   */
+  readonly span?: { readonly of: number; readonly name: string };
 }
 
 /** Where a load or a question stands: at a point (of one member, where it matters), or along a member. */
@@ -157,6 +162,8 @@ export type Load = LoadCommon &
         readonly startIntensity: number;
         readonly endIntensity: number;
         readonly direction: LineDirection;
+        /** On any set of the member's spans; such a load is divided before the structure is handed on: see patterns.ts. */
+        readonly patterned?: true;
       }
     /** N, global components. */
     | { readonly kind: 'force'; readonly x: number; readonly y: number; readonly at: Location; readonly row?: number }

@@ -57,7 +57,8 @@ export function answerTo(inputs: AnswerInputs): Answer {
   const limit = question.kind === 'require' ? readLimit(inputs, question.limit, series, value) : undefined;
   return {
     ...common,
-    governing: series.alternatives.length > 1 ? series.alternatives[series.governing]!.text : null,
+    governing: governingInWords(series),
+    loaded: series.loaded,
     quantity: value,
     unit: siUnit(value.dimension),
     display: inWords(inputs, series),
@@ -71,6 +72,7 @@ export function answerTo(inputs: AnswerInputs): Answer {
 
 const WITHHELD = {
   governing: null,
+  loaded: undefined,
   quantity: undefined,
   display: '',
   place: undefined,
@@ -89,6 +91,12 @@ function unitOf(what: Value): string {
   return what.kind === 'operand' && what.operand.kind === 'measure' ? siUnit(dimensionOf(what.operand.measure)) : '';
 }
 
+/** The alternative, where it was chosen among others, and the spans that are loaded, where they were. */
+function governingInWords({ acting, governing, loaded }: Series): string | null {
+  if (acting.length < 2 && loaded === undefined) return null;
+  return acting[governing]?.text ?? loaded ?? null;
+}
+
 /** What `under` says, or what is meant where it is left out; null for a question that measures nothing of its own. */
 function underInWords({ question, state, wordsOf }: AnswerInputs): string | null {
   if (question.under !== undefined) return underWords(question.under, wordsOf);
@@ -105,7 +113,7 @@ function underWords(under: Under, wordsOf: (range: Range) => string): string {
 function asked(series: Series): { readonly measure: ResolvedMeasure; readonly alternative: Alternative } | undefined {
   const { measure, solved } = series;
   if (measure === undefined || solved === undefined) return undefined;
-  const { label, text, factors } = series.alternatives[series.governing]!;
+  const { label, text, factors } = series.acting[series.governing]!;
   return { measure, alternative: { label, text, factors, solution: () => solved.solution(factors) } };
 }
 

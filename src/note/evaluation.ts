@@ -244,7 +244,10 @@ export class NoteEvaluation {
   #result(definition: Definition, range: Range): { readonly quantity: Quantity; readonly chosen: boolean } | undefined {
     const series = this.#seriesOf(definition, range);
     if (series === undefined || this.#answer(definition)?.quantity === undefined) return undefined;
-    return { quantity: series.values[series.governing]!, chosen: series.values.length > 1 };
+    return {
+      quantity: series.values[series.governing]!,
+      chosen: series.values.length > 1 || series.loaded !== undefined,
+    };
   }
 
   #spanOfResult(definition: Definition, range: Range): Quantity | undefined {

@@ -103,8 +103,10 @@ export interface Answer {
   readonly measure: string;
   /** As written behind `under` or the one that was meant; null where there is none to say (an expression of results). */
   readonly under: string | null;
-  /** The alternative that governs, null where there is one only. */
+  /** The alternative that governs, with the spans of patterned loads that are loaded; null where there is nothing to choose. */
   readonly governing: string | null;
+  /** Those spans alone, `live on A–B, C–D`. */
+  readonly loaded: string | undefined;
   /** SI; undefined: withheld, and a diagnostic says why. */
   readonly quantity: Quantity | undefined;
   /** Of an SI unit, as JSON shows it: m, rad, N, N m, Pa, or '' for a number. */

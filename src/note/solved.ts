@@ -43,7 +43,7 @@ export function solutionKey(structure: Structure): string {
       point,
       restraints.map(({ freedom, stiffness }) => [freedom, String(stiffness)]),
     ]),
-    cases.length,
+    cases.map(({ span }) => span?.of ?? ''),
     loads.map(({ range: _range, source: _source, ...load }) => load),
   ]);
 }

@@ -188,7 +188,7 @@ export class StructureState {
     const own = readCombinations(scope, cases, values.figures(scope, this.report), wordsOf, this.report);
     const shared = readCombinations(head, cases, values.figures(head, this.report), wordsOf, this.report);
     const names = new Set(own.map(({ name }) => name));
-    const alone = cases.map((_, index) => caseAlone(cases, index));
+    const alone = cases.flatMap(({ span }, index) => (span === undefined ? [caseAlone(cases, index)] : []));
     return [...own, ...shared.filter(({ name }) => !names.has(name)), ...alone];
   }
 }

@@ -126,9 +126,12 @@ function placeWords(answer: Answer, units: DisplayUnits, structure: Structure | 
   return place.distance === 0 ? `at ${from}${inMember}` : `${plainHtml(distance)} from ${from}${inMember}`;
 }
 
-/** `strength (b)` of `strength (b): 1.35 dead + 1.5 wind`. */
-function governingName({ governing }: Answer): string {
-  return governing === null ? '' : escapeHtml(governing.split(':', 1)[0] ?? '');
+/** `strength (b)` of `strength (b): 1.35 dead + 1.5 wind`; with the spans that are loaded behind it. */
+function governingName({ governing, loaded }: Answer): string {
+  if (governing === null) return '';
+  if (loaded === undefined) return escapeHtml(governing.split(':', 1)[0] ?? '');
+  const alternative = governing.slice(0, -loaded.length).split(':', 1)[0]?.replace(/, $/, '') ?? '';
+  return escapeHtml(alternative === '' ? loaded : `${alternative}, ${loaded}`);
 }
 
 function useCell(answer: Answer, units: DisplayUnits): string {

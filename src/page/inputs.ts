@@ -1,5 +1,6 @@
 // The input schedule: values, sections, loads by case and combinations, each with where it comes from. Folded on screen.
 import { loadSum } from '../drawing/index.ts';
+import { wholeCase } from '../model/patterns.ts';
 import type { Load, Section, Structure } from '../model/structure.ts';
 import type { NamedValue, NoteResult, StructureResult } from '../note/result.ts';
 import type { Dimension } from '../quantity/dimension.ts';
@@ -31,7 +32,7 @@ export function inputSchedule(note: NoteResult, result: StructureResult, open: b
   const bare = loads.filter(({ source, isWeight }) => source === undefined && !isWeight).length;
   const parts = [
     counted(usedSections(structure).length, 'section'),
-    counted(structure.cases.length, 'case'),
+    counted(structure.cases.filter(({ span }) => span === undefined).length, 'case'),
     counted(combinations.length, 'combination'),
   ];
   const without = bare === 0 ? '' : `; ${counted(bare, 'load')} without a source`;
@@ -115,7 +116,7 @@ interface LoadRow {
 function statementsOfLoads(note: NoteResult, structure: Structure): (LoadRow & { readonly loads: readonly Load[] })[] {
   const byStatement = new Map<string, number[]>();
   for (const [index, load] of structure.loads.entries()) {
-    const key = `${load.case} ${load.range.start}`;
+    const key = `${wholeCase(structure.cases, load.case)} ${load.range.start}`;
     byStatement.set(key, [...(byStatement.get(key) ?? []), index]);
   }
   return [...byStatement.values()].map(indices => {
@@ -124,7 +125,7 @@ function statementsOfLoads(note: NoteResult, structure: Structure): (LoadRow & {
     const sums = indices.flatMap(index => loadSum(structure, index) ?? []);
     return {
       loads,
-      case: first.case,
+      case: wholeCase(structure.cases, first.case),
       words: oneLine(note.text.slice(first.range.start, first.range.end)),
       size: '',
       source: first.source,

@@ -1,7 +1,8 @@
 // The drawings of a structure: the loads and fields of whatever combination or case the reader chooses, by radio buttons
 // that the stylesheet reads, and a sketch of every case under them.
 import { caseSketch, legCount, MOST_LEGS, type StructureDrawing, structureDrawing } from '../drawing/index.ts';
-import type { Solution } from '../mechanics/solution.ts';
+import type { Reaction, Solution } from '../mechanics/solution.ts';
+import { spansUnder, wholeCase } from '../model/patterns.ts';
 import type { Structure } from '../model/structure.ts';
 import type { Alternative, StructureResult } from '../note/result.ts';
 import { escapeHtml, plainHtml } from './html.ts';
@@ -29,7 +30,7 @@ export function plates(result: StructureResult, structure: Structure, index: num
   const rest = left === 0 ? '' : `<p class="tl-aside">${left} further alternatives are not drawn here.</p>`;
   if (choices.length === 1) {
     const [only] = choices as [Choice];
-    return `<div class="tl-pick">${figure(draw(structure, result, only), caption(only))}</div>${sketches(result, structure)}`;
+    return `<div class="tl-pick">${figure(draw(structure, result, only), caption(only, structure))}</div>${sketches(result, structure)}`;
   }
   const group = `tautline-${index + 1}`;
   const items = choices.map((choice, i) => {
@@ -37,7 +38,7 @@ export function plates(result: StructureResult, structure: Structure, index: num
     return (
       `<input type="radio" name="${group}" id="${id}"${i === 0 ? ' checked' : ''}>` +
       `<label for="${id}">${escapeHtml(choice.name)}</label>` +
-      figure(draw(structure, result, choice), caption(choice))
+      figure(draw(structure, result, choice), caption(choice, structure))
     );
   });
   return (
@@ -75,9 +76,10 @@ function unsolvedCase(name: string, factors: readonly number[]): Choice {
   return { name, text: '', alternative: { label: undefined, text: name, factors, solution } };
 }
 
-function caption({ name, text, alternative }: Choice): string {
+function caption({ name, text, alternative }: Choice, { cases }: Structure): string {
   const sum = text === '' || text === name ? '' : ` = ${text}`;
-  return `${name}${sum}, ${factoredWord(alternative.factors)}`;
+  const patterned = spansUnder(cases, alternative.factors).length > 0 ? ', patterned loads on all their spans' : '';
+  return `${name}${sum}, ${factoredWord(alternative.factors)}${patterned}`;
 }
 
 function figure({ main, panels }: StructureDrawing, words: string): string {
@@ -130,9 +132,23 @@ function keyOf(structure: Structure, { display }: StructureResult, name: string)
   ]);
 }
 
+/** Sum of a case's loads, those of all its spans where it is patterned. */
+function appliedBy({ cases }: Structure, analysis: StructureResult['analysis'], index: number): Reaction | undefined {
+  if (analysis?.cases[index] === undefined) return undefined;
+  let [x, y, moment] = [0, 0, 0];
+  for (const [i, { applied }] of analysis.cases.entries()) {
+    if (wholeCase(cases, i) !== index) continue;
+    x += applied.x;
+    y += applied.y;
+    moment += applied.moment;
+  }
+  return { x, y, moment };
+}
+
 /** A small sketch of every case, so that none is hidden behind a choice; none where there is one case only. */
 function sketches({ display, analysis }: StructureResult, structure: Structure): string {
-  if (structure.cases.length < 2 || legCount(structure) > MOST_LEGS) return '';
-  const drawn = structure.cases.map((_, i) => caseSketch(structure, i, analysis?.cases[i]?.applied, display, 'page'));
+  const whole = structure.cases.flatMap(({ span }, i) => (span === undefined ? [i] : []));
+  if (whole.length < 2 || legCount(structure) > MOST_LEGS) return '';
+  const drawn = whole.map(i => caseSketch(structure, i, appliedBy(structure, analysis, i), display, 'page'));
   return `<div class="tl-cases">${drawn.join('')}</div>`;
 }

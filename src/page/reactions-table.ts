@@ -5,7 +5,7 @@ import type { Structure } from '../model/structure.ts';
 import type { Alternative, Combination, StructureResult } from '../note/result.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import { significant } from '../quantity/number.ts';
-import { decimalColumn, escapeHtml, plainHtml, unitHtml } from './html.ts';
+import { decimalColumn, escapeHtml, listed, plainHtml, unitHtml } from './html.ts';
 
 export interface ReactionRow {
   readonly name: string;
@@ -235,6 +235,9 @@ function foot(structure: Structure, rows: readonly ReactionRow[]): string {
   const lifts = structure.supports.some((_, s) =>
     rows.some(({ solution }) => (solution.reactions[s]?.y ?? 0) < -NOISE * largest),
   );
+  const patterned = structure.cases.filter(({ span }) => span !== undefined).map(({ name }) => escapeHtml(name));
+  if (patterned.length > 0)
+    sentences.push(`Patterned loads stand on all their spans here: ${listed([...new Set(patterned)])}.`);
   if (lifts) sentences.push('Minus in an upward reaction means that the support holds down.');
   return sentences.length === 0 ? '' : `<p class="tl-aside">${sentences.join(' ')}</p>`;
 }

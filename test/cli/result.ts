@@ -46,6 +46,7 @@ export function answerWith(parts: Partial<Answer>): Answer {
     measure: 'deflection at C',
     under: 'service',
     governing: null,
+    loaded: undefined,
     quantity: { value: -0.001648703049, dimension: LENGTH },
     unit: 'm',
     display: '1.649 mm up',

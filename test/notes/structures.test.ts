@@ -221,7 +221,8 @@ member B1: A -- 4 m -- B -- 4 m -- C
 support A: pinned
 support B: roller
 support C: roller
-load live: 3 kN/m down on B1, patterned
+load live: 3 kN/m down on B1
+carry: reaction of Two at B onto C
 find most: moment in B1
 
 structure Two
@@ -233,7 +234,7 @@ find most: moment in B1`);
     expect(codesOf(note)).toEqual(['not-evaluated-yet']);
     expect(note.diagnostics.find(({ code }) => code === 'not-evaluated-yet')).toMatchObject({
       severity: 'error',
-      line: 9,
+      line: 10,
     });
     checkAnswers(note, { 'One.most': { value: null, display: '', status: 'none' }, 'Two.most': 6e3 });
   });

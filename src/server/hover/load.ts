@@ -1,4 +1,5 @@
 // Hovers on a load, a case and a combination: what they put on the structure.
+import { wholeCase } from '../../model/patterns.ts';
 import type { Load, Structure } from '../../model/structure.ts';
 import type { Combination, StructureResult } from '../../note/result.ts';
 import type { DisplayUnits } from '../../quantity/display.ts';
@@ -17,7 +18,7 @@ export function loadCard({ structure, display }: StructureResult, loads: readonl
 export function caseCard({ structure, display }: StructureResult, name: string): Card | undefined {
   const index = structure?.cases.findIndex(one => one.name === name) ?? -1;
   if (structure === undefined || index < 0) return undefined;
-  const loads = structure.loads.filter(load => load.case === index);
+  const loads = structure.loads.filter(load => wholeCase(structure.cases, load.case) === index);
   const title = structure.cases[index]?.title;
   const about = title === undefined ? 'case, unfactored' : `case, ${title}, unfactored`;
   return { title: name, about, rows: [resultantRow(structure, loads, display)] };

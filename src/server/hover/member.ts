@@ -5,6 +5,7 @@ import type { Measured, ResolvedMeasure } from '../../model/question.ts';
 import { isMovement } from '../../model/questions.ts';
 import { spansAt } from '../../model/spans.ts';
 import type { Location, Member, Structure } from '../../model/structure.ts';
+import { worstAlternatives } from '../../note/patterns.ts';
 import type { Alternative, NoteResult, StructureResult } from '../../note/result.ts';
 import type { DisplayUnits } from '../../quantity/display.ts';
 import type { Theme } from '../theme.ts';
@@ -47,12 +48,14 @@ function governingMovement(note: NoteResult, result: StructureResult, index: num
   const chosen = alternativesOf(result.combinations).length > 1;
   let governing: Governing | undefined;
   for (const alternative of movementAlternatives(note, result)) {
-    const reading = readingOf(structure, alternative, display);
     for (const kind of ['deflection', 'sway'] as const) {
       const asked = { kind, along: [index] };
-      const measured = measuredOf(reading, asked);
-      if (governing !== undefined && Math.abs(measured.value) <= Math.abs(governing.measured.value)) continue;
-      governing = { alternative, reading, asked, measured, chosen };
+      for (const worst of worstAlternatives(analysis, alternative, asked)) {
+        const reading = readingOf(structure, worst, display);
+        const measured = measuredOf(reading, asked);
+        if (governing !== undefined && Math.abs(measured.value) <= Math.abs(governing.measured.value)) continue;
+        governing = { alternative: worst, reading, asked, measured, chosen: chosen || worst !== alternative };
+      }
     }
   }
   return governing;
