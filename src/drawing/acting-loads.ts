@@ -14,6 +14,7 @@ export interface ActingCase {
   readonly stretches: readonly Stretch[];
   readonly singles: readonly Single[];
   readonly movements: readonly Extract<Load, { kind: 'movement' }>[];
+  readonly strains: readonly Strain[];
   /** Stretches of line loads that are too many to be drawn; then `stretches` holds self-weight alone. */
   readonly undrawnLines: number;
   /** Single loads left out beside larger ones. */
@@ -22,6 +23,8 @@ export interface ActingCase {
 
 /** A case with more stretches of line loads than this cannot be read as bands. */
 const MOST_STRETCHES = 400;
+
+export type Strain = Extract<Load, { kind: 'heat' | 'lengthen' }>;
 
 /** Part of a line load on one leg. Intensities are factored, N/m, as stated: per level length where `onPlan`. */
 export interface Stretch {
@@ -67,6 +70,7 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
     const stretches: Stretch[] = [];
     const singles: Single[] = [];
     const movements: Extract<Load, { kind: 'movement' }>[] = [];
+    const strains: Strain[] = [];
     for (const [own, statement] of structure.loads.entries()) {
       const factor = factorOf(statement.case);
       if (factor === 0) continue;
@@ -85,9 +89,15 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
         case 'movement':
           movements.push(factor === 1 ? statement : { ...statement, amount: statement.amount * factor });
           break;
+        case 'heat':
+          strains.push({ ...statement, above: statement.above * factor, below: statement.below * factor });
+          break;
+        case 'lengthen':
+          strains.push({ ...statement, amount: statement.amount * factor });
+          break;
       }
     }
-    if (stretches.length + singles.length + movements.length > 0) {
+    if (stretches.length + singles.length + movements.length + strains.length > 0) {
       const weights = stretches.filter(({ kind }) => kind === 'weight');
       const lines = stretches.length - weights.length;
       const isTooMany = lines > MOST_STRETCHES;
@@ -97,6 +107,7 @@ export function actingCases(structure: Structure, factors: readonly number[]): A
         stretches: isTooMany ? weights : stretches,
         singles: thinned(singles),
         movements,
+        strains,
         undrawnLines: isTooMany ? lines : 0,
         undrawnSingles: leftOut(singles),
       });

@@ -12,6 +12,7 @@ import { path } from './geometry.ts';
 import type { Palette } from './ink.ts';
 import { type LabelRequest, placeLabels } from './placing.ts';
 import { Sheet } from './sheet.ts';
+import { tellStrains } from './strain-words.ts';
 import { drawSupport, waysFrom } from './supports.ts';
 import { extentOf, pointsInUse, type View, viewAt } from './view.ts';
 import { type Label, plain, pointName, widthOf } from './words.ts';
@@ -35,7 +36,9 @@ export function beamPlate(structure: Structure, acting: Acting, units: DisplayUn
   const loads = drawBeamLoads(sheet, structure, view, acting.factors, units);
   const bottom = drawFoot(sheet, structure, view, loads.depth, units);
   placeLabels(sheet, [...pointLabels(structure, view), ...memberLabels(structure, view), ...loads.labels]);
-  tellUndrawn(sheet, actingCases(structure, acting.factors));
+  const cases = actingCases(structure, acting.factors);
+  tellStrains(sheet, structure, cases, units);
+  tellUndrawn(sheet, cases);
   let end = bottom;
   if (acting.solution !== undefined) {
     end = drawBeamFields(sheet, structure, acting.solution, { view, units, name: acting.name, top: bottom + 8 });

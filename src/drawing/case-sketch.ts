@@ -13,9 +13,10 @@ import type { Palette } from './ink.ts';
 import { drawBand } from './load-bands.ts';
 import { type LabelRequest, placeLabels } from './placing.ts';
 import { Sheet } from './sheet.ts';
+import { strainLines } from './strain-words.ts';
 import { drawSupport, waysFrom } from './supports.ts';
 import { extentOf, fitted, isBeam, type View } from './view.ts';
-import { plain } from './words.ts';
+import { plain, widthOf } from './words.ts';
 
 const WIDTH = 158;
 const MARGIN = 14;
@@ -129,8 +130,12 @@ function footLines(
   units: DisplayUnits,
 ): string[] {
   const lines: string[] = [];
+  for (const { who, words } of acting === undefined ? [] : strainLines(structure, acting, units)) {
+    const full = `${who} ${words}`;
+    lines.push(widthOf(plain(full), 11) > WIDTH ? words : full);
+  }
   const weighs = acting?.stretches.some(({ kind }) => kind === 'weight') === true && !isBeam(structure);
-  if (applied === undefined) return weighs ? ['with self-weight'] : [];
+  if (applied === undefined) return [...lines, ...(weighs ? ['with self-weight'] : [])].slice(0, 2);
   const size = Math.hypot(applied.x, applied.y);
   if (Math.abs(applied.y) > 1e-9 * size) {
     lines.push(`sum ${withUnit(Math.abs(applied.y), units.force)} ${applied.y > 0 ? 'up' : 'down'}`);

@@ -13,6 +13,7 @@ import { drawMovements, drawSingles } from './frame-single-loads.ts';
 import type { Palette } from './ink.ts';
 import { placeLabels } from './placing.ts';
 import { Sheet } from './sheet.ts';
+import { tellStrains } from './strain-words.ts';
 import { drawSupport, waysFrom } from './supports.ts';
 import { extentOf, fitted, pointsInUse, type View } from './view.ts';
 import type { Label } from './words.ts';
@@ -66,6 +67,7 @@ export function framePlate(structure: Structure, acting: Acting, units: DisplayU
   ]);
   drawDimensions(sheet, structure, view, uprightLine(sheet, structure, view), units);
   tellWeights(sheet, structure, cases, units);
+  tellStrains(sheet, structure, cases, units);
   tellUndrawn(sheet, cases);
   return sheet.svg(`${structure.title ?? structure.name} with its loads under ${acting.name}, and its dimensions`);
 }

@@ -8,6 +8,7 @@ export { loadSum } from './load-sum.ts';
 export { mechanismDrawing } from './mechanism.ts';
 export { type MemberPlate, memberPlate } from './member-plate.ts';
 export { memberSketch } from './member-sketch.ts';
+export { strainWords } from './strain-words.ts';
 export { MOST_LEGS, type StructureDrawing, structureDrawing } from './structure-drawing.ts';
 export { legCount } from './view.ts';
 export { escapeText } from './words.ts';

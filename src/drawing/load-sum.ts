@@ -2,13 +2,15 @@
 import type { Structure } from '../model/structure.ts';
 import { perMetre, type Stretch, spread, weights } from './acting-loads.ts';
 
-/** Sum of one load as it is given, unfactored: N, global components. None for an imposed movement or a couple. */
+/** Sum of one load as it is given, unfactored: N, global components. None for a couple and for what is imposed. */
 export function loadSum(structure: Structure, index: number): { readonly x: number; readonly y: number } | undefined {
   const load = structure.loads[index];
   switch (load?.kind) {
     case undefined:
     case 'couple':
     case 'movement':
+    case 'heat':
+    case 'lengthen':
       return undefined;
     case 'force':
       return { x: load.x, y: load.y };

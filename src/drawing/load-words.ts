@@ -1,4 +1,4 @@
-// Single loads and imposed movements in words: `0.45 kN`, `5 × 3.1 kN at every 1.15 m`, `moves 8 mm down`.
+// Single loads and movements of supports in words: `0.45 kN`, `5 × 3.1 kN at every 1.15 m`, `moves 8 mm down`.
 
 import type { Load } from '../model/structure.ts';
 import type { DisplayUnits } from '../quantity/display.ts';

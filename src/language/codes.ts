@@ -33,6 +33,7 @@ export const CODES = {
   'assumed-modulus': 'A section from a table gives no modulus, and that of a symmetrical section is taken.',
   'bad-support': 'A support that cannot be read, or stands where nothing is.',
   'bad-load': 'A load that cannot act where it is put.',
+  'upper-side': 'Heat above and below on a member whose upper side, the one left of its travel, does not lie above.',
   'unused-case': 'A case that has loads and is in no combination.',
   'bad-combination': 'A combination that cannot be worked.',
   'bad-question': 'A question that has no answer as it stands.',

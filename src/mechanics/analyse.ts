@@ -7,8 +7,9 @@ import type { Load, Structure } from '../model/structure.ts';
 import { conditionEstimate } from './condition.ts';
 import { fieldsOf } from './fields.ts';
 import { hasIdleUnknown } from './free-movements.ts';
+import type { FreeStrains } from './free-strains.ts';
 import { boundFreedoms } from './freedoms.ts';
-import { type Imposed, imposedBy } from './imposed.ts';
+import { givenBy, type Imposed, imposedBy } from './imposed.ts';
 import { loadingOf } from './loading.ts';
 import { findMechanisms } from './mechanisms.ts';
 import { type Response, respond } from './response.ts';
@@ -44,7 +45,7 @@ export function analyse(structure: Structure): Analysis {
   const redundancy = redundancyOf(system);
   const stability = { stable: true, mechanisms, condition };
   const byCase = loadsByCase(structure);
-  const imposed = byCase.map(loads => imposedBy(loads, system.freedoms, system.reduction));
+  const imposed = byCase.map(loads => imposedBy(structure, loads, system.legs, system.freedoms, system.reduction));
   const conflict = findConflict(system, imposed);
   if (conflict !== undefined) return { structure, stability, redundancy, cases: [], parts: [], conflict };
 
@@ -53,15 +54,18 @@ export function analyse(structure: Structure): Analysis {
   byCase.forEach((loads, k) => {
     const loading = loadingOf(structure, loads, system.legs, system.freedoms, system.ends, system.segments);
     const forces = respond(system, loading, undefined);
-    const movements = imposed[k];
-    if (movements === undefined) {
-      cases.push(solutionOf(system, forces, loading));
+    const given = imposed[k];
+    if (given === undefined) {
+      cases.push(solutionOf(system, forces, loading, undefined));
       parts.push(undefined);
       return;
     }
-    const moved = respond(system, undefined, movements);
-    cases.push(solutionOf(system, add(forces, moved), loading));
-    parts.push({ forces: solutionOf(system, forces, loading), imposed: solutionOf(system, moved, undefined) });
+    const moved = respond(system, undefined, given);
+    cases.push(solutionOf(system, add(forces, moved), loading, given.strains));
+    parts.push({
+      forces: solutionOf(system, forces, loading, undefined),
+      imposed: solutionOf(system, moved, undefined, given.strains),
+    });
   });
   return { structure, stability, redundancy, cases, parts };
 }
@@ -94,14 +98,15 @@ const UNSTRETCHED = 1e-9;
 
 function findConflict(system: System, imposed: readonly (Imposed | undefined)[]): Conflict | undefined {
   for (let k = 0; k < imposed.length; k++) {
-    const movement = imposed[k]?.movement;
-    if (movement === undefined) continue;
+    const given = imposed[k];
+    if (given === undefined) continue;
     for (const { leg, terms } of system.reduction.closures) {
       let amount = 0;
       let largest = 0;
-      for (const [freedom, value] of terms) {
-        amount += value * movement[freedom]!;
-        largest = Math.max(largest, Math.abs(value * movement[freedom]!));
+      for (const [moved, value] of terms) {
+        const term = value * givenBy(given, system.legs, moved);
+        amount += term;
+        largest = Math.max(largest, Math.abs(term));
       }
       if (Math.abs(amount) > UNSTRETCHED * largest) return { case: k, member: system.legs.member[leg]!, amount };
     }
@@ -119,7 +124,12 @@ function add(a: Response, b: Response): Response {
   };
 }
 
-function solutionOf(system: System, response: Response, loading: Loading | undefined): Solution {
+function solutionOf(
+  system: System,
+  response: Response,
+  loading: Loading | undefined,
+  free: FreeStrains | undefined,
+): Solution {
   const { legs, segments } = system;
   const along = loading ?? {
     segments: new Float64Array(SEGMENT_NUMBERS * segments.count),
@@ -127,7 +137,7 @@ function solutionOf(system: System, response: Response, loading: Loading | undef
   };
   return {
     movements: globalMovements(system, response.movement),
-    members: fieldsOf(system, along, response.movement, response.natural),
+    members: fieldsOf(system, along, free, response.movement, response.natural),
     reactions: reactionsOf(system, response.ground),
     applied: loading?.applied ?? { x: 0, y: 0, moment: 0 },
     residual: response.residual,

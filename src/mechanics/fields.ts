@@ -1,5 +1,6 @@
 // The response as fields along the members: exact polynomials on every segment, each integrated from the start of its leg.
 
+import type { FreeStrains } from './free-strains.ts';
 import { evaluate } from './polynomial.ts';
 import { SEGMENT_NUMBERS } from './shares.ts';
 import type { FieldPiece, MemberField } from './solution.ts';
@@ -15,6 +16,7 @@ export interface Along {
 export function fieldsOf(
   system: System,
   along: Along,
+  free: FreeStrains | undefined,
   movement: Float64Array,
   natural: Float64Array,
 ): readonly MemberField[] {
@@ -25,7 +27,7 @@ export function fieldsOf(
       const e = legs.first[m]! + k;
       const end = k + 1 < member.legs.length ? member.legs[k + 1]!.start : member.length;
       const leg = { index: k, start: member.legs[k]!.start, end };
-      addPieces(system, along, e, leg, startOf(system, along, movement, natural, e), pieces);
+      addPieces(system, along, free, e, leg, startOf(system, along, movement, natural, e), pieces);
     }
     return { pieces };
   });
@@ -70,6 +72,7 @@ function startOf(system: System, along: Along, movement: Float64Array, natural: 
 function addPieces(
   system: System,
   along: Along,
+  free: FreeStrains | undefined,
   e: number,
   leg: { readonly index: number; readonly start: number; readonly end: number },
   state: State,
@@ -79,6 +82,8 @@ function addPieces(
   const bending = legs.bending[e]!;
   const flexibility = bending === 0 ? 0 : 1 / bending;
   const stretch = 1 / legs.axial[e]!;
+  const strain = free === undefined ? 0 : free.axial[e]!;
+  const curvature = free === undefined || bending === 0 ? 0 : free.curvature[e]!;
   const last = segments.first[e + 1]! - 1;
   for (let g = segments.first[e]!; g <= last; g++) {
     const from = segments.breaks[g + e]!;
@@ -94,7 +99,7 @@ function addPieces(
     const N = state.axialForce;
     const V = state.shearForce;
     const M = state.bendingMoment;
-    // dN/ds = −p, dV/ds = w, dM/ds = V; EI dθ/ds = M, dv/ds = θ, EA du/ds = N.
+    // dN/ds = −p, dV/ds = w, dM/ds = V; dθ/ds = M/EI + curvature, dv/ds = θ, du/ds = N/EA + strain.
     const piece = {
       leg: leg.index,
       start: leg.start + from,
@@ -104,16 +109,16 @@ function addPieces(
       bendingMoment: [M, V, w0 / 2, w1 / 6],
       rotation: [
         state.rotation,
-        M * flexibility,
+        M * flexibility + curvature,
         (V / 2) * flexibility,
         (w0 / 6) * flexibility,
         (w1 / 24) * flexibility,
       ],
-      axialMovement: [state.axialMovement, N * stretch, (0 - p0 / 2) * stretch, (0 - p1 / 6) * stretch],
+      axialMovement: [state.axialMovement, N * stretch + strain, (0 - p0 / 2) * stretch, (0 - p1 / 6) * stretch],
       transverseMovement: [
         state.transverseMovement,
         state.rotation,
-        (M / 2) * flexibility,
+        (M * flexibility + curvature) / 2,
         (V / 6) * flexibility,
         (w0 / 24) * flexibility,
         (w1 / 120) * flexibility,

@@ -1,8 +1,10 @@
-// Imposed movements of one case: how the ground moves at the supports, as movements of held freedoms and of the ground
-// ends of springs.
+// What one case imposes, without a force: how the ground moves at the supports, as movements of held freedoms and of the
+// ground ends of springs, and how heat and lack of fit strain the legs.
 
-import type { Load } from '../model/structure.ts';
+import type { Load, Structure } from '../model/structure.ts';
+import { type FreeStrains, freeStrains } from './free-strains.ts';
 import type { Freedoms } from './freedoms.ts';
+import type { Legs } from './legs.ts';
 import type { Reduction } from './reduction.ts';
 
 export interface Imposed {
@@ -10,6 +12,8 @@ export interface Imposed {
   readonly movement: Float64Array;
   /** By spring: how far the ground moves in its direction. */
   readonly springs: Float64Array;
+  /** Undefined where nothing is heated or out of length. */
+  readonly strains: FreeStrains | undefined;
 }
 
 /** By freedom: 1 where it is held and its support is moved by some load. */
@@ -25,15 +29,32 @@ export function findMoved(loads: readonly Load[], freedoms: Freedoms): Uint8Arra
   return moved;
 }
 
-/** Undefined where the loads impose none. */
-export function imposedBy(loads: readonly Load[], freedoms: Freedoms, reduction: Reduction): Imposed | undefined {
-  if (!loads.some(load => load.kind === 'movement')) return undefined;
+/** Undefined where the loads impose nothing. */
+export function imposedBy(
+  structure: Structure,
+  loads: readonly Load[],
+  legs: Legs,
+  freedoms: Freedoms,
+  reduction: Reduction,
+): Imposed | undefined {
+  const strains = freeStrains(structure, loads, legs);
+  if (strains === undefined && !loads.some(load => load.kind === 'movement')) return undefined;
   const movement = new Float64Array(freedoms.count);
   const springs = new Float64Array(freedoms.springs.length);
   for (const load of loads) if (load.kind === 'movement') moveGround(load, freedoms, movement, springs);
   for (let f = 0; f < movement.length; f++) if (freedoms.held[f] === 0) movement[f] = 0;
-  for (const { freedom, moved, value } of reduction.followers) movement[freedom]! += value * movement[moved]!;
-  return { movement, springs };
+  const imposed = { movement, springs, strains };
+  for (const { freedom, moved, value } of reduction.followers) {
+    movement[freedom]! += value * givenBy(imposed, legs, moved);
+  }
+  return imposed;
+}
+
+/** The movement of a held freedom or, numbered behind the freedoms, the lengthening of an axially stiff leg. */
+export function givenBy({ movement, strains }: Imposed, legs: Legs, moved: number): number {
+  if (moved < movement.length) return movement[moved]!;
+  const e = moved - movement.length;
+  return strains === undefined ? 0 : strains.axial[e]! * legs.length[e]!;
 }
 
 /** The ground under a support moves as a whole: each held or sprung direction follows with its part of the movement. */

@@ -101,6 +101,8 @@ function apply(sheet: Sheet, load: Load): void {
       return;
     }
     case 'movement':
+    case 'heat':
+    case 'lengthen':
       // No force: see imposed.ts.
       return;
   }

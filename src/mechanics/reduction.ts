@@ -5,8 +5,8 @@ import type { Freedoms } from './freedoms.ts';
 import type { Legs } from './legs.ts';
 
 /**
- * freedom f = Σ value × unknown + what imposed movements give it. A free freedom is an unknown itself, a held one has no
- * terms, a dependent one follows from others.
+ * freedom f = Σ value × unknown + what is imposed gives it. A free freedom is an unknown itself, a held one has no terms,
+ * a dependent one follows from others.
  */
 export interface Reduction {
   /** Number of unknowns. */
@@ -17,9 +17,12 @@ export interface Reduction {
   readonly values: Float64Array;
   /** The freedom that each unknown is. */
   readonly freedoms: Int32Array;
-  /** Dependent freedoms that follow imposed movements: `freedom` moves by value × that of `moved`. */
+  /**
+   * Dependent freedoms that follow what is imposed: `freedom` moves by value × the movement of `moved`, a held freedom
+   * or, with the number of freedoms added to its own, a leg that heat or lack of fit lengthens.
+   */
   readonly followers: readonly { readonly freedom: number; readonly moved: number; readonly value: number }[];
-  /** Axially stiff legs that only held freedoms could lengthen: Σ value × movement of `moved` must be 0. */
+  /** Axially stiff legs that nothing free can lengthen: Σ value × what `moved` is given (as above) must be 0. */
   readonly closures: readonly { readonly leg: number; readonly terms: ReadonlyMap<number, number> }[];
 }
 
@@ -31,12 +34,21 @@ export interface Reduction {
 export const MAX_DEPENDENT_TERMS = 500_000;
 
 /**
- * `moved`: by freedom, 1 where a held freedom has an imposed movement in some case. Undefined where axially stiff legs tie
- * so many movements together that the terms pass `MAX_DEPENDENT_TERMS`.
+ * `moved`: by freedom, 1 where a held freedom has an imposed movement in some case; `lengthened`: by leg, 1 where it is
+ * axially stiff and some case would change its length. Undefined where axially stiff legs tie so many movements together
+ * that the terms pass `MAX_DEPENDENT_TERMS`.
  */
-export function reduce(legs: Legs, freedoms: Freedoms, moved: Uint8Array): Reduction | undefined {
+export function reduce(
+  legs: Legs,
+  freedoms: Freedoms,
+  moved: Uint8Array,
+  lengthened: Uint8Array,
+): Reduction | undefined {
   const { count, held } = freedoms;
-  const tied = tieStiffLegs(legs, freedoms, moved);
+  const given = new Uint8Array(count + legs.count);
+  given.set(moved);
+  given.set(lengthened, count);
+  const tied = tieStiffLegs(legs, freedoms, given);
   if (tied === undefined) return undefined;
   const { dependents, closures } = tied;
 
@@ -46,7 +58,7 @@ export function reduce(legs: Legs, freedoms: Freedoms, moved: Uint8Array): Reduc
   let terms = 0;
   for (let f = 0; f < count; f++) {
     const dependent = dependents.get(f);
-    if (dependent !== undefined) for (const on of dependent.keys()) terms += 1 - moved[on]!;
+    if (dependent !== undefined) for (const on of dependent.keys()) terms += 1 - given[on]!;
     else if (held[f] === 0) {
       unknownOf[f] = size++;
       terms++;
@@ -69,7 +81,7 @@ export function reduce(legs: Legs, freedoms: Freedoms, moved: Uint8Array): Reduc
       continue;
     }
     for (const [on, value] of dependent) {
-      const unknown = unknownOf[on]!;
+      const unknown = given[on] === 1 ? -1 : unknownOf[on]!;
       if (unknown < 0) followers.push({ freedom: f, moved: on, value });
       else {
         unknowns[k] = unknown;
@@ -111,9 +123,9 @@ const PIVOT_CHOICE = 0.5;
 type Terms = Map<number, number>;
 
 /**
- * Gauss-Jordan elimination, leg by leg: no lengthening is one equation between the movements of the leg's ends. What
- * earlier legs settled is put in, and the equation gives one more movement from the others; if nothing is left, the leg
- * is held at its length already.
+ * Gauss-Jordan elimination, leg by leg: no lengthening, or only the one that is given, is one equation between the
+ * movements of the leg's ends. What earlier legs settled is put in, and the equation gives one more movement from the
+ * others; if nothing is left, the leg is held at its length already.
  */
 function tieStiffLegs(legs: Legs, freedoms: Freedoms, moved: Uint8Array) {
   const dependents = new Map<number, Terms>();
@@ -172,7 +184,10 @@ function tieStiffLegs(legs: Legs, freedoms: Freedoms, moved: Uint8Array) {
   return { dependents, closures };
 }
 
-/** The lengthening of a leg in terms of freedoms that are neither dependent nor held still; and the largest term on the way. */
+/**
+ * The lengthening of a leg, less the one it is given, in terms of freedoms that are neither dependent nor held still; and
+ * the largest term on the way.
+ */
 function lengthening(e: number, legs: Legs, freedoms: Freedoms, moved: Uint8Array, dependents: Map<number, Terms>) {
   const row: Terms = new Map();
   let largest = 0;
@@ -182,6 +197,7 @@ function lengthening(e: number, legs: Legs, freedoms: Freedoms, moved: Uint8Arra
   };
   const cosine = legs.cosine[e]!;
   const sine = legs.sine[e]!;
+  if (moved[freedoms.count + e] === 1) add(freedoms.count + e, -1);
   for (let end = 0; end < 2; end++) {
     const p = (end === 0 ? legs.from : legs.to)[e]!;
     const sign = end === 0 ? -1 : 1;

@@ -1,6 +1,7 @@
-// The response of a prepared structure to loads or to imposed movements: movements of the freedoms, natural forces of the
+// The response of a prepared structure to loads or to what is imposed without a force: movements of the freedoms, natural forces of the
 // legs, and what is left unbalanced.
 
+import { subtractFreeStrains } from './free-strains.ts';
 import type { Imposed } from './imposed.ts';
 import { expand, gather } from './reduction.ts';
 import type { Loading } from './shares.ts';
@@ -37,6 +38,7 @@ export function respond(system: System, loading: Loading | undefined, imposed: I
     addStrains(legs, ends, imposed.movement, state.strains);
     addShortenings(system, imposed.movement, state.shortenings);
     for (let k = 0; k < state.shortenings.length; k++) state.shortenings[k]! -= imposed.springs[k]!;
+    if (imposed.strains !== undefined) subtractFreeStrains(legs, imposed.strains, state.strains);
   }
   balance(system, loading, state);
   const loads = largestForces(system, state.unbalanced, false);
@@ -79,6 +81,7 @@ const BALANCED = 3e-14;
 
 interface State {
   readonly movement: Float64Array;
+  /** Of the legs, three a leg, less what they take on without force: what stiffness answers. */
   readonly strains: Float64Array;
   /** By spring. */
   readonly shortenings: Float64Array;

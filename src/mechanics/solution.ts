@@ -11,9 +11,9 @@ export interface Analysis {
   readonly redundancy: number;
   /** The response to each case alone, in the order of `structure.cases`; empty when unstable, too large or in conflict. */
   readonly cases: readonly Solution[];
-  /** By case: what of its response forces cause, and what imposed movements; undefined where it has no imposed movement. */
+  /** By case: what of its response forces cause, and what is imposed: movements, heat, lack of fit. Undefined where nothing is. */
   readonly parts: readonly (CaseParts | undefined)[];
-  /** An imposed movement that an axially stiff member would have to change its length for. */
+  /** An imposed movement that an axially stiff member would have to change its length for, or a change of it that is held. */
   readonly conflict?: Conflict;
   /**
    * Not analysed, as it would take more than seconds or gigabytes: too many freedoms, too many movements tied together by
@@ -31,7 +31,7 @@ export interface Conflict {
   /** Indices. */
   readonly case: number;
   readonly member: number;
-  /** What the member would lengthen by, m. */
+  /** What the member would have to lengthen by (heat and lack of fit: shorten), m. */
   readonly amount: number;
 }
 
@@ -69,7 +69,7 @@ export interface Solution {
   readonly residual: number;
   /**
    * The largest force (N) and couple (N m) that went into it: loads at the joints, those between them shared out, and for
-   * imposed movements what would hold every other freedom still. Rounding in forces and moments is relative to them.
+   * what is imposed what would hold every other freedom still. Rounding in forces and moments is relative to them.
    */
   readonly largest?: { readonly force: number; readonly moment: number };
 }

@@ -8,7 +8,7 @@ export function combine(analysis: Analysis, factors: readonly number[]): Solutio
   return superpose(analysis, analysis.cases, factors);
 }
 
-/** What of a combination its forces cause, without imposed movements: the part that stiffness governs. */
+/** What of a combination its forces cause, without what is imposed: the part that stiffness governs. */
 export function loadPart(analysis: Analysis, factors: readonly number[]): Solution {
   return superpose(
     analysis,
@@ -17,7 +17,7 @@ export function loadPart(analysis: Analysis, factors: readonly number[]): Soluti
   );
 }
 
-/** What of a combination its imposed movements cause alone; the same however stiff the structure is as a whole, springs included. */
+/** What of a combination imposed movements, heat and lack of fit cause alone; the same however stiff the structure is as a whole, springs included. */
 export function imposedPart(analysis: Analysis, factors: readonly number[]): Solution {
   const parts: Solution[] = [];
   const used: number[] = [];

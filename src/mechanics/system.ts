@@ -2,6 +2,7 @@
 
 import type { Structure } from '../model/structure.ts';
 import { type Factorisation, factorise } from './factorisation.ts';
+import { findLengthened } from './free-strains.ts';
 import { type Freedoms, numberFreedoms } from './freedoms.ts';
 import { findMoved } from './imposed.ts';
 import { flattenLegs, type Legs } from './legs.ts';
@@ -33,7 +34,7 @@ export function prepareSystem(structure: Structure): System | undefined {
   const legs = flattenLegs(structure);
   const supports = collectSupports(structure);
   const freedoms = numberFreedoms(structure, legs, supports);
-  const reduction = reduce(legs, freedoms, findMoved(structure.loads, freedoms));
+  const reduction = reduce(legs, freedoms, findMoved(structure.loads, freedoms), findLengthened(structure, legs));
   if (reduction === undefined) return undefined;
   const ends = relateEnds(legs, freedoms);
   const rows = strainRows(legs, ends, freedoms, reduction);

@@ -190,6 +190,7 @@ function toSection(
     secondMomentOfArea: value('I'),
     youngsModulus: value('E'),
     depth: value('depth'),
+    thermalExpansion: value('alpha'),
     range: definition.definition,
   };
 }

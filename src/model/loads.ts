@@ -9,6 +9,7 @@ import {
   FORCE_PER_LENGTH,
   MOMENT,
   sameDimension,
+  TEMPERATURE,
 } from '../quantity/dimension.ts';
 import type { Range } from '../quantity/range.ts';
 import type { Due, Figures } from './figures.ts';
@@ -31,6 +32,7 @@ const A_FORCE: Due = { dimension: FORCE, words: 'a force' };
 const A_MOMENT: Due = { dimension: MOMENT, words: 'a moment' };
 const A_LINE_LOAD: Due = { dimension: FORCE_PER_LENGTH, words: 'a force per length' };
 const A_NUMBER: Due = { dimension: DIMENSIONLESS, words: 'a number' };
+const A_TEMPERATURE: Due = { dimension: TEMPERATURE, words: 'a temperature difference' };
 const A_ROTATION: Due = { dimension: ANGLE, words: 'an angle' };
 
 /** A row longer than this is a slip of a decimal point. */
@@ -115,20 +117,11 @@ class LoadReader {
       case 'move':
         return this.#move(body, common);
       case 'heat':
-        return this.#notYet(body.range, 'A heated member');
+        return this.#heat(body, common);
       case 'lengthen':
       case 'shorten':
-        return this.#notYet(body.range, 'A lack of fit');
+        return this.#lengthen(body, common);
     }
-  }
-
-  #notYet(range: Range, what: string): false {
-    this.#report.error(
-      'not-evaluated-yet',
-      range,
-      `${what} is read but not evaluated by this version: answers with this case are withheld.`,
-    );
-    return false;
   }
 
   // Kinds of load
@@ -442,6 +435,83 @@ class LoadReader {
       },
     );
     return false;
+  }
+
+  #heat(body: Extract<LoadBody, { kind: 'heat' }>, common: Common): boolean {
+    const { by } = body;
+    const factor = body.factor === undefined ? 1 : this.#figures.number(body.factor, A_NUMBER);
+    const above = this.#figures.number(by.kind === 'uniform' ? by.rise : by.above, A_TEMPERATURE);
+    const below = by.kind === 'uniform' ? above : this.#figures.number(by.below, A_TEMPERATURE);
+    const members = this.#membersOf(body.on);
+    if (factor === undefined || above === undefined || below === undefined || members === undefined) return false;
+    if (by.kind === 'gradient') {
+      const bar = members.map(index => this.#ground.geometry.members[index]!).find(({ kind }) => kind === 'bar');
+      if (bar !== undefined) {
+        this.#report.error(
+          'bad-load',
+          body.range,
+          `${bar.name} is a bar: it does not bend, and is as warm above as below.`,
+          { hint: `write heat ${bar.name} by one difference: the mean over its depth` },
+        );
+        return false;
+      }
+    }
+    if (!this.#canBeHeated(members, above !== below, common.range)) return false;
+    if (above !== below) this.#tellUpperSide(members, common.range);
+    for (const member of members)
+      this.#loads.push({ ...common, kind: 'heat', member, above: factor * above, below: factor * below });
+    return true;
+  }
+
+  /** Above is the side left of the travel, which may not be what the word says of this member. */
+  #tellUpperSide(members: readonly number[], range: Range): void {
+    for (const index of members) {
+      const { name, legs } = this.#ground.geometry.members[index]!;
+      const leg = legs.find(({ cosine }) => cosine < 1e-9);
+      if (leg === undefined) continue;
+      const runs = leg.cosine < -1e-9 ? 'is drawn from right to left' : 'stands upright';
+      const lies = leg.cosine < -1e-9 ? 'below it' : leg.sine > 0 ? 'to its left' : 'to its right';
+      this.#report.hint('upper-side', range, `${name} ${runs}: its upper side, left of its travel, lies ${lies}.`);
+    }
+  }
+
+  /** Whether every section of the members has what heat needs. */
+  #canBeHeated(members: readonly number[], needsDepth: boolean, range: Range): boolean {
+    const lacking = new Map<string, Section>();
+    for (const index of members) {
+      this.#ground.geometry.members[index]!.legs.forEach((_, leg) => {
+        const section = this.#ground.sectionOf(index, leg);
+        // A section without a name could not be read, and that was told.
+        if (section === undefined || section.name === '') return;
+        const { thermalExpansion, depth } = section;
+        if (thermalExpansion === undefined || (needsDepth && depth === undefined)) lacking.set(section.name, section);
+      });
+    }
+    for (const { name, thermalExpansion, material, range: described } of lacking.values()) {
+      const isDepth = thermalExpansion !== undefined;
+      this.#report.error(
+        'missing-property',
+        range,
+        isDepth
+          ? `A difference between above and below needs a depth, and ${name} has none.`
+          : `Heat needs a thermal expansion, and ${name} has no alpha.`,
+        {
+          hint: isDepth ? `give ${name} a depth` : `give ${material ?? name} one: alpha 12e-6 /K`,
+          related: [{ range: described, message: `${name} is described here.` }],
+        },
+      );
+    }
+    return lacking.size === 0;
+  }
+
+  #lengthen(body: Extract<LoadBody, { kind: 'lengthen' | 'shorten' }>, common: Common): boolean {
+    const factor = body.factor === undefined ? 1 : this.#figures.number(body.factor, A_NUMBER);
+    const by = this.#figures.number(body.by, A_LENGTH);
+    const members = this.#membersOf(body.members);
+    if (factor === undefined || by === undefined || members === undefined) return false;
+    const amount = factor * by * (body.kind === 'shorten' ? -1 : 1);
+    for (const member of members) this.#loads.push({ ...common, kind: 'lengthen', member, amount });
+    return true;
   }
 
   // Places

@@ -53,6 +53,8 @@ export interface Section {
   readonly youngsModulus: number | undefined;
   /** m, in the plane of bending. */
   readonly depth: number | undefined;
+  /** Of its material, 1/K. */
+  readonly thermalExpansion?: number | undefined;
   readonly range: Range;
 }
 
@@ -176,6 +178,13 @@ export type Load = LoadCommon &
         readonly freedom: Restraint['freedom'];
         readonly amount: number;
       }
+    /**
+     * A change of temperature, K, at the upper side of one member and at its underside, linear between them and the same
+     * all along. A bar, and a member whose depth is not known, are as warm above as below.
+     */
+    | { readonly kind: 'heat'; readonly member: number; readonly above: number; readonly below: number }
+    /** Lack of fit: m that one member is too long (positive) or too short, spread evenly over its length. */
+    | { readonly kind: 'lengthen'; readonly member: number; readonly amount: number }
   );
 
 export type LineDirection =

@@ -30,13 +30,17 @@ export function solutionKey(structure: Structure): string {
   const { points, sections, members, hinges, supports, cases, loads } = structure;
   return JSON.stringify([
     points.map(({ x, y }) => [x, y]),
-    sections.map(({ bendingStiffness, axialStiffness, massPerLength, sectionModulus, area }) => [
-      bendingStiffness ?? '',
-      axialStiffness ?? '',
-      massPerLength ?? '',
-      sectionModulus ?? '',
-      area ?? '',
-    ]),
+    sections.map(
+      ({ bendingStiffness, axialStiffness, massPerLength, sectionModulus, area, depth, thermalExpansion }) => [
+        depth ?? '',
+        thermalExpansion ?? '',
+        bendingStiffness ?? '',
+        axialStiffness ?? '',
+        massPerLength ?? '',
+        sectionModulus ?? '',
+        area ?? '',
+      ],
+    ),
     members.map(({ kind, legs }) => [kind, ...legs.map(({ from, to, section }) => [from, to, section])]),
     hinges.map(({ point, member }) => [point, member ?? '']),
     supports.map(({ point, restraints }) => [

@@ -1,5 +1,5 @@
-// By what factor all stiffness must rise to meet an exceeded movement limit. What a settlement imposes does not scale, so
-// the factor comes from the part that stiffness governs, and is found on the real model.
+// By what factor all stiffness must rise to meet an exceeded movement limit. What settlement, heat and lack of fit impose
+// does not scale, so the factor comes from the part that stiffness governs, and is found on the real model.
 import { imposedPart, loadPart, measure, superpose, worstPatterns } from '../mechanics/index.ts';
 import type { ResolvedMeasure } from '../model/question.ts';
 import { isMovement } from '../model/questions.ts';
@@ -18,8 +18,7 @@ export function stiffnessFactor(
 ): number | undefined {
   if (!isMovement(asked.kind) || limit <= 0) return undefined;
   const { analysis } = solved;
-  if (!analysis.structure.loads.some(load => load.kind === 'movement' && factors[load.case] !== 0))
-    return Math.abs(value) / limit;
+  if (!analysis.parts.some((part, index) => part !== undefined && factors[index] !== 0)) return Math.abs(value) / limit;
   // With other shares of the two parts, another set of spans may be the worst.
   const parts = worstPatterns(analysis, factors, asked).map(
     set => [loadPart(analysis, set), imposedPart(analysis, set)] as const,

@@ -164,19 +164,29 @@ export class StructureState {
     return undefined;
   }
 
-  /** A support is moved along members that keep their length. */
+  /** A support is moved along members that keep their length, or such a member is heated or out of length between holds. */
   #conflict(structure: Structure, { case: index, member, amount }: Conflict): undefined {
-    this.#excuse = 'an imposed movement contradicts members that keep their length';
+    this.#excuse = 'what is imposed contradicts members that keep their length';
     const { name } = structure.cases[index]!;
-    const load = structure.loads.find(({ kind, case: of }) => kind === 'movement' && of === index);
-    this.report.error(
-      'bad-load',
-      load?.range ?? structure.range,
-      `In ${name} a support moves so that ${structure.members[member]!.name} would change its length by ${significant(Math.abs(amount) * 1000)} mm, and it is axially stiff: the force would be without bound.`,
-      {
-        hint: 'give its section an area, or move the support across it',
-      },
-    );
+    const own = structure.loads.filter(load => load.case === index);
+    const moved = own.find(({ kind }) => kind === 'movement');
+    const strained =
+      own.find(load => (load.kind === 'heat' || load.kind === 'lengthen') && load.member === member) ??
+      own.find(({ kind }) => kind === 'heat' || kind === 'lengthen');
+    const size = `${significant(Math.abs(amount) * 1000)} mm`;
+    const given = `${structure.members[member]!.name} would have to change its length by ${size}`;
+    const rigid = 'it is axially stiff: the force would be without bound.';
+    const message =
+      strained === undefined
+        ? `In ${name} a support moves so that ${structure.members[member]!.name} would change its length by ${size}, and ${rigid}`
+        : `In ${name} ${strained.kind === 'heat' ? 'heat' : 'lack of fit'} has no room: ${given} against it, and ${rigid}`;
+    const hint =
+      strained === undefined
+        ? 'give its section an area, or move the support across it'
+        : strained.kind === 'heat' && strained.above !== strained.below
+          ? 'give its section an area, or leave one end free; without a mean, heat bends only: 12 K above, -12 K below'
+          : 'give its section an area, or leave one end free to move';
+    this.report.error('bad-load', (strained ?? moved)?.range ?? structure.range, message, { hint });
     return undefined;
   }
 

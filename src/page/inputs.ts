@@ -9,6 +9,7 @@ import {
   BENDING_STIFFNESS,
   FORCE,
   FORCE_PER_LENGTH,
+  LENGTH,
   SECOND_MOMENT_OF_AREA,
   SECTION_MODULUS,
   STRESS,
@@ -67,6 +68,7 @@ function usedSections(structure: Structure): number[] {
 
 function sectionTable(structure: Structure, units: DisplayUnits): string {
   const used = usedSections(structure);
+  const isHeated = structure.loads.some(({ kind }) => kind === 'heat');
   const rows = used.map(index => {
     const section = structure.sections[index] as Section;
     const members = structure.members.filter(({ legs }) => legs.some(leg => leg.section === index));
@@ -81,10 +83,16 @@ function sectionTable(structure: Structure, units: DisplayUnits): string {
       figure(section.sectionModulus, SECTION_MODULUS, units),
       figure(section.bendingStiffness, BENDING_STIFFNESS, units),
       figure(weight, FORCE_PER_LENGTH, units),
+      ...(isHeated ? [figure(section.depth, LENGTH, units), expansion(section.thermalExpansion)] : []),
     ];
   });
-  const heads = ['Section', 'E', 'A', 'I', 'W', 'EI', 'self-weight'];
-  return schedule(heads, ['', '74px', '78px', '78px', '78px', '92px', '88px'], rows);
+  const heads = ['Section', 'E', 'A', 'I', 'W', 'EI', 'self-weight', ...(isHeated ? ['depth', 'alpha'] : [])];
+  const widths = ['', '74px', '78px', '78px', '78px', '92px', '88px', ...(isHeated ? ['70px', '80px'] : [])];
+  return schedule(heads, widths, rows);
+}
+
+function expansion(value: number | undefined): string {
+  return value === undefined ? '–' : plainHtml(`${asGiven(value * 1e6)}e-6 /K`);
 }
 
 /** A modulus of elasticity goes by the thousand of the unit for stresses. */

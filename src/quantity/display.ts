@@ -16,6 +16,7 @@ import {
   SECTION_MODULUS,
   STRESS,
   sameDimension,
+  TEMPERATURE,
   UNIT_WEIGHT,
 } from './dimension.ts';
 import { dimensionName, isAngle, siUnit } from './dimension-names.ts';
@@ -96,6 +97,11 @@ export function readDisplay(choice: DisplayChoice, base: DisplayUnits): { units:
   return { units, problems };
 }
 
+/** A difference of temperature has no unit to choose: K, or degF beside feet. */
+export function temperatureUnit(units: DisplayUnits): DisplayUnit {
+  return isUs(units) ? FAHRENHEIT : KELVIN;
+}
+
 /** A quantity as shown; `text` is number and unit. ASCII, with `-` for minus. */
 export interface Shown {
   readonly number: string;
@@ -159,6 +165,9 @@ const TRADE: readonly TradeUnits[] = [
   { dimension: DENSITY, metric: [step('kg/m3')], us: [step('lb/ft3')] },
 ];
 
+const KELVIN = unit('K');
+const FAHRENHEIT = unit('degF');
+
 const PRESSURE = { metric: unit('kN/m2'), us: unit('psf') } as const;
 
 function unitFor(quantity: Quantity, units: DisplayUnits, kind: DisplayKind | undefined): DisplayUnit {
@@ -166,6 +175,7 @@ function unitFor(quantity: Quantity, units: DisplayUnits, kind: DisplayKind | un
   if (kind && sameDimension(DIMENSION_OF[kind], dimension)) return units[kind];
   if (isAngle(dimension)) return units.rotation;
   const system = isUs(units) ? 'us' : 'metric';
+  if (sameDimension(dimension, TEMPERATURE)) return temperatureUnit(units);
   if (sameDimension(dimension, DIMENSION_OF.stress) && Math.abs(value) < LARGEST_PRESSURE) return PRESSURE[system];
   for (const own of KINDS_BY_DIMENSION) if (sameDimension(DIMENSION_OF[own], dimension)) return units[own];
   const trade = TRADE.find(row => sameDimension(row.dimension, dimension));

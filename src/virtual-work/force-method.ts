@@ -13,7 +13,7 @@ import { largestForce, strainsOf } from './work.ts';
 export interface Response {
   /** Of the primary structure, every redundant zero. */
   readonly primary: ForceState;
-  /** δ₀ at each redundant, m or rad: the work of its unit state on the strains of `primary`, imposed movements included. */
+  /** δ₀ at each redundant, m or rad: the work of its unit state on the strains of `primary`, movements, heat and lack of fit included. */
   readonly gaps: Float64Array;
   /** X, N or N m. */
   readonly redundants: Float64Array;
@@ -23,7 +23,7 @@ export interface Response {
   readonly strains: Float64Array;
   /** The largest force, of `primary` or `final`, N; see `largestForce` in work.ts. */
   readonly largest: number;
-  /** An imposed movement would have to lengthen axially stiff members: there is no answer. */
+  /** What is imposed would need axially stiff members of another length: there is no answer. */
   readonly contradicted: boolean;
 }
 

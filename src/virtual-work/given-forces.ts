@@ -9,18 +9,17 @@ import type { UnitAction } from '../model/question.ts';
 import type { InternalForces } from './internal-forces.ts';
 import { addLoad, emptyLoading, type Loading } from './loading.ts';
 import { bound, derivative, productIntegral, valueAt } from './polynomial.ts';
-import { type PrimaryStructure, virtualSystem } from './primary.ts';
+import { type Imposed, type PrimaryStructure, virtualSystem } from './primary.ts';
 import type { SpanPiece } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, isUnknown, type StaticLeg, type Statics, unitOf } from './statics.ts';
 import { movementsFrom } from './substitution.ts';
-import { type Movement, type RealForces, roundingOf, virtualWork, workOnGround } from './work.ts';
+import { addFreeStrains, type Movement, type RealForces, roundingOf, virtualWork, workOnImposed } from './work.ts';
 
 /** The strains that given forces cause, by unknown (see `strainsOf` in work.ts), with the forces themselves. */
 export interface GivenForces {
   readonly forces: InternalForces;
   readonly strains: Float64Array;
-  /** Imposed movement of each ground along its reaction, m or rad. */
-  readonly ground: Float64Array | undefined;
+  readonly imposed: Imposed;
   /** The largest force, N: of moments, with the leg's length for a lever. */
   readonly largest: number;
   /** The largest that any leg's strains could be if they did not change sign along it: movement of one end, m. */
@@ -59,19 +58,24 @@ export function givenForces(
     }
     ends.set(endForces(leg, pieces), 2 * index * COMPONENTS);
   }
+  addFreeStrains(statics, loading.free, strains);
+  for (const [index, { axial, curvature }] of (loading.free ?? []).entries()) {
+    const { length } = legs[index]!;
+    size = Math.max(size, Math.abs(axial) * length, Math.abs(curvature) * length ** 2);
+  }
   const onPoints = sumAtPoints(statics, ends, loading);
   for (const [index, { point, x, y, moment, flexibility }] of grounds.entries()) {
     const row = moment ? statics.coupleRow[point]! : statics.forceRow[point]!;
     const reaction = moment ? -onPoints[row]! : -(x * onPoints[row]! + y * onPoints[row + 1]!);
     strains[firstReaction + index] = flexibility * reaction - (loading.ground?.[index] ?? 0);
   }
-  return { forces, strains, ground: loading.ground, largest, size };
+  return { forces, strains, imposed: { ground: loading.ground, free: loading.free }, largest, size };
 }
 
 /** As `movement`, with the virtual system on the primary structure and the given forces for the real ones. */
 export function movementFromForces(
   primary: PrimaryStructure,
-  { forces, strains, ground, largest }: GivenForces,
+  { forces, strains, imposed, largest }: GivenForces,
   actions: readonly UnitAction[],
 ): Movement {
   const { statics } = primary;
@@ -79,9 +83,9 @@ export function movementFromForces(
   const spans = new Map<number, { pieces: readonly SpanPiece[] }>();
   for (const leg of virtual.spans.keys()) spans.set(leg, { pieces: piecesWithin(forces, statics.legs[leg]!) });
   // The given pieces hold the whole force, so that nothing is left to stand at the ends.
-  const real: RealForces = { unknowns: new Float64Array(statics.unknownCount), spans };
+  const real: RealForces = { unknowns: new Float64Array(statics.unknownCount), spans, imposed };
   const value = virtualWork(statics, virtual, real, strains);
-  return { value, rounding: roundingOf(statics, virtual, largest, workOnGround(statics, virtual, ground)) };
+  return { value, rounding: roundingOf(statics, virtual, largest, workOnImposed(statics, virtual, imposed)) };
 }
 
 /**

@@ -1,5 +1,5 @@
 // Loads, real or virtual, as the force method takes them: forces and couples on points, loads within legs, movements of
-// the ground.
+// the ground, free strains of legs.
 import { STANDARD_GRAVITY } from '../model/gravity.ts';
 import type { LineDirection, Load, Location } from '../model/structure.ts';
 import { emptySpanLoad, type SpanLoad } from './span.ts';
@@ -12,10 +12,22 @@ export interface Loading {
   readonly spans: Map<number, SpanLoad>;
   /** Imposed movement of each ground along its reaction, m or rad; undefined for none. */
   ground: Float64Array | undefined;
+  /** By leg: what it would take on without any force; undefined for none. */
+  free: FreeStrain[] | undefined;
 }
 
+/** Of heat and lack of fit, the same all along a leg. */
+export interface FreeStrain {
+  /** Strain of the axis, positive where it grows longer. */
+  readonly axial: number;
+  /** 1/m, in the sense of M/EI. */
+  readonly curvature: number;
+}
+
+export const UNSTRAINED: FreeStrain = { axial: 0, curvature: 0 };
+
 export function emptyLoading(statics: Statics): Loading {
-  return { joints: new Float64Array(statics.rowCount), spans: new Map(), ground: undefined };
+  return { joints: new Float64Array(statics.rowCount), spans: new Map(), ground: undefined, free: undefined };
 }
 
 /** `factor` times the load, added to the loading. */
@@ -35,6 +47,14 @@ export function addLoad(statics: Statics, loading: Loading, load: Load, factor: 
       return;
     case 'movement':
       addMovement(statics, loading, load, factor);
+      return;
+    case 'heat':
+      addHeat(statics, loading, load, factor);
+      return;
+    case 'lengthen': {
+      const axial = (factor * load.amount) / statics.structure.members[load.member]!.length;
+      for (const leg of legsOf(statics, load.member)) addFree(statics, loading, leg, { axial, curvature: 0 });
+    }
   }
 }
 
@@ -208,6 +228,35 @@ function addMovement(
     loading.ground ??= new Float64Array(grounds.length);
     loading.ground[index]! += share * amount * factor;
   }
+}
+
+/** The upper side grows by α T above, the underside by α T below; plane sections stay plane. */
+function addHeat(
+  statics: Statics,
+  loading: Loading,
+  { member, above, below }: Extract<Load, { kind: 'heat' }>,
+  factor: number,
+): void {
+  const { structure, legs } = statics;
+  for (const index of legsOf(statics, member)) {
+    const { thermalExpansion = 0, depth } =
+      structure.sections[structure.members[member]!.legs[legs[index]!.index]!.section]!;
+    const upper = thermalExpansion * above * factor;
+    const under = thermalExpansion * below * factor;
+    const curvature = upper === under || depth === undefined ? 0 : (under - upper) / depth;
+    addFree(statics, loading, index, { axial: (upper + under) / 2, curvature });
+  }
+}
+
+function legsOf({ firstLeg }: Statics, member: number): number[] {
+  const first = firstLeg[member]!;
+  return Array.from({ length: firstLeg[member + 1]! - first }, (_, index) => first + index);
+}
+
+function addFree({ legs }: Statics, loading: Loading, leg: number, { axial, curvature }: FreeStrain): void {
+  loading.free ??= legs.map(() => UNSTRAINED);
+  const before = loading.free[leg]!;
+  loading.free[leg] = { axial: before.axial + axial, curvature: before.curvature + curvature };
 }
 
 function spanOf({ spans }: Loading, leg: number): SpanLoad {

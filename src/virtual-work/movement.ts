@@ -3,11 +3,11 @@
 import type { UnitAction } from '../model/question.ts';
 import type { ForceMethod } from './force-method.ts';
 import { type ForceState, virtualSystem } from './primary.ts';
-import { type Movement, roundingOf, virtualWork, workOnGround } from './work.ts';
+import { type Movement, roundingOf, virtualWork, workOnImposed } from './work.ts';
 
 /**
  * Σ action · movement, m or rad, under the cases with these factors (in the order of the structure's cases). NaN where
- * there is no answer to give: an imposed movement that axially stiff members contradict, or redundants that are too
+ * there is no answer to give: something imposed that axially stiff members contradict, or redundants that are too
  * nearly undetermined to be trusted.
  */
 export function movement(forceMethod: ForceMethod, factors: readonly number[], actions: readonly UnitAction[]): number {
@@ -22,14 +22,14 @@ export function movementOf(forceMethod: ForceMethod, factors: readonly number[],
   const { statics } = forceMethod.primary;
   let value = forceMethod.wellConditioned ? 0 : Number.NaN;
   let force = 0;
-  let ground = 0;
+  let imposed = 0;
   for (let index = 0; index < factors.length; index++) {
     const factor = factors[index]!;
     if (factor === 0) continue;
     const { final, strains, largest, contradicted } = forceMethod.case(index);
     value += contradicted ? Number.NaN : factor * virtualWork(statics, virtual, final, strains);
     force += Math.abs(factor) * largest;
-    ground += Math.abs(factor) * workOnGround(statics, virtual, final.ground);
+    imposed += Math.abs(factor) * workOnImposed(statics, virtual, final.imposed);
   }
-  return { value, rounding: roundingOf(statics, virtual, force, ground) };
+  return { value, rounding: roundingOf(statics, virtual, force, imposed) };
 }

@@ -3,7 +3,7 @@
 import type { UnitAction } from '../model/question.ts';
 import type { Structure } from '../model/structure.ts';
 import { type Elimination, eliminate } from './elimination.ts';
-import { addAction, emptyLoading, type Loading } from './loading.ts';
+import { addAction, emptyLoading, type FreeStrain, type Loading } from './loading.ts';
 import { type Preference, stiffestFromTheGround } from './preference.ts';
 import { type SpanForces, spanForces } from './span.ts';
 import { ENTRIES_PER_UNKNOWN, entriesOf, type Statics, staticsOf, toPhysicalUnits } from './statics.ts';
@@ -20,9 +20,18 @@ export interface ForceState {
   readonly unknowns: Float64Array;
   /** By leg. */
   readonly spans: ReadonlyMap<number, SpanForces>;
-  /** Imposed movement of each ground along its reaction, m or rad. */
-  readonly ground: Float64Array | undefined;
+  readonly imposed: Imposed;
 }
+
+/** What is there without a force. */
+export interface Imposed {
+  /** Movement of each ground along its reaction, m or rad. */
+  readonly ground: Float64Array | undefined;
+  /** By leg. */
+  readonly free: readonly FreeStrain[] | undefined;
+}
+
+export const NOTHING_IMPOSED: Imposed = { ground: undefined, free: undefined };
 
 /** Multiplications that a primary structure may take, about a second's work. */
 const MOST_EFFORT = 5e8;
@@ -74,7 +83,7 @@ export function primaryForces({ statics, elimination }: PrimaryStructure, loadin
   const unknowns = new Float64Array(statics.unknownCount);
   balance(elimination, load, unknowns);
   toPhysicalUnits(statics, unknowns);
-  return { unknowns, spans, ground: loading.ground };
+  return { unknowns, spans, imposed: { ground: loading.ground, free: loading.free } };
 }
 
 /** The virtual system of the actions, carried by the primary structure alone. */

@@ -1,6 +1,6 @@
 // The unit states: what one unit of a redundant, and none of the others, causes in the primary structure.
 
-import type { ForceState, PrimaryStructure } from './primary.ts';
+import { type ForceState, NOTHING_IMPOSED, type PrimaryStructure } from './primary.ts';
 import { type Statics, toPhysicalUnits, unitOf } from './statics.ts';
 import { selfBalance } from './substitution.ts';
 
@@ -38,7 +38,7 @@ export function unitStates({ statics, elimination }: PrimaryStructure): UnitStat
 export function forcesOfUnit(statics: Statics, state: UnitState): ForceState {
   const unknowns = new Float64Array(statics.unknownCount);
   addState(state, 1, unknowns);
-  return { unknowns, spans: new Map(), ground: undefined };
+  return { unknowns, spans: new Map(), imposed: NOTHING_IMPOSED };
 }
 
 /** Work of the state on strains given by unknown. */

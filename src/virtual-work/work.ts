@@ -1,15 +1,17 @@
 // The work of one state of forces on the strains of another: the integrals of virtual work, leg by leg.
+
+import { type FreeStrain, UNSTRAINED } from './loading.ts';
 import { bound, productIntegral, shifted } from './polynomial.ts';
-import type { ForceState } from './primary.ts';
+import type { ForceState, Imposed } from './primary.ts';
 import type { SpanForces, SpanPiece } from './span.ts';
 import type { StaticLeg, Statics } from './statics.ts';
 
 /**
- * What one unit of each unknown does work on, m or rad, by unknown. For a leg's axial force its lengthening ∫N/EA; for
- * its end moments ∫M(1 − x/L)/EI and ∫M(x/L)/EI, the turns of its ends against its chord; for a reaction the movement of
- * the point, turned about: r R/k − r g.
+ * What one unit of each unknown does work on, m or rad, by unknown. For a leg's axial force its lengthening ∫(N/EA + ε) dx;
+ * for its end moments ∫(M/EI + κ)(1 − x/L) dx and ∫(M/EI + κ)(x/L) dx, the turns of its ends against its chord, ε and κ
+ * being what heat and lack of fit do; for a reaction the movement of the point, turned about: r R/k − r g.
  */
-export function strainsOf(statics: Statics, { unknowns, spans, ground }: ForceState): Float64Array {
+export function strainsOf(statics: Statics, { unknowns, spans, imposed }: ForceState): Float64Array {
   const { legs, grounds, firstReaction } = statics;
   const strains = new Float64Array(statics.unknownCount);
   for (let index = 0; index < legs.length; index++) {
@@ -27,6 +29,8 @@ export function strainsOf(statics: Statics, { unknowns, spans, ground }: ForceSt
     strains[3 * index + 1]! += bendingFlexibility * span.fallingIntegral;
     strains[3 * index + 2]! += bendingFlexibility * span.risingIntegral;
   }
+  addFreeStrains(statics, imposed.free, strains);
+  const { ground } = imposed;
   for (let index = 0; index < grounds.length; index++) {
     const at = firstReaction + index;
     strains[at] = grounds[index]!.flexibility * unknowns[at]! - (ground ? ground[index]! : 0);
@@ -34,7 +38,24 @@ export function strainsOf(statics: Statics, { unknowns, spans, ground }: ForceSt
   return strains;
 }
 
-/** Σ∫(N n/EA + M m/EI) dx + Σ R r/k − Σ r g of a virtual state on real forces, whose strains are given. */
+/** Adds the lengthening of each leg by heat and lack of fit, and the turns of the ends that bend. */
+export function addFreeStrains(
+  { legs }: Statics,
+  free: readonly FreeStrain[] | undefined,
+  strains: Float64Array,
+): void {
+  if (!free) return;
+  for (let index = 0; index < legs.length; index++) {
+    const { length, bendingFlexibility } = legs[index]!;
+    const { axial, curvature } = free[index]!;
+    strains[3 * index]! += axial * length;
+    if (bendingFlexibility === 0) continue;
+    strains[3 * index + 1]! += (curvature * length) / 2;
+    strains[3 * index + 2]! += (curvature * length) / 2;
+  }
+}
+
+/** Σ∫((N/EA + ε) n + (M/EI + κ) m) dx + Σ R r/k − Σ r g of a virtual state on real forces, whose strains are given. */
 export function virtualWork(statics: Statics, virtual: ForceState, real: RealForces, strains: Float64Array): number {
   let work = 0;
   const { unknowns } = virtual;
@@ -54,22 +75,29 @@ const ROUNDING = 1e3 * Number.EPSILON;
 
 /**
  * The rounding of a movement: of the work that the virtual state would do if all real forces were as large as the largest
- * of them, N. That may be far more than the movement, as for the sway of a post that is only pressed. `ground`: the sizes
- * of Σ r g.
+ * of them, N. That may be far more than the movement, as for the sway of a post that is only pressed. `imposed`: the sizes
+ * of Σ r g and of Σ∫(ε n + κ m) dx.
  */
-export function roundingOf(statics: Statics, virtual: ForceState, largest: number, ground: number): number {
-  return ROUNDING * (largest === 0 ? ground : largest * workOfUnitForce(statics, virtual) + ground);
+export function roundingOf(statics: Statics, virtual: ForceState, largest: number, imposed: number): number {
+  return ROUNDING * (largest === 0 ? imposed : largest * workOfUnitForce(statics, virtual) + imposed);
 }
 
-/** The sizes of Σ r g, summed, for imposed movements g. */
-export function workOnGround(
-  { firstReaction }: Statics,
-  { unknowns }: ForceState,
-  ground: Float64Array | undefined,
-): number {
+/** The sizes of Σ r g and Σ∫(ε n + κ m) dx, summed, for imposed movements g, free strains ε and free curvatures κ. */
+export function workOnImposed(statics: Statics, { unknowns, spans }: ForceState, { ground, free }: Imposed): number {
+  const { legs, firstReaction } = statics;
   let work = 0;
   for (let index = 0; ground !== undefined && index < ground.length; index++) {
     work += Math.abs(unknowns[firstReaction + index]! * ground[index]!);
+  }
+  for (let index = 0; free !== undefined && index < free.length; index++) {
+    const { length, bendingFlexibility } = legs[index]!;
+    const { axial, curvature } = free[index]!;
+    const [start, end] = [unknowns[3 * index + 1]!, unknowns[3 * index + 2]!];
+    work += Math.abs(axial * unknowns[3 * index]!) * length;
+    if (bendingFlexibility === 0) continue;
+    work += (Math.abs(curvature) * length * (Math.abs(start) + Math.abs(end))) / 2;
+    const span = spans.get(index);
+    if (span) work += length * (Math.abs(axial * span.endAxial) + Math.abs(curvature * span.startShear * length));
   }
   return work;
 }
@@ -113,6 +141,7 @@ export function largestForce({ legs, firstReaction }: Statics, { unknowns, spans
 
 /** What is read of a real state: see `ForceState`. */
 export interface RealForces {
+  readonly imposed: Imposed;
   readonly unknowns: Float64Array;
   readonly spans: ReadonlyMap<number, { readonly pieces: readonly SpanPiece[] }>;
 }
@@ -120,7 +149,7 @@ export interface RealForces {
 /** Of what a virtual action within the leg adds to the forces that stand at its ends. */
 function workWithin(leg: StaticLeg, index: number, virtual: SpanForces, real: RealForces): number {
   const { axialFlexibility, bendingFlexibility } = leg;
-  const { unknowns, spans } = real;
+  const { unknowns, spans, imposed } = real;
   let axial = unknowns[3 * index]! * virtual.axialIntegral;
   let bending = unknowns[3 * index + 1]! * virtual.fallingIntegral + unknowns[3 * index + 2]! * virtual.risingIntegral;
   const pieces = spans.get(index)?.pieces ?? [];
@@ -135,5 +164,8 @@ function workWithin(leg: StaticLeg, index: number, virtual: SpanForces, real: Re
       bending += productIntegral(shifted(a.bendingMoment, inA), shifted(b.bendingMoment, inB), length);
     }
   }
-  return axialFlexibility * axial + bendingFlexibility * bending;
+  const free = imposed.free?.[index] ?? UNSTRAINED;
+  const unforced =
+    free.axial * virtual.axialIntegral + free.curvature * (virtual.fallingIntegral + virtual.risingIntegral);
+  return axialFlexibility * axial + bendingFlexibility * bending + unforced;
 }

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { structureDrawing } from '../../src/drawing/index.ts';
 import { METRIC } from '../../src/quantity/display.ts';
 import { significant } from '../../src/quantity/number.ts';
-import { acting, build, RAFTER } from './structures.ts';
+import { acting, build, RAFTER, STEEL } from './structures.ts';
 import { checkDrawing, textsOf } from './svg.ts';
 
 const SERVICE = [1, 1, 0, 1];
@@ -106,5 +106,33 @@ describe('a level beam', () => {
       return drawn(beam, [1], 'dead').find(text => text.startsWith('6.000 kN m'));
     });
     expect(sides).toEqual(['6.000 kN m, tension below, 2.000 m from A', '6.000 kN m, tension below, 2.000 m from B']);
+  });
+
+  it('tells heat and lack of fit by case, factored, over everything else', () => {
+    const loads = [
+      { case: 'sun', kind: 'heat', member: 0, above: 20, below: 20 },
+      { case: 'sun', kind: 'heat', member: 0, above: 30, below: -5 },
+      { case: 'frost', kind: 'heat', member: 0, above: -12, below: -12 },
+      { case: 'fit', kind: 'lengthen', member: 0, amount: 0.003 },
+      { case: 'fit', kind: 'lengthen', member: 0, amount: -0.0015 },
+    ] as const;
+    const beam = build({
+      points: { A: [0, 0], B: [4, 0] },
+      members: { M: ['A', 'B'] },
+      supports: [['A', 'fixed']],
+      cases: ['sun', 'frost', 'fit'],
+      section: { ...STEEL, thermalExpansion: 12e-6 },
+      loads: () => loads,
+    });
+    const texts = drawn(beam, [1.5, 1, 1], 'all');
+    expect(texts).toEqual(
+      expect.arrayContaining([
+        'sun M heated 30 K',
+        'sun M heated 45 K above, −7.5 K below',
+        'frost M cooled 12 K',
+        'fit M 3 mm too long',
+        'fit M 1.5 mm too short',
+      ]),
+    );
   });
 });

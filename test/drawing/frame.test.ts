@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import { caseSketch, mechanismDrawing, structureDrawing } from '../../src/drawing/index.ts';
 import { analyse } from '../../src/mechanics/analyse.ts';
 import { METRIC } from '../../src/quantity/display.ts';
-import { acting, build, PORTAL, RAFTER, type Sketch, TRUSS } from './structures.ts';
+import { acting, build, PORTAL, RAFTER, type Sketch, STEEL, TRUSS } from './structures.ts';
 import { checkDrawing, textsOf } from './svg.ts';
 
 describe('a frame', () => {
@@ -62,6 +62,22 @@ describe('a case', () => {
     expect(textsOf(svg)).toEqual(
       expect.arrayContaining(['snow, unfactored', 'sum 14.85 kN down', '2.4 kN/m', '0.6 to 3.1']),
     );
+  });
+});
+
+describe('a case of heat', () => {
+  it('is told under its sketch', () => {
+    const post = build({
+      points: { A: [0, 0], B: [0, 3], C: [5, 3] },
+      members: { P1: ['A', 'B'], R: ['B', 'C'] },
+      supports: [['A', 'fixed']],
+      cases: ['sun'],
+      section: { ...STEEL, thermalExpansion: 12e-6 },
+      loads: () => [0, 1].map(member => ({ case: 'sun', kind: 'heat', member, above: 25, below: 25 }) as const),
+    });
+    const svg = caseSketch(post, 0, acting(post, [1]).solution?.applied, METRIC, 'page');
+    checkDrawing(svg);
+    expect(textsOf(svg)).toContain('P1, R heated 25 K');
   });
 });
 

@@ -131,6 +131,18 @@ describe('the inputs', () => {
     expect(words).toContain('RHS box 100 mm × 200 mm × 6 mm, S355; of R1 210 GPa 34.56 cm² 1794 cm⁴ 179.4 cm³');
     expect(words).toContain('1.15 kN/m down on R1 7.590 supplier');
     expect(words).toContain('service dead + snow + lamp unfactored');
+    expect(words).not.toContain('alpha');
+  });
+
+  it('give the depth and the expansion where something is heated', () => {
+    const heated = render(
+      fenced(`${CANTILEVER.replace('EI 4 MN m2', 'EI 4 MN m2, depth 0.3 m, alpha 12e-6 /K')}
+load sun: heat B1 by 30 K above, 5 K below "local practice"`),
+    );
+    const words = wordsOf(heated);
+    expect(words).toContain('self-weight depth alpha');
+    expect(words).toContain('0.3000 m 12e-6 /K');
+    expect(words).toContain('sun heat B1 by 30 K above, 5 K below – local practice');
   });
 });
 

@@ -50,6 +50,10 @@ function inWords({ points, members, sections, hinges, supports, loads }: Structu
           return `${load.case}: couple ${load.moment} at ${place(load.at)}`;
         case 'movement':
           return `${load.case}: move ${point(load.point)} by ${number(load.amount)} ${JSON.stringify(load.freedom)}`;
+        case 'heat':
+          return `${load.case}: heat ${member(load.member)} by ${load.above} above, ${load.below} below`;
+        case 'lengthen':
+          return `${load.case}: lengthen ${member(load.member)} by ${number(load.amount)}`;
         default:
           return '';
       }

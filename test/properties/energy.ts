@@ -28,7 +28,7 @@ export function movementAtLocation(structure: Structure, solution: Solution, at:
   return { x, y, turn: fieldAt(field, at.distance).rotation };
 }
 
-/** Σ load · movement of one case's loads on the movements of any solution; imposed movements are no loads. */
+/** Σ load · movement of one case's loads on the movements of any solution; what is imposed is no load. */
 export function workOfLoads(structure: Structure, index: number, solution: Solution): Work {
   const work: Work = { value: 0, size: 0 };
   for (const load of structure.loads) {
@@ -42,6 +42,8 @@ export interface Energy {
   readonly loads: Work;
   /** What the ground works by moving under the reactions: half of Σ R g, as both grow together. */
   readonly ground: number;
+  /** What the forces work on the strains of heat and lack of fit: half of Σ∫(N ε + M κ) dx. */
+  readonly strains: number;
   /** Half of Σ∫(N²/EA + M²/EI) dx + Σ k (movement against the ground)². */
   readonly stored: number;
 }
@@ -66,7 +68,29 @@ export function energyOf(structure: Structure, index: number, solution: Solution
       if (stiffness < Infinity) stored += stiffness * (part(moved, freedom) - part(imposed, freedom)) ** 2;
     }
   }
-  return { loads: { value: loads.value / 2, size: loads.size / 2 }, ground: ground / 2, stored: stored / 2 };
+  const strains = workOnStrains(structure, index, solution) / 2;
+  return { loads: { value: loads.value / 2, size: loads.size / 2 }, ground: ground / 2, strains, stored: stored / 2 };
+}
+
+/** Σ∫(N ε + M κ) dx: the forces of any solution, the strains that heat and lack of fit of one case cause by themselves. */
+export function workOnStrains(structure: Structure, index: number, solution: Solution): number {
+  let work = 0;
+  for (const load of structure.loads) {
+    if (load.case !== index || (load.kind !== 'heat' && load.kind !== 'lengthen')) continue;
+    const { legs, length } = structure.members[load.member]!;
+    for (const piece of solution.members[load.member]!.pieces) {
+      const { thermalExpansion, depth } = structure.sections[legs[piece.leg]!.section]!;
+      if (load.kind === 'lengthen') {
+        work += (load.amount / length) * integral(piece, 'axialForce');
+        continue;
+      }
+      const [upper, under] = [thermalExpansion! * load.above, thermalExpansion! * load.below];
+      work += ((upper + under) / 2) * integral(piece, 'axialForce');
+      // A moment works by stretching the underside and pressing the upper side.
+      work += ((under - upper) / depth!) * integral(piece, 'bendingMoment');
+    }
+  }
+  return work;
 }
 
 function imposedAt(structure: Structure, index: number, point: number): MovementAt {
@@ -133,6 +157,8 @@ function addWork(structure: Structure, load: Load, solution: Solution, work: Wor
       return;
     }
     case 'movement':
+    case 'heat':
+    case 'lengthen':
       return;
   }
 }
@@ -190,6 +216,13 @@ function overPieces(
       add((weight * (end - start) * density(x, y, distance, leg)) / 2);
     }
   }
+}
+
+function integral(piece: FieldPiece, name: 'axialForce' | 'bendingMoment'): number {
+  const length = piece.end - piece.start;
+  let sum = 0;
+  for (const [place, weight] of GAUSS) sum += (weight * length * valueAt(piece[name], ((1 + place) * length) / 2)) / 2;
+  return sum;
 }
 
 function squareIntegral(piece: FieldPiece, name: 'axialForce' | 'bendingMoment'): number {

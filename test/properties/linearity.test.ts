@@ -4,7 +4,7 @@ import { expect } from 'vitest';
 import type { Solution } from '../../src/mechanics/solution.ts';
 import { combine } from '../../src/mechanics/superposition.ts';
 import type { Location, Structure } from '../../src/model/structure.ts';
-import { energyOf, movementAtLocation, workOfLoads } from './energy.ts';
+import { energyOf, movementAtLocation, workOfLoads, workOnStrains } from './energy.ts';
 import { expectSame, flexibilityOf, read, scalesOf, times } from './readings.ts';
 import { allowed, analysed, holds } from './run.ts';
 import { structures } from './structures.ts';
@@ -92,12 +92,34 @@ holds(
   },
 );
 
+holds(
+  'Maysel: loads work on the movements of heat and misfits as their forces do on the strains',
+  structures(),
+  structure => {
+    const bare = structure.loads.filter(({ kind }) => kind !== 'movement' && kind !== 'heat' && kind !== 'lengthen');
+    const strains = structure.loads.filter(({ kind }) => kind === 'heat' || kind === 'lengthen');
+    const apart = withLoads(structure, [bare, strains]);
+    const analysis = analysed(apart);
+    const [forces, strained] = analysis.cases;
+    const work = workOfLoads(apart, 0, strained!);
+    const scale = Math.max(work.size, leastWork(apart, forces!, strained!));
+    const difference = work.value - workOnStrains(apart, 1, forces!);
+    expect(Math.abs(difference) / scale).toBeLessThanOrEqual(allowed(analysis, 1e-10));
+  },
+);
+
 holds('Clapeyron: the loads and the ground work as much as the members and springs store', structures(), structure => {
   const analysis = analysed(structure);
   for (const [index, solution] of analysis.cases.entries()) {
-    const { loads, ground, stored } = energyOf(structure, index, solution);
-    const scale = Math.max(loads.size, Math.abs(ground), stored, leastWork(structure, solution, solution));
-    expect(Math.abs(loads.value + ground - stored) / scale).toBeLessThanOrEqual(allowed(analysis, 1e-10));
+    const { loads, ground, strains, stored } = energyOf(structure, index, solution);
+    const scale = Math.max(
+      loads.size,
+      Math.abs(ground),
+      Math.abs(strains),
+      stored,
+      leastWork(structure, solution, solution),
+    );
+    expect(Math.abs(loads.value + ground - strains - stored) / scale).toBeLessThanOrEqual(allowed(analysis, 1e-10));
   }
 });
 

@@ -70,6 +70,10 @@ function carried(structure: Structure, { turn, origin, sense }: Motion): Structu
         const amount = load.freedom.kind === 'rotation' ? load.amount * sense : load.amount;
         return { ...load, freedom: freedomOf(load.freedom), amount };
       }
+      case 'heat':
+        return sense < 0 ? { ...load, above: load.below, below: load.above } : load;
+      case 'lengthen':
+        return load;
     }
   };
   return {

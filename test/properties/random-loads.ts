@@ -67,6 +67,16 @@ function canTakeCouple(structure: Structure, name: string): boolean {
   );
 }
 
+/** Heat and lack of fit; a bar is heated evenly. */
+export function strains(structure: Structure, draw: Draw): SketchLoad[] {
+  return Array.from({ length: draw.below(4) }, () => {
+    const { name, kind, length } = draw.of(structure.members);
+    if (draw.below(3) === 0) return { lengthen: name, by: ((draw.below(21) - 10) / 5000) * length };
+    const above = 5 * draw.below(17) - 30;
+    return { heat: name, above, below: kind === 'bar' || draw.below(3) === 0 ? above : 5 * draw.below(17) - 30 };
+  });
+}
+
 export function movements(structure: Structure, draw: Draw): SketchLoad[] {
   if (draw.below(2) === 0) return [];
   const support = draw.of(structure.supports);

@@ -107,8 +107,17 @@ export function scalesOf(structure: Structure, reading: Reading): Scales {
   return { movement, rotation: movement / lever, force, moment: force * lever };
 }
 
-function imposedMovement({ loads }: Structure): number {
-  return largest(loads.map(load => (load.kind === 'movement' ? load.amount : 0)));
+function imposedMovement({ loads, members, sections }: Structure): number {
+  return largest(
+    loads.map(load => {
+      if (load.kind === 'movement' || load.kind === 'lengthen') return load.amount;
+      if (load.kind !== 'heat') return 0;
+      const { legs, length } = members[load.member]!;
+      const { thermalExpansion, depth } = sections[legs[0]!.section]!;
+      const bow = ((load.above - load.below) * length ** 2) / depth!;
+      return thermalExpansion! * Math.max(Math.abs(load.above) * length, Math.abs(load.below) * length, Math.abs(bow));
+    }),
+  );
 }
 
 /** The mean length of a leg. */

@@ -2,7 +2,7 @@
 import fc from 'fast-check';
 
 export interface Options {
-  /** Without springs and imposed movements. */
+  /** Without springs, imposed movements, heat and lack of fit. */
   readonly forcesOnly?: boolean;
   /** Without axially stiff members. */
   readonly stretching?: boolean;

@@ -37,7 +37,17 @@ test('every kind of load', () => {
   const loads = sample.flatMap(structure => structure.loads);
   const kinds = loads.map(load => (load.kind === 'line' ? `line ${load.direction.kind}` : load.kind));
   expect(new Set(kinds)).toEqual(
-    new Set(['self-weight', 'line global', 'line square', 'line along', 'force', 'couple', 'movement']),
+    new Set([
+      'self-weight',
+      'line global',
+      'line square',
+      'line along',
+      'force',
+      'couple',
+      'movement',
+      'heat',
+      'lengthen',
+    ]),
   );
   expect(loads.some(load => load.kind === 'line' && load.direction.kind === 'global' && load.direction.onPlan)).toBe(
     true,

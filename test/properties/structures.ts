@@ -6,11 +6,11 @@ import type { Structure } from '../../src/model/structure.ts';
 import { movement, prepare, primaryStructure } from '../../src/virtual-work/index.ts';
 import { build, type Sketch, type SketchLoad } from '../virtual-work/build.ts';
 import { described } from './described.ts';
-import { holding, lineLoad, movements, pointLoad } from './random-loads.ts';
+import { holding, lineLoad, movements, pointLoad, strains } from './random-loads.ts';
 import { Draw, type Options, type Recipe, recipes } from './recipe.ts';
 import { bar, type Growing, SHAPES } from './shapes.ts';
 
-/** Three cases: 0 of line loads and weight, 1 of forces and couples, 2 of all kinds, imposed movements included. */
+/** Three cases: 0 of line loads and weight, 1 of forces and couples, 2 of all kinds, imposed movements, heat and lack of fit included. */
 export function structures(options: Options = {}): fc.Arbitrary<Structure> {
   return recipes.map(recipe => described(structureOf(recipe, options)));
 }
@@ -106,8 +106,11 @@ function loaded(sketch: Growing, recipe: Recipe, options: Options): Structure {
     draw.below(2) === 0 ? lineLoad(bare, draw) : pointLoad(bare, draw),
   );
   const moves = options.forcesOnly ? [] : movements(bare, draw);
-  const withMoves = build(sketchOf(sketch, { spread, single, mixed: [...mixed, ...moves] }));
-  if (moves.length === 0 || !contradicted(withMoves)) return withMoves;
+  const strained = options.forcesOnly ? [] : strains(bare, draw);
+  for (const imposed of [[...moves, ...strained], strained, moves]) {
+    const structure = build(sketchOf(sketch, { spread, single, mixed: [...mixed, ...imposed] }));
+    if (imposed.length === 0 || !contradicted(structure)) return structure;
+  }
   return build(sketchOf(sketch, { spread, single, mixed }));
 }
 

@@ -34,8 +34,11 @@ export function reversed(structure: Structure, member: number): Structure {
       case 'force':
       case 'couple':
         return { ...load, at: place(load.at) };
+      case 'heat':
+        return load.member === member ? { ...load, above: load.below, below: load.above } : load;
       case 'self-weight':
       case 'movement':
+      case 'lengthen':
         return load;
     }
   };
@@ -82,6 +85,8 @@ export function reordered(structure: Structure): Structure {
       case 'self-weight':
         return { ...load, members: load.members.map(member => lastMember - member) };
       case 'line':
+      case 'heat':
+      case 'lengthen':
         return { ...load, member: lastMember - load.member };
       case 'force':
       case 'couple':
@@ -114,7 +119,10 @@ export function inUnits(structure: Structure, length: number, force: number): St
   const convert = (load: Load): Load => {
     switch (load.kind) {
       case 'self-weight':
+      case 'heat':
         return load;
+      case 'lengthen':
+        return { ...load, amount: load.amount * length };
       case 'line':
         return {
           ...load,
@@ -140,6 +148,7 @@ export function inUnits(structure: Structure, length: number, force: number): St
       axialStiffness: stiff(section.axialStiffness, force),
       // Such that mass times gravity comes out as force per length.
       massPerLength: stiff(section.massPerLength, force / length),
+      depth: stiff(section.depth, length),
     })),
     members: structure.members.map(member => ({
       ...member,
@@ -205,6 +214,9 @@ export function scaledLoad(load: Load, factor: number): Load {
     case 'couple':
       return { ...load, moment: load.moment * factor };
     case 'movement':
+    case 'lengthen':
       return { ...load, amount: load.amount * factor };
+    case 'heat':
+      return { ...load, above: load.above * factor, below: load.below * factor };
   }
 }

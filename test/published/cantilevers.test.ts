@@ -1,5 +1,5 @@
 // Cantilevers, fixed at the left end A, of span L, constant EI unless the note says otherwise.
-import { aisc, check, EI, L, M, P, roark, w } from './check.ts';
+import { aisc, check, EI, kappa, L, M, P, roark, w } from './check.ts';
 
 const ASK = `
 find tip:  deflection at B
@@ -60,6 +60,12 @@ check('C06', 'couple at the tip', roark('3a'), beam('6.3 kN m clockwise at B'), 
   tip: (M * L ** 2) / (2 * EI),
   turn: (-M * L) / EI,
   wall: -M,
+});
+
+check('C07', 'warmer above than below', roark('6a'), beam('heat R by 30 K above, 5 K below'), {
+  tip: (kappa * L ** 2) / 2,
+  turn: -kappa * L,
+  wall: 0,
 });
 
 check(

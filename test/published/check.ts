@@ -10,8 +10,11 @@ export const P = 5.2e3;
 export const w = 2.75e3;
 export const M = 6.3e3;
 
+/** Free curvature, convex upward, where S is 25 K warmer above than below. */
+export const kappa = (12e-6 * 25) / 0.4;
+
 /** Put before each note. */
-const SECTION = 'section S: EI 6.4 MN m2\n';
+const SECTION = 'section S: EI 6.4 MN m2, depth 0.4 m, alpha 12e-6 /K\n';
 
 /** `id` is for finding a case again. Every answer is held to 1e-9, an answer that should be nil to 1e-9 of `scale`. */
 export function check(

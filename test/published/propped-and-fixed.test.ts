@@ -1,5 +1,5 @@
 // Propped cantilevers (prop at A, fixed at B) and beams fixed at both ends, of span L, constant EI.
-import { aisc, check, EI, L, M, P, roark, w } from './check.ts';
+import { aisc, check, EI, kappa, L, M, P, roark, w } from './check.ts';
 
 const ASK = `
 find worst: deflection of R
@@ -106,6 +106,13 @@ check('P07', 'propped, the prop settles', roark('5c'), propped('move A by 8 mm d
   wall: (-3 * EI * 0.008) / L ** 2,
 });
 
+check('P08', 'propped, warmer above than below', roark('6c'), propped('heat R by 30 K above, 5 K below'), {
+  near: 0,
+  wall: (3 * EI * kappa) / 2,
+  left: (3 * EI * kappa) / (2 * L),
+  right: (-3 * EI * kappa) / (2 * L),
+});
+
 check(
   'P09',
   'propped by a spring, uniform load',
@@ -196,4 +203,13 @@ check('X07', 'fixed, one end turned', `${roark('4d')}; slope-deflection`, fixed(
   wall: (-2 * EI * 0.002) / L,
   left: (-6 * EI * 0.002) / L ** 2,
   turn: -0.002,
+});
+
+// Its length is held and it is axially stiff: the mean over the depth must be nil.
+check('X08', 'fixed, warmer above than below', roark('6d'), fixed('heat R by 12.5 K above, -12.5 K below'), {
+  worst: 0,
+  near: EI * kappa,
+  wall: EI * kappa,
+  left: 0,
+  turn: 0,
 });

@@ -1,5 +1,5 @@
 // Simple spans, supported at A and B, of span L, constant EI.
-import { aisc, check, EI, L, M, P, roark, w } from './check.ts';
+import { aisc, check, EI, kappa, L, M, P, roark, w } from './check.ts';
 
 const beam = (load: string) => `
 member R: A -- 4.8 m -- B
@@ -162,3 +162,8 @@ find here: moment at 1.3 m from A on R`,
     here: M,
   },
 );
+
+check('S11', 'warmer above than below', roark('6e'), beam('heat R by 30 K above, 5 K below'), {
+  worst: (-kappa * L ** 2) / 8,
+  most: 0,
+});

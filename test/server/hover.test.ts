@@ -126,6 +126,15 @@ load dead: ${load}`);
     expect(hoverLines(beam('6 kN ¦m clockwise at B'))[1]).toBe('Resultant: 6.000 kN m clockwise');
   });
 
+  test('heat and lack of fit have no resultant', () => {
+    const frame = (load: string): string => beam(load).replace('A 10 cm2', 'A 10 cm2, alpha 12e-6 /K, depth 0.2 m');
+    expect(hoverLines(frame('heat B1 ¦by 25 K'))[1]).toBe('Resultant: none; heated 25 K');
+    expect(hoverLines(frame('heat B1 by 30 K ¦above, 5 K below'))[1]).toBe(
+      'Resultant: none; heated 30 K above, 5 K below',
+    );
+    expect(hoverLines(frame('shorten B1 ¦by 3 mm'))[1]).toBe('Resultant: none; 3 mm too short');
+  });
+
   test('a case: all its loads', () => {
     const lines = hoverLines(fenced(`${CANTILEVER}\nload sign: 0.5 kN right at B\nfind drift: sway at B under si¦gn`));
     expect(lines).toEqual(['sign case, unfactored', 'Resultant: 1.500 kN down, 0.5000 kN to the right']);

@@ -46,10 +46,16 @@ export type SketchLoad =
   | { line: string; from?: number; to?: number; size: number | readonly [number, number]; direction?: LineDirection }
   | { force: readonly [x: number, y: number]; at: string }
   | { couple: number; at: string }
-  | { move: string; by: readonly [x: number, y: number] | { turn: number } };
+  | { move: string; by: readonly [x: number, y: number] | { turn: number } }
+  /** K; sections expand by `EXPANSION` and are `DEPTH` deep. */
+  | { heat: string; above: number; below: number }
+  | { lengthen: string; by: number };
 
 export const DOWN: LineDirection = { kind: 'global', x: 0, y: -1, onPlan: false };
 export const HELD = Number.POSITIVE_INFINITY;
+/** 1/K and m. */
+export const EXPANSION = 1.2e-5;
+export const DEPTH = 0.3;
 const RANGE = { start: 0, end: 0 };
 
 export function build(sketch: Sketch): Structure {
@@ -125,6 +131,12 @@ export function build(sketch: Sketch): Structure {
       }
       if ('force' in load) return { ...common, kind: 'force', x: load.force[0], y: load.force[1], at: place(load.at) };
       if ('couple' in load) return { ...common, kind: 'couple', moment: load.couple, at: place(load.at) };
+      if ('heat' in load) {
+        return { ...common, kind: 'heat', member: memberOf(load.heat), above: load.above, below: load.below };
+      }
+      if ('lengthen' in load) {
+        return { ...common, kind: 'lengthen', member: memberOf(load.lengthen), amount: load.by };
+      }
       const point = pointOf(load.move);
       if ('turn' in load.by) {
         return { ...common, kind: 'movement', point, freedom: { kind: 'rotation' }, amount: load.by.turn };
@@ -161,7 +173,8 @@ function section(name: string, EI?: number, EA?: number, mass?: number): Section
     area: undefined,
     secondMomentOfArea: undefined,
     youngsModulus: undefined,
-    depth: undefined,
+    depth: DEPTH,
+    thermalExpansion: EXPANSION,
     range: RANGE,
   };
 }

@@ -16,7 +16,7 @@ export const LOAD: StatementForm = {
   grammar:
     'load CASE: [FACTOR] self-weight [of MEMBERS] | VALUE [to VALUE] DIRECTION on [plan] MEMBERS [from END to END] [, patterned] | ' +
     'VALUE square DIRECTION on MEMBERS … | VALUE along MEMBERS towards P … | VALUE DIRECTION at PLACE [in MEMBER] | ' +
-    'VALUE DIRECTION at every VALUE from END to END on MEMBER | heat MEMBERS by VALUE | move P by VALUE DIRECTION | ' +
+    'VALUE DIRECTION at every VALUE from END to END on MEMBER | heat MEMBERS by VALUE [above, VALUE below] | move P by VALUE DIRECTION | ' +
     'lengthen MEMBERS by VALUE | shorten MEMBERS by VALUE',
   examples: [
     'load dead: self-weight',

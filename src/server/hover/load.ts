@@ -1,4 +1,5 @@
 // Hovers on a load, a case and a combination: what they put on the structure.
+import { strainWords } from '../../drawing/index.ts';
 import { wholeCase } from '../../model/patterns.ts';
 import type { Load, Structure } from '../../model/structure.ts';
 import type { Combination, StructureResult } from '../../note/result.ts';
@@ -38,10 +39,24 @@ export function combinationCard({ name, alternatives }: Combination): Card {
 }
 
 function resultantRow(structure: Structure, loads: readonly Load[], units: DisplayUnits): Row {
-  if (loads.length > 0 && loads.every(({ kind }) => kind === 'movement')) {
-    return { label: 'Resultant', text: 'none; a movement of a support' };
+  const imposed = [...new Set(loads.map(load => imposedWords(load, units)))];
+  if (loads.length > 0 && imposed.every(words => words !== undefined)) {
+    return { label: 'Resultant', text: `none; ${imposed.join(', ')}` };
   }
   return { label: 'Resultant', text: inAllDirections(resultantOf(structure, loads), units) };
+}
+
+/** Of a load that puts no force on anything. */
+function imposedWords(load: Load, units: DisplayUnits): string | undefined {
+  switch (load.kind) {
+    case 'movement':
+      return 'a movement of a support';
+    case 'heat':
+    case 'lengthen':
+      return strainWords(load, units).replaceAll('\u2009', ' ');
+    default:
+      return undefined;
+  }
 }
 
 function sourceRow({ source }: Load): Row[] {

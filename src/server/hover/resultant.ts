@@ -9,7 +9,7 @@ export interface Resultant {
   readonly couple: number;
 }
 
-/** Imposed movements have no resultant and count as nothing. */
+/** Imposed movements, heat and lack of fit have no resultant and count as nothing. */
 export function resultantOf(structure: Structure, loads: readonly Load[]): Resultant {
   let [x, y, couple] = [0, 0, 0];
   for (const load of loads) {
@@ -32,6 +32,8 @@ function ofLoad(structure: Structure, load: Load): Resultant {
     case 'couple':
       return { x: 0, y: 0, couple: load.moment };
     case 'movement':
+    case 'heat':
+    case 'lengthen':
       return { x: 0, y: 0, couple: 0 };
   }
 }
