@@ -41,6 +41,8 @@ export const CODES = {
   // results
   'limit-exceeded': 'A requirement is not met.',
   'limit-without-source': 'A limit has no source.',
+  'force-reversed':
+    'A support that bears only would have to pull, or a bar the other way than it is said to: its answers are withheld.',
   'answer-withheld': 'The two methods or the equilibrium check disagree; the number is not shown.',
   // files
   'unreadable-note': 'A file that cannot be read as a note.',

@@ -34,15 +34,6 @@ export function buildStructure(building: Building): Structure {
   const hinges = readHinges(building);
   const supports = readSupports(scope, geometry, figures, report);
   for (const statement of scope.statements) reportUnevaluatedJoints(statement, report);
-  for (const { only, name } of geometry.members) {
-    if (only === undefined) continue;
-    report.flawed = true;
-    report.error(
-      'not-evaluated-yet',
-      only.range,
-      `That ${name} ${only.kind} only is read but not evaluated by this version: its answers are withheld.`,
-    );
-  }
   const sectionOf = (member: number, leg: number): Section | undefined =>
     sections.list[members[member]!.legs[leg]!.section];
   const { cases, loads } = readLoads(
@@ -81,7 +72,14 @@ class Sections {
 
   give(member: LaidMember): Member {
     const legs = member.legs.map(leg => ({ ...leg, section: this.#sectionOf(leg, member) }));
-    return { name: member.name, kind: member.kind, legs, length: member.length, range: member.range };
+    return {
+      name: member.name,
+      kind: member.kind,
+      legs,
+      length: member.length,
+      ...(member.only === undefined ? {} : { only: member.only.kind }),
+      range: member.range,
+    };
   }
 
   /** Index of the leg's section; that of an empty one, and the structure flawed, where there is none. */

@@ -21,7 +21,7 @@ export interface Geometry {
 }
 
 /** A member whose legs know the words for their section, not yet the section. */
-export interface LaidMember extends Omit<Member, 'legs'> {
+export interface LaidMember extends Omit<Member, 'legs' | 'only'> {
   readonly legs: readonly LaidLeg[];
   readonly only: { readonly kind: 'pulls' | 'bears'; readonly range: Range } | undefined;
 }

@@ -68,6 +68,8 @@ export interface Member {
   readonly legs: readonly Leg[];
   /** Along the chain, m. */
   readonly length: number;
+  /** The writer's assumption that it is never in compression (`pulls`) or never in tension; tested, not built in. */
+  readonly only?: 'pulls' | 'bears';
   readonly range: Range;
 }
 
@@ -104,6 +106,8 @@ export interface Hinge {
 export interface Support {
   readonly point: number;
   readonly restraints: readonly Restraint[];
+  /** The unit vector of the push on the structure that, as the writer assumes, never turns into a pull; tested, not built in. */
+  readonly bears?: { readonly x: number; readonly y: number };
   /** As the writer said it, for drawings and words: `pinned`, `roller on 30 deg`, `hold x, rotation`. */
   readonly symbol: SupportSymbol;
   readonly range: Range;

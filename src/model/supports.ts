@@ -1,6 +1,7 @@
 // Supports as restraints: what is held or sprung at a point, and the symbol that a drawing shows for it.
 import type { Statement, StatementOf, SupportItem } from '../language/syntax.ts';
 import { divideDimensions, FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
+import type { Range } from '../quantity/range.ts';
 import type { Due, Figures } from './figures.ts';
 import { AN_ANGLE, cleanCosine, cleanSine, type Geometry } from './geometry.ts';
 import type { Report } from './report.ts';
@@ -54,6 +55,7 @@ function readSupport(
   const springs: ('x' | 'y' | 'rotation')[] = [];
   let kind: SupportSymbol['kind'] = 'held';
   let angle = 0;
+  let onlyBears: Range | undefined;
   let sound = true;
   for (const item of statement.items) {
     switch (item.kind) {
@@ -93,19 +95,31 @@ function readSupport(
         break;
       }
       case 'bears-only':
-        sound = false;
-        report.error(
-          'not-evaluated-yet',
-          item.range,
-          'A support that bears only is read but not evaluated by this version: its answers are withheld.',
-          {
-            hint: 'leave `bears only` out, and check the sign of the reaction with >=',
-          },
-        );
+        onlyBears = item.range;
         break;
     }
   }
-  return sound ? { point, restraints, symbol: { kind, angle, springs }, range: statement.point.range } : undefined;
+  const bears = onlyBears === undefined ? undefined : pushOf(kind, restraints);
+  if (onlyBears !== undefined && bears === undefined && sound) {
+    sound = false;
+    report.error('bad-support', onlyBears, `Which way ${statement.point.text} would bear cannot be told.`, {
+      hint: 'write roller, or roller on an angle, which bears at right angles to its surface',
+    });
+  }
+  const symbol = { kind, angle, springs };
+  const common = { point, restraints, symbol, range: statement.point.range };
+  return sound ? { ...common, ...(bears === undefined ? {} : { bears }) } : undefined;
+}
+
+/** A roller pushes at right angles to its surface, any other support upwards. */
+function pushOf(
+  kind: SupportSymbol['kind'],
+  restraints: readonly Restraint[],
+): { readonly x: number; readonly y: number } | undefined {
+  const resisted = restraints.flatMap(({ freedom }) => (freedom.kind === 'movement' ? [freedom] : []));
+  const [first] = resisted;
+  if (kind === 'roller' && first !== undefined) return { x: first.x, y: first.y };
+  return resisted.some(({ y }) => y !== 0) ? { x: 0, y: 1 } : undefined;
 }
 
 function readSpring(

@@ -15,6 +15,7 @@ import type { DisplayKind, DisplayUnits } from '../quantity/display.ts';
 import { significant } from '../quantity/number.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
+import { type Reversal, reversalInWords } from './one-sided.ts';
 import { answerInWords, displayKind, show } from './phrases.ts';
 import type { Alternative, Answer, AnswerPlace, Check } from './result.ts';
 import { hold, MOST_DIFFERENCE } from './second-road.ts';
@@ -366,6 +367,7 @@ interface Checked {
 
 /** The worst of the checks of all that took part; undefined, and reported, where they do not bear the answer out. */
 function checked(inputs: AnswerInputs, series: Series): Checked | undefined {
+  if (series.reversal !== undefined) return refuseReversed(inputs, series.reversal);
   let [difference, residual, rounding] = [0, 0, 0];
   for (const taken of series.taken) {
     const held = hold(taken);
@@ -384,6 +386,15 @@ function checked(inputs: AnswerInputs, series: Series): Checked | undefined {
       hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
     },
   );
+  return undefined;
+}
+
+function refuseReversed({ question, units, report }: AnswerInputs, reversal: Reversal): undefined {
+  const message = `${question.name.text} is withheld: ${reversalInWords(reversal, units)}.`;
+  report.error('force-reversed', question.name.range, message, {
+    hint: 'ask under alternatives that do not reverse it',
+    related: [{ range: reversal.range, message: 'What is assumed stands here.' }],
+  });
   return undefined;
 }
 

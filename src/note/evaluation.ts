@@ -99,7 +99,7 @@ export class NoteEvaluation {
     }
     const structures = this.#states.map((state, index) => this.#structureResult(state, index, answers));
     this.#reportHead();
-    for (const state of this.#states) remarksOn(state, this.#inputs.scopes.head);
+    for (const state of this.#states) remarksOn(state, this.#inputs.scopes.head, this.#unitsOf(state.scope));
     return { structures, answers, values };
   }
 

@@ -1,14 +1,18 @@
 // What an experienced checker would remark on although nothing is wrong with the words: a case that no combination takes
 // up, a limit without a source.
 import type { Under } from '../language/syntax.ts';
+import { alternativesUnder } from '../model/combinations.ts';
 import type { Scope } from '../model/scope.ts';
+import type { DisplayUnits } from '../quantity/display.ts';
+import { reversalsUnder, warnOfReversals } from './one-sided.ts';
 import type { StructureState } from './structure-state.ts';
 
-export function remarksOn(state: StructureState, head: Scope): void {
+export function remarksOn(state: StructureState, head: Scope, units: DisplayUnits): void {
   limitsWithoutSource(state);
   showsNotDrawn(state);
   // Where something is missing from the structure, what is used and what is not cannot be told.
   if (state.withheld !== undefined) return;
+  reversedForces(state, units);
   unusedCases(state, head);
   casesWithoutLoad(state);
 }
@@ -67,6 +71,20 @@ function casesWithoutLoad({ scope, report }: StructureState): void {
       hint: 'give it one, or take the line out',
     });
   }
+}
+
+/** Under every alternative that someone may read: of the combinations, and of the cases that are asked about alone. */
+function reversedForces(state: StructureState, units: DisplayUnits): void {
+  const [structure, solved, combinations] = [state.structure(), state.solved(), state.combinations()];
+  if (structure === undefined || solved === undefined) return;
+  const summed = combinations.filter(({ kind }) => kind === 'combination');
+  const asked = state.scope.statements.flatMap(statement => {
+    if (statement.kind !== 'find' && statement.kind !== 'require') return [];
+    const meant = alternativesUnder(statement.under, combinations);
+    return 'problem' in meant ? [] : meant.alternatives;
+  });
+  const all = new Set([...(summed.length > 0 ? summed : combinations).flatMap(one => one.alternatives), ...asked]);
+  warnOfReversals(reversalsUnder(solved, structure, [...all]), units, state.report);
 }
 
 /** What a page is asked to show and this version does not work out yet. */

@@ -13,6 +13,7 @@ import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { isLinear } from './linear.ts';
 import type { Refusal } from './once.ts';
+import { type Reversal, reversalsUnder } from './one-sided.ts';
 import {
   allSets,
   loading,
@@ -44,6 +45,8 @@ export interface Series {
   readonly measured: readonly Measured[];
   /** Every measure behind the governing value, those of earlier results included: what the checks are made on. */
   readonly taken: readonly Taken[];
+  /** A force that is assumed to act one way, and that an alternative behind a value reverses; the most of several. */
+  readonly reversal: Reversal | undefined;
   /** Whether anything was measured under a combination, so that there is something to say behind `under`. */
   readonly solved: Solved | undefined;
   /** For a later question: the spans of patterned loads under an alternative, and the value with some of them loaded. */
@@ -205,6 +208,7 @@ class SeriesReader {
       measure: this.#alone(job),
       measured: worst.flatMap(({ worked }) => worked.measured ?? []),
       taken: worst[governing]!.worked.taken,
+      reversal: this.#reversal(job),
       solved: own?.solved ?? before[0]?.series.solved,
       spansUnder: index => this.#spans(job, index),
       at: (index, pattern) => {
@@ -216,6 +220,13 @@ class SeriesReader {
       },
       isLinear: index => this.#isLinear(job, index),
     };
+  }
+
+  #reversal({ own, before }: Job): Reversal | undefined {
+    const structure = this.#inputs.state.structure();
+    const mine =
+      own === undefined || structure === undefined ? [] : reversalsUnder(own.solved, structure, own.alternatives);
+    return [...mine, ...before.flatMap(({ series }) => series.reversal ?? [])].sort((a, b) => b.force - a.force)[0];
   }
 
   #acting(job: Job, alternative: AlternativeModel, index: number, { pattern }: Worst): AlternativeModel {

@@ -41,10 +41,15 @@ export function solutionKey(structure: Structure): string {
         area ?? '',
       ],
     ),
-    members.map(({ kind, legs }) => [kind, ...legs.map(({ from, to, section }) => [from, to, section])]),
+    members.map(({ kind, only, legs }) => [
+      kind,
+      only ?? '',
+      ...legs.map(({ from, to, section }) => [from, to, section]),
+    ]),
     hinges.map(({ point, member }) => [point, member ?? '']),
-    supports.map(({ point, restraints }) => [
+    supports.map(({ point, restraints, bears }) => [
       point,
+      bears === undefined ? '' : [bears.x, bears.y],
       restraints.map(({ freedom, stiffness }) => [freedom, String(stiffness)]),
     ]),
     cases.map(({ span }) => span?.of ?? ''),

@@ -164,7 +164,8 @@ function nameOf({ points }: Structure, point: number): string {
 
 function aboutMember(structure: Structure, member: Member, units: DisplayUnits): string {
   const sections = [...new Set(member.legs.map(({ section }) => structure.sections[section]?.description ?? ''))];
-  return [member.kind, ...sections.filter(words => words !== ''), length(member.length, units)].join(', ');
+  const only = member.only === undefined ? [] : [`${member.only} only`];
+  return [member.kind, ...sections.filter(words => words !== ''), length(member.length, units), ...only].join(', ');
 }
 
 function withheldRows({ withheld }: StructureResult): Row[] {

@@ -14,8 +14,9 @@ export function pointCard(result: StructureResult, index: number): Card | undefi
   const { structure, display } = result;
   const point = structure?.points[index];
   if (structure === undefined || point === undefined) return undefined;
-  const about = `point at ${length(point.x, display)}, ${length(point.y, display)}`;
   const support = structure.supports.findIndex(one => one.point === index);
+  const only = structure.supports[support]?.bears === undefined ? '' : ', bears only';
+  const about = `point at ${length(point.x, display)}, ${length(point.y, display)}${only}`;
   const rows = isSolved(result)
     ? [...movementRows(structure, index, result), ...(support >= 0 ? reactionRows(structure, support, result) : [])]
     : [];
