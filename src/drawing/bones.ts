@@ -1,11 +1,12 @@
 // The structure itself: members and bars, the broken line along each member's underside, first points, hinges and joints.
 import type { Structure } from '../model/structure.ts';
-import { moved, path, type Spot } from './geometry.ts';
+import { moved, path, px, type Spot } from './geometry.ts';
 import type { LineRole } from './ink.ts';
 import type { Sheet } from './sheet.ts';
 import { type DrawnLeg, drawnLeg, segmentOf, type View } from './view.ts';
 
 const HINGE = 3.4;
+const SEMI_RIGID = 3.8;
 const BAR_JOINT = 2.6;
 const FIRST_POINT = 2.6;
 /** The underside's broken line: so far off, and short of what stands at a member's first point. */
@@ -39,7 +40,7 @@ export function drawOutline(sheet: Sheet, structure: Structure, view: View, role
   sheet.line(role, d, 'back');
 }
 
-/** Hinges on members and the joints of bars. */
+/** Hinges and semi-rigid connections of members, and the joints of bars. */
 export function drawJoints(sheet: Sheet, structure: Structure, view: View): void {
   const joints = new Set<number>();
   for (const { kind, legs } of structure.members) {
@@ -49,6 +50,23 @@ export function drawJoints(sheet: Sheet, structure: Structure, view: View): void
   for (const { point, member } of structure.hinges) {
     sheet.ring(member === undefined ? view.point(point) : hingeSpot(structure, view, point, member), HINGE);
   }
+  for (const [index, { legs }] of structure.members.entries()) {
+    for (const leg of legs) {
+      if (leg.startAttachment?.turning !== undefined) drawConnection(sheet, drawnLeg(index, leg, view), 'start');
+      if (leg.endAttachment?.turning !== undefined) drawConnection(sheet, drawnLeg(index, leg, view), 'end');
+    }
+  }
+}
+
+/** A circle a little along the leg, filled on the side of the joint. */
+function drawConnection(sheet: Sheet, { from, to, along }: DrawnLeg, end: 'start' | 'end'): void {
+  const inwards = end === 'start' ? 1 : -1;
+  const at = moved(end === 'start' ? from : to, along, inwards * (SEMI_RIGID + 2.5));
+  sheet.ring(at, SEMI_RIGID);
+  const across = { x: -inwards * along.y, y: inwards * along.x };
+  const [first, last] = [moved(at, across, SEMI_RIGID), moved(at, across, -SEMI_RIGID)];
+  const radius = px(SEMI_RIGID);
+  sheet.fill('ink', `${path(first)}A${radius} ${radius} 0 0 1 ${px(last.x)} ${px(last.y)}Z`, 'dot');
 }
 
 /** A hinge of one member alone stands a little along it, unless the member runs through the point. */

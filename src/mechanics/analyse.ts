@@ -79,11 +79,18 @@ function unanalysed(structure: Structure, tooLarge?: Analysis['tooLarge']): Anal
   return tooLarge === undefined ? analysis : { ...analysis, tooLarge };
 }
 
-/** Unknown forces, three a leg of a member, one a leg of a bar and the reactions, less the equations of equilibrium. */
+/**
+ * Unknown forces, three a leg of a member less what is freed, one a leg of a bar, the moments of connections and the
+ * reactions, less the equations of equilibrium.
+ */
 function redundancyOf(system: System): number {
   const { legs, freedoms } = system;
   let forces = freedoms.reactions;
-  for (let e = 0; e < legs.count; e++) forces += legs.bending[e] === 0 ? 1 : 3;
+  for (let e = 0; e < legs.count; e++) {
+    forces += legs.bending[e] === 0 ? 1 : 3;
+    forces -= Math.sign(legs.freedAxial[e]!) + Math.sign(legs.freedShear[e]!);
+  }
+  for (const { kind } of freedoms.springs) if (kind === 'connection') forces++;
   return forces - freedoms.count;
 }
 

@@ -1,7 +1,8 @@
 // The response as fields along the members: exact polynomials on every segment, each integrated from the start of its leg.
 
 import type { FreeStrains } from './free-strains.ts';
-import { evaluate } from './polynomial.ts';
+import { FREED_END, type Legs } from './legs.ts';
+import { evaluate, sum } from './polynomial.ts';
 import { SEGMENT_NUMBERS } from './shares.ts';
 import type { FieldPiece, MemberField } from './solution.ts';
 import type { System } from './system.ts';
@@ -27,7 +28,10 @@ export function fieldsOf(
       const e = legs.first[m]! + k;
       const end = k + 1 < member.legs.length ? member.legs[k + 1]!.start : member.length;
       const leg = { index: k, start: member.legs[k]!.start, end };
-      addPieces(system, along, free, e, leg, startOf(system, along, movement, natural, e), pieces);
+      const firstPiece = pieces.length;
+      const state = startOf(system, along, movement, natural, e);
+      addPieces(system, along, free, e, leg, state, pieces);
+      closeLeg(system, movement, e, state, pieces, firstPiece);
     }
     return { pieces };
   });
@@ -68,6 +72,42 @@ function startOf(system: System, along: Along, movement: Float64Array, natural: 
   return { axialForce, shearForce, bendingMoment: 0 - startCouple, rotation, axialMovement, transverseMovement };
 }
 
+/**
+ * What a leg's pieces, integrated from the joint at its start, are off by across and along it where that start slides past
+ * the joint: the joint at the end says so.
+ */
+function closeLeg(
+  { legs, ends }: System,
+  movement: Float64Array,
+  e: number,
+  reached: State,
+  pieces: FieldPiece[],
+  firstPiece: number,
+): void {
+  if (isAttachedAtStart(legs, e)) return;
+  const slides = legs.freedAxial[e] === FREED_END.start;
+  const shifts = legs.freedShear[e] === FREED_END.start;
+  const { freedoms, shares } = ends;
+  const s = 8 * e + 4;
+  const x = movement[freedoms[6 * e + 3]!]!;
+  const y = movement[freedoms[6 * e + 4]!]!;
+  const along = slides ? shares[s]! * x + shares[s + 1]! * y - reached.axialMovement : 0;
+  const across = shifts ? shares[s + 2]! * x + shares[s + 3]! * y - reached.transverseMovement : 0;
+  for (let k = firstPiece; k < pieces.length; k++) {
+    const piece = pieces[k]!;
+    pieces[k] = {
+      ...piece,
+      axialMovement: sum(piece.axialMovement, [along]),
+      transverseMovement: sum(piece.transverseMovement, [across]),
+    };
+  }
+}
+
+/** Whether the start moves with its joint. */
+function isAttachedAtStart(legs: Legs, e: number): boolean {
+  return legs.freedAxial[e] !== FREED_END.start && legs.freedShear[e] !== FREED_END.start;
+}
+
 /** `leg`: its index in the member, and where along the member it lies. Takes the state from the start of the leg to its end. */
 function addPieces(
   system: System,
@@ -84,6 +124,7 @@ function addPieces(
   const stretch = 1 / legs.axial[e]!;
   const strain = free === undefined ? 0 : free.axial[e]!;
   const curvature = free === undefined || bending === 0 ? 0 : free.curvature[e]!;
+  const shearing = legs.shearing[e]!;
   const last = segments.first[e + 1]! - 1;
   for (let g = segments.first[e]!; g <= last; g++) {
     const from = segments.breaks[g + e]!;
@@ -99,7 +140,7 @@ function addPieces(
     const N = state.axialForce;
     const V = state.shearForce;
     const M = state.bendingMoment;
-    // dN/ds = −p, dV/ds = w, dM/ds = V; dθ/ds = M/EI + curvature, dv/ds = θ, du/ds = N/EA + strain.
+    // dN/ds = −p, dV/ds = w, dM/ds = V; dθ/ds = M/EI + curvature, dv/ds = θ − V/GAs, du/ds = N/EA + strain.
     const piece = {
       leg: leg.index,
       start: leg.start + from,
@@ -117,15 +158,15 @@ function addPieces(
       axialMovement: [state.axialMovement, N * stretch + strain, (0 - p0 / 2) * stretch, (0 - p1 / 6) * stretch],
       transverseMovement: [
         state.transverseMovement,
-        state.rotation,
-        (M * flexibility + curvature) / 2,
-        (V / 6) * flexibility,
+        state.rotation - V * shearing,
+        (M * flexibility + curvature) / 2 - (w0 / 2) * shearing,
+        (V / 6) * flexibility - (w1 / 6) * shearing,
         (w0 / 24) * flexibility,
         (w1 / 120) * flexibility,
       ],
     };
     pieces.push(piece);
-    if (g === last) break;
+    if (g === last && isAttachedAtStart(legs, e)) break;
     state.axialForce = evaluate(piece.axialForce, length);
     state.shearForce = evaluate(piece.shearForce, length);
     state.bendingMoment = evaluate(piece.bendingMoment, length);

@@ -135,7 +135,7 @@ function unitWeights(system: System): Weights {
     if (legs.bending[e] !== 0) own[e] = square;
   }
   freedoms.springs.forEach((spring, k) => {
-    axial[legs.count + k] = spring.freedoms.length === 1 ? square : 1;
+    axial[legs.count + k] = spring.kind === 'movement' ? 1 : square;
   });
   return { axial, own };
 }

@@ -2,7 +2,7 @@
 // leg.
 
 import type { Load, Structure } from '../model/structure.ts';
-import type { Legs } from './legs.ts';
+import { keepsLength, type Legs } from './legs.ts';
 
 /** By leg. */
 export interface FreeStrains {
@@ -27,15 +27,14 @@ export function freeStrains(structure: Structure, loads: readonly Load[], legs: 
   return strains;
 }
 
-/** By leg: 1 where it is axially stiff and some load would change its length. */
+/** By leg: 1 where it keeps its length and some load would change its length. */
 export function findLengthened(structure: Structure, legs: Legs): Uint8Array {
   const lengthened = new Uint8Array(legs.count);
   for (const load of structure.loads) {
     if (!isStraining(load)) continue;
     structure.members[load.member]!.legs.forEach((_, k) => {
       const e = legs.first[load.member]! + k;
-      const isStiff = legs.axial[e] === Number.POSITIVE_INFINITY;
-      if (isStiff && axialStrain(structure, load, k) !== 0) lengthened[e] = 1;
+      if (keepsLength(legs, e) && axialStrain(structure, load, k) !== 0) lengthened[e] = 1;
     });
   }
   return lengthened;

@@ -1,7 +1,7 @@
 // The freedoms of a structure: how each point can move, how its joint and its hinged member ends can turn, and which of
 // these the ground holds.
 
-import type { Structure } from '../model/structure.ts';
+import type { Leg, Structure } from '../model/structure.ts';
 import type { Legs } from './legs.ts';
 import type { PointSupport } from './supports.ts';
 
@@ -23,7 +23,7 @@ export interface Freedoms {
   readonly axisY: Float64Array;
   /** By point: the rotation of the joint, −1 where no member end, support or couple takes hold of it. */
   readonly joint: Int32Array;
-  /** By leg: the rotation of its ends, that of the joint or, at a hinge, one of its own; −1 for a bar. */
+  /** By leg: the rotation of its ends, that of the joint or, at a hinge or a connection, one of its own; −1 for a bar. */
   readonly startRotation: Int32Array;
   readonly endRotation: Int32Array;
   /** By freedom: 1 where the ground holds it. */
@@ -35,10 +35,14 @@ export interface Freedoms {
   readonly size: number;
 }
 
-/** A spring to the ground: its shortening is the sum of coefficient × freedom, less what the ground moves. */
+/**
+ * A spring to the ground, or a connection between a joint and the end of a leg: its shortening is the sum of
+ * coefficient × freedom, less what the ground moves.
+ */
 export interface Spring {
+  readonly kind: 'movement' | 'rotation' | 'connection';
   readonly point: number;
-  /** Two movements, or one rotation. */
+  /** Two movements; one rotation; of a connection, the rotations of the joint and of the leg's end. */
   readonly freedoms: readonly number[];
   readonly coefficients: readonly number[];
   /** N/m or N m/rad. */
@@ -57,8 +61,13 @@ export function numberFreedoms(
   const { present, turned } = findUsers(structure, legs, supports);
   const hinged = findHinges(structure, legs);
 
-  // Count, then number: a hinged end takes a rotation of its own, any other takes part in that of the joint.
+  // Count, then number: a hinged or connected end takes a rotation of its own, any other takes part in that of the joint,
+  // which a connection needs as well.
   const ownRotations = new Int32Array(points);
+  for (let e = 0; e < legs.count; e++) {
+    if (legs.startTurning[e] !== Number.POSITIVE_INFINITY) hinged.start[e] = turned[legs.from[e]!] = 1;
+    if (legs.endTurning[e] !== Number.POSITIVE_INFINITY) hinged.end[e] = turned[legs.to[e]!] = 1;
+  }
   for (let e = 0; e < legs.count; e++) {
     if (legs.bending[e] === 0) continue;
     const from = legs.from[e]!;
@@ -108,12 +117,13 @@ export function numberFreedoms(
     reactions += support.resisted.rank + (support.rotationResisted ? 1 : 0);
     for (const { freedom, stiffness } of support.springs) {
       if (freedom.kind === 'rotation') {
-        springs.push({ point: p, freedoms: [joint[p]!], coefficients: [1], stiffness, x: 0, y: 0 });
+        springs.push({ kind: 'rotation', point: p, freedoms: [joint[p]!], coefficients: [1], stiffness, x: 0, y: 0 });
         continue;
       }
       const along = freedom.x * axisX[p]! + freedom.y * axisY[p]!;
       const across = freedom.y * axisX[p]! - freedom.x * axisY[p]!;
       springs.push({
+        kind: 'movement',
         point: p,
         freedoms: [x, x + 1],
         coefficients: [along, across],
@@ -123,15 +133,29 @@ export function numberFreedoms(
       });
     }
   }
+  for (let e = 0; e < legs.count; e++) {
+    addConnection(springs, legs.from[e]!, joint[legs.from[e]!]!, startRotation[e]!, legs.startTurning[e]!);
+    addConnection(springs, legs.to[e]!, joint[legs.to[e]!]!, endRotation[e]!, legs.endTurning[e]!);
+  }
   const size = sizeOf(structure, present);
   return { count, first, point, axisX, axisY, joint, startRotation, endRotation, held, springs, reactions, size };
+}
+
+function addConnection(springs: Spring[], point: number, joint: number, end: number, stiffness: number): void {
+  if (stiffness === Number.POSITIVE_INFINITY) return;
+  springs.push({ kind: 'connection', point, freedoms: [joint, end], coefficients: [-1, 1], stiffness, x: 0, y: 0 });
 }
 
 /** Most freedoms that `numberFreedoms` can come to, without an array; at least as many as it will. */
 export function boundFreedoms(structure: Structure): number {
   let count = 3 * structure.points.length;
-  if (structure.hinges.length > 0) for (const member of structure.members) count += 2 * member.legs.length;
+  const turns = structure.hinges.length > 0 || structure.members.some(({ legs }) => legs.some(isConnected));
+  if (turns) for (const member of structure.members) count += 2 * member.legs.length;
   return count;
+}
+
+function isConnected({ startAttachment, endAttachment }: Leg): boolean {
+  return startAttachment?.turning !== undefined || endAttachment?.turning !== undefined;
 }
 
 /** Which points move, and at which a joint is turned by a support or a couple even if no member end is fixed to it. */

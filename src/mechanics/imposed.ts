@@ -76,8 +76,8 @@ function moveGround(
     movement[first + 1]! += amount * (freedom.y * x - freedom.x * y);
   }
   freedoms.springs.forEach((spring, k) => {
-    if (spring.point !== point) return;
+    if (spring.point !== point || spring.kind === 'connection') return;
     if (freedom.kind === 'movement') springs[k]! += amount * (spring.x * freedom.x + spring.y * freedom.y);
-    else if (spring.x === 0 && spring.y === 0) springs[k]! += amount;
+    else if (spring.kind === 'rotation') springs[k]! += amount;
   });
 }

@@ -1,6 +1,6 @@
 // The legs of all members in flat arrays: the pieces that stiffness, loads and fields are worked out for.
 
-import type { Structure } from '../model/structure.ts';
+import type { FreedForce, Leg, Structure } from '../model/structure.ts';
 
 /** By leg, in the order of the members and along each. */
 export interface Legs {
@@ -20,6 +20,22 @@ export interface Legs {
   readonly bending: Float64Array;
   /** EA, N; Infinity where axially stiff. */
   readonly axial: Float64Array;
+  /** 1/GAs, 1/N; 0 where shear deformation is not counted. */
+  readonly shearing: Float64Array;
+  /** What passes at neither or one of the ends: see `FREED_END`; 0 where every force passes at both. */
+  readonly freedAxial: Uint8Array;
+  readonly freedShear: Uint8Array;
+  /** Stiffness of the connections at both ends, N m/rad; Infinity where rigid or hinged. */
+  readonly startTurning: Float64Array;
+  readonly endTurning: Float64Array;
+}
+
+/** The end at which a force of a leg is freed; never at both, as nothing would hold the leg. */
+export const FREED_END = { none: 0, start: 1, end: 2 } as const;
+
+/** Whether the leg keeps its length against what its ends do: axially stiff, and attached along it at both. */
+export function keepsLength(legs: Legs, e: number): boolean {
+  return legs.axial[e] === Number.POSITIVE_INFINITY && legs.freedAxial[e] === FREED_END.none;
 }
 
 export function flattenLegs(structure: Structure): Legs {
@@ -38,6 +54,11 @@ export function flattenLegs(structure: Structure): Legs {
     sine: new Float64Array(count),
     bending: new Float64Array(count),
     axial: new Float64Array(count),
+    shearing: new Float64Array(count),
+    freedAxial: new Uint8Array(count),
+    freedShear: new Uint8Array(count),
+    startTurning: new Float64Array(count).fill(Number.POSITIVE_INFINITY),
+    endTurning: new Float64Array(count).fill(Number.POSITIVE_INFINITY),
   };
   for (let m = 0, e = 0; m < members.length; m++) {
     const { kind, name, legs: chain } = members[m]!;
@@ -57,8 +78,20 @@ export function flattenLegs(structure: Structure): Legs {
       legs.sine[e] = leg.sine;
       legs.bending[e] = bending;
       legs.axial[e] = section.axialStiffness ?? Number.POSITIVE_INFINITY;
+      if (kind === 'member') {
+        if (section.shearStiffness !== undefined) legs.shearing[e] = 1 / section.shearStiffness;
+        legs.freedAxial[e] = freedEnd(leg, 'axial');
+        legs.freedShear[e] = freedEnd(leg, 'shear');
+        legs.startTurning[e] = leg.startAttachment?.turning ?? Number.POSITIVE_INFINITY;
+        legs.endTurning[e] = leg.endAttachment?.turning ?? Number.POSITIVE_INFINITY;
+      }
       e++;
     }
   }
   return legs;
+}
+
+function freedEnd({ startAttachment, endAttachment }: Leg, force: FreedForce): number {
+  if (startAttachment?.freed.includes(force)) return FREED_END.start;
+  return endAttachment?.freed.includes(force) ? FREED_END.end : FREED_END.none;
 }

@@ -2,7 +2,7 @@
 // one movement follow from others, exactly.
 
 import type { Freedoms } from './freedoms.ts';
-import type { Legs } from './legs.ts';
+import { keepsLength, type Legs } from './legs.ts';
 
 /**
  * freedom f = Σ value × unknown + what is imposed gives it. A free freedom is an unknown itself, a held one has no terms,
@@ -134,7 +134,7 @@ function tieStiffLegs(legs: Legs, freedoms: Freedoms, moved: Uint8Array) {
   const mentions = new Map<number, number[]>();
   let total = 0;
   for (let e = 0; e < legs.count; e++) {
-    if (legs.axial[e] !== Number.POSITIVE_INFINITY) continue;
+    if (!keepsLength(legs, e)) continue;
     const { row, largest } = lengthening(e, legs, freedoms, moved, dependents);
     let pivot = -1;
     let greatest = 0;

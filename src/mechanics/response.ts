@@ -3,6 +3,7 @@
 
 import { subtractFreeStrains } from './free-strains.ts';
 import type { Imposed } from './imposed.ts';
+import { axialStiffness, turningStiffness } from './leg-stiffness.ts';
 import { expand, gather } from './reduction.ts';
 import type { Loading } from './shares.ts';
 import { addStrains, subtractForces } from './strains.ts';
@@ -68,7 +69,7 @@ export function respond(system: System, loading: Loading | undefined, imposed: I
   const free = largestForces(system, state.unbalanced, true);
   const residual = Math.max(free.force, free.moment / freedoms.size) / largest;
   const ground = state.unbalanced;
-  addSpringForces(system, state.shortenings, ground, 1);
+  addSpringForces(system, state.shortenings, ground, 1, 'ground');
   for (let f = 0; f < ground.length; f++) ground[f] = 0 - ground[f]!;
   return { movement: state.movement, natural: state.natural, ground, residual, largest: loads };
 }
@@ -94,13 +95,18 @@ function balance(system: System, loading: Loading | undefined, state: State): vo
   const { legs, ends, freedoms } = system;
   const { strains, natural, unbalanced } = state;
   for (let e = 0; e < legs.count; e++) {
-    const axial = legs.axial[e]!;
-    const bending = (2 * legs.bending[e]!) / legs.length[e]!;
     const start = strains[3 * e + 1]!;
     const end = strains[3 * e + 2]!;
-    natural[3 * e] = axial === Number.POSITIVE_INFINITY ? 0 : (axial / legs.length[e]!) * strains[3 * e]!;
-    natural[3 * e + 1] = bending * (2 * start + end);
-    natural[3 * e + 2] = bending * (start + 2 * end);
+    natural[3 * e] = axialStiffness(legs, e) * strains[3 * e]!;
+    if (legs.shearing[e] === 0 && legs.freedShear[e] === 0) {
+      const bending = (2 * legs.bending[e]!) / legs.length[e]!;
+      natural[3 * e + 1] = bending * (2 * start + end);
+      natural[3 * e + 2] = bending * (start + 2 * end);
+    } else {
+      const { own, other } = turningStiffness(legs, e);
+      natural[3 * e + 1] = own * start + other * end;
+      natural[3 * e + 2] = other * start + own * end;
+    }
   }
   if (loading === undefined) unbalanced.fill(0);
   else {
@@ -108,7 +114,7 @@ function balance(system: System, loading: Loading | undefined, state: State): vo
     unbalanced.set(loading.nodal);
   }
   subtractForces(legs, ends, natural, unbalanced);
-  if (freedoms.springs.length > 0) addSpringForces(system, state.shortenings, unbalanced, -1);
+  if (freedoms.springs.length > 0) addSpringForces(system, state.shortenings, unbalanced, -1, 'all');
 }
 
 function addShortenings(system: System, movement: Float64Array, shortenings: Float64Array): void {
@@ -119,8 +125,16 @@ function addShortenings(system: System, movement: Float64Array, shortenings: Flo
   });
 }
 
-function addSpringForces(system: System, shortenings: Float64Array, force: Float64Array, sign: 1 | -1): void {
+/** `which`: a connection has no part in what the ground does. */
+function addSpringForces(
+  system: System,
+  shortenings: Float64Array,
+  force: Float64Array,
+  sign: 1 | -1,
+  which: 'all' | 'ground',
+): void {
   system.freedoms.springs.forEach((spring, k) => {
+    if (which === 'ground' && spring.kind === 'connection') return;
     const size = sign * spring.stiffness * shortenings[k]!;
     spring.freedoms.forEach((freedom, i) => {
       force[freedom]! += size * spring.coefficients[i]!;

@@ -90,7 +90,7 @@ export function rigidMovements(system: System, part: Part, turning: Uint8Array):
   return found;
 }
 
-/** By point: 1 where some member end is rigidly fixed to the joint, so that holding the joint holds the member. */
+/** By point: 1 where some member end is fixed to the joint or connected to it, so that holding the joint holds the member. */
 export function jointsThatTurn(system: System): Uint8Array {
   const { legs, freedoms } = system;
   const turning = new Uint8Array(system.structure.points.length);
@@ -101,6 +101,7 @@ export function jointsThatTurn(system: System): Uint8Array {
     if (freedoms.startRotation[e] === freedoms.joint[from]) turning[from] = 1;
     if (freedoms.endRotation[e] === freedoms.joint[to]) turning[to] = 1;
   }
+  for (const { kind, point } of freedoms.springs) if (kind === 'connection') turning[point] = 1;
   return turning;
 }
 
@@ -154,6 +155,9 @@ function rigidMovement(system: System, part: Part, row: Row, x: number, y: numbe
     if (legs.bending[e] === 0 || !inPart.has(legs.from[e]!)) continue;
     movement[startRotation[e]!] = turning;
     movement[endRotation[e]!] = turning;
+  }
+  for (const spring of freedoms.springs) {
+    if (spring.kind === 'connection' && inPart.has(spring.point)) movement[spring.freedoms[0]!] = turning;
   }
   return movement;
 }

@@ -1,6 +1,7 @@
 // What the loads along a leg come to at its ends: its shares of them as a simple span, and what turns ends that are clamped.
 
-import type { Legs } from './legs.ts';
+import { shearRatio } from './leg-stiffness.ts';
+import { FREED_END, type Legs } from './legs.ts';
 import type { Segments } from './segments.ts';
 import type { Reaction } from './solution.ts';
 import type { Ends } from './strains.ts';
@@ -16,7 +17,10 @@ export interface Loading {
   readonly segments: Float64Array;
   /** Two a leg: what of the loads on it its start takes, along and across, N. */
   readonly shares: Float64Array;
-  /** Three a leg, as natural forces: 0, and the work of the loads on a unit turning of each end against the chord, N m. */
+  /**
+   * Three a leg, as natural forces, what ends that are held still answer the loads with, reversed: along it (0 unless the
+   * axial force is freed at an end), and the work of the loads on a unit turning of each end against the chord, N m.
+   */
   readonly clamped: Float64Array;
   readonly applied: Reaction;
 }
@@ -31,7 +35,15 @@ export const SEGMENT_NUMBERS = 7;
 export function shareOut(e: number, legs: Legs, ends: Ends, places: Segments, loading: Loading): void {
   const { nodal, segments, shares, clamped } = loading;
   const length = legs.length[e]!;
-  const sums: Shares = { startAlong: 0, endAlong: 0, startAcross: 0, endAcross: 0, startTurning: 0, endTurning: 0 };
+  const sums: Shares = {
+    couples: 0,
+    startAlong: 0,
+    endAlong: 0,
+    startAcross: 0,
+    endAcross: 0,
+    startTurning: 0,
+    endTurning: 0,
+  };
   for (let g = places.first[e]!; g < places.first[e + 1]!; g++) {
     const at = SEGMENT_NUMBERS * g;
     const from = places.breaks[g + e]!;
@@ -53,10 +65,15 @@ export function shareOut(e: number, legs: Legs, ends: Ends, places: Segments, lo
     }
   } else {
     shares[2 * e + 1] = sums.startAcross;
-    clamped[3 * e + 1] = sums.startTurning;
-    clamped[3 * e + 2] = sums.endTurning;
+    // What shear adds to both couples alike.
+    const more = 0.5 * (clampedSum(e, legs, sums) - (sums.startTurning + sums.endTurning));
+    clamped[3 * e + 1] = sums.startTurning + more;
+    clamped[3 * e + 2] = sums.endTurning + more;
   }
   shares[2 * e] = sums.startAlong;
+  // Freed at an end, the axial force is nil there and the other end takes all that lies along the leg.
+  if (legs.freedAxial[e] === FREED_END.start) clamped[3 * e] = sums.startAlong;
+  if (legs.freedAxial[e] === FREED_END.end) clamped[3 * e] = -sums.endAlong;
 
   for (let end = 0; end < 2; end++) {
     const along = end === 0 ? sums.startAlong : sums.endAlong;
@@ -68,7 +85,21 @@ export function shareOut(e: number, legs: Legs, ends: Ends, places: Segments, lo
   }
 }
 
+/**
+ * The sum of both couples of a clamped leg, which is what its shear differs by from that of a simple span; their difference
+ * is the same with shear deformation and without. As forces along a simple span leave no mean shear but couples do, the
+ * sum is (that of bending alone + φ Σ couples) / (1 + φ). With the shear freed at an end, it is what makes it nil there.
+ */
+function clampedSum(e: number, legs: Legs, sums: Shares): number {
+  if (legs.freedShear[e] === FREED_END.start) return -legs.length[e]! * sums.startAcross;
+  if (legs.freedShear[e] === FREED_END.end) return legs.length[e]! * sums.endAcross;
+  const phi = shearRatio(legs, e);
+  return (sums.startTurning + sums.endTurning + phi * sums.couples) / (1 + phi);
+}
+
 interface Shares {
+  /** Of all couples within, N m. */
+  couples: number;
   startAlong: number;
   endAlong: number;
   startAcross: number;
@@ -93,6 +124,7 @@ function addForce(sums: Shares, t: number, length: number, across: number, along
 
 /** A couple does work on the slopes of the same movements. */
 function addCouple(sums: Shares, t: number, length: number, moment: number): void {
+  sums.couples += moment;
   sums.startAcross -= moment / length;
   sums.endAcross += moment / length;
   sums.startTurning += moment * (1 - t) * (1 - 3 * t);

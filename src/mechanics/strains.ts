@@ -2,7 +2,7 @@
 // end against the chord), by leg from the freedoms, and as rows in the unknowns of a solve.
 
 import type { Freedoms } from './freedoms.ts';
-import type { Legs } from './legs.ts';
+import { FREED_END, type Legs } from './legs.ts';
 import type { Reduction } from './reduction.ts';
 
 /** What relates a leg to the freedoms of its ends. */
@@ -157,16 +157,21 @@ export function strainRows(legs: Legs, ends: Ends, freedoms: Freedoms, reduction
   for (let e = 0; e < legs.count; e++) {
     rowStart = filled;
     const bends = legs.bending[e] !== 0;
-    const turning = bends ? 1 / legs.length[e]! : 0;
+    const stretches = legs.freedAxial[e] === FREED_END.none ? 1 : 0;
+    // Where the shear is freed the chord has no part, and the one strain is the start turned against the end.
+    const shears = legs.freedShear[e] === FREED_END.none;
+    const turning = bends && shears ? 1 / legs.length[e]! : 0;
     for (let end = 0; end < 2; end++) {
       const sign = end === 0 ? -1 : 1;
       const f = 6 * e + 3 * end;
       const s = 8 * e + 4 * end;
       for (let k = 0; k < 2; k++) {
         const chord = -sign * ends.shares[s + 2 + k]! * turning;
-        add(ends.freedoms[f + k]!, sign * ends.shares[s + k]!, chord, chord);
+        add(ends.freedoms[f + k]!, stretches * sign * ends.shares[s + k]!, chord, chord);
       }
-      if (bends) add(ends.freedoms[f + 2]!, 0, end === 0 ? 1 : 0, end === 0 ? 0 : 1);
+      if (!bends) continue;
+      if (shears) add(ends.freedoms[f + 2]!, 0, end === 0 ? 1 : 0, end === 0 ? 0 : 1);
+      else add(ends.freedoms[f + 2]!, 0, -sign, 0);
     }
     finish(e);
   }

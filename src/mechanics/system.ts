@@ -5,7 +5,8 @@ import { type Factorisation, factorise } from './factorisation.ts';
 import { findLengthened } from './free-strains.ts';
 import { type Freedoms, numberFreedoms } from './freedoms.ts';
 import { findMoved } from './imposed.ts';
-import { flattenLegs, type Legs } from './legs.ts';
+import { axialStiffness, turningStiffness } from './leg-stiffness.ts';
+import { FREED_END, flattenLegs, type Legs } from './legs.ts';
 import { type Reduction, reduce } from './reduction.ts';
 import { findSegments, type Segments } from './segments.ts';
 import { assemble, type Stiffnesses } from './stiffness.ts';
@@ -59,17 +60,20 @@ export function pointsOf(reduction: Reduction, freedoms: Freedoms): Int32Array {
   return reduction.freedoms.map(freedom => freedoms.point[freedom]!);
 }
 
-/** EA/L for a lengthening, 4 EI/L and 2 EI/L for the turning of the ends; an axially stiff leg has no lengthening left. */
+/**
+ * See leg-stiffness.ts; an axially stiff leg has no lengthening left. A leg whose shear is freed has one strain of bending
+ * in its row, that of its ends against each other.
+ */
 function stiffnessesOf(legs: Legs, freedoms: Freedoms): Stiffnesses {
   const count = legs.count + freedoms.springs.length;
   const axial = new Float64Array(count);
   const own = new Float64Array(count);
   const other = new Float64Array(count);
   for (let e = 0; e < legs.count; e++) {
-    const ea = legs.axial[e]!;
-    if (ea !== Number.POSITIVE_INFINITY) axial[e] = ea / legs.length[e]!;
-    own[e] = (4 * legs.bending[e]!) / legs.length[e]!;
-    other[e] = 0.5 * own[e]!;
+    axial[e] = axialStiffness(legs, e);
+    const turning = turningStiffness(legs, e);
+    own[e] = turning.own;
+    if (legs.freedShear[e] === FREED_END.none) other[e] = turning.other;
   }
   freedoms.springs.forEach((spring, k) => {
     axial[legs.count + k] = spring.stiffness;

@@ -3,7 +3,7 @@
 
 import { type Factorisation, factorise } from './factorisation.ts';
 import type { Freedoms } from './freedoms.ts';
-import type { Legs } from './legs.ts';
+import { keepsLength, type Legs } from './legs.ts';
 import { expand, gather, type Reduction } from './reduction.ts';
 import { assemble } from './stiffness.ts';
 import { addStrains, type Ends, strainRows, subtractForces } from './strains.ts';
@@ -26,7 +26,7 @@ export function prepareThrusts(legs: Legs, ends: Ends, freedoms: Freedoms): Thru
   const count = legs.count + freedoms.springs.length;
   const weights = new Float64Array(count);
   for (let e = 0; e < legs.count; e++) {
-    if (legs.axial[e] === Number.POSITIVE_INFINITY) weights[e] = 1 / legs.length[e]!;
+    if (keepsLength(legs, e)) weights[e] = 1 / legs.length[e]!;
   }
   const reduction = movementsOfStiffLegs(legs, freedoms, weights);
   const none = new Float64Array(count);

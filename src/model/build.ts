@@ -2,15 +2,15 @@
 import type { Name } from '../language/syntax.ts';
 import type { Figures } from './figures.ts';
 import type { Geometry, LaidLeg, LaidMember } from './geometry.ts';
-import { distanceOf } from './geometry.ts';
+import { attachMembers, readHinges } from './joints.ts';
 import type { Library, SectionFigures } from './library.ts';
 import { readLoads } from './loads.ts';
 import type { Definition, Names } from './names.ts';
 import { dividePatterns } from './patterns.ts';
 import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
-import type { Hinge, Member, Section, Structure } from './structure.ts';
-import { readSupports, reportUnevaluatedJoints } from './supports.ts';
+import type { Member, Section, Structure } from './structure.ts';
+import { readSupports } from './supports.ts';
 
 export interface Building {
   readonly scope: Scope;
@@ -24,16 +24,18 @@ export interface Building {
   readonly titles: ReadonlyMap<string, string>;
   /** `assume: axially stiff`: members, not bars, keep their length whatever their section. */
   readonly axiallyStiff: boolean;
+  /** `assume: shear deformation`: counted in members, with the shear stiffness of their sections. */
+  readonly shearDeformation: boolean;
 }
 
 /** What could be built. `report.flawed` says whether anything is missing from it, `report.flawedCases` of which cases. */
 export function buildStructure(building: Building): Structure {
   const { scope, geometry, figures, report } = building;
   const sections = new Sections(building);
-  const members = geometry.members.map(member => sections.give(member));
-  const hinges = readHinges(building);
+  const bare = geometry.members.map(member => sections.give(member));
+  const hinges = readHinges(scope, geometry, report);
   const supports = readSupports(scope, geometry, figures, report);
-  for (const statement of scope.statements) reportUnevaluatedJoints(statement, report);
+  const members = attachMembers(scope, figures, { geometry, members: bare }, { hinges, supports }, report);
   const sectionOf = (member: number, leg: number): Section | undefined =>
     sections.list[members[member]!.legs[leg]!.section];
   const { cases, loads } = readLoads(
@@ -92,10 +94,16 @@ class Sections {
     }
     const key = `${definition.structure ?? ''} ${definition.name}`;
     const stiff = this.#building.axiallyStiff && member.kind === 'member';
+    const shears = this.#building.shearDeformation && member.kind === 'member';
     if (member.kind === 'member') this.#needBending(definition, found, member);
-    return this.#index(stiff ? `${key} stiff` : key, () => {
+    if (shears) this.#needShear(definition, found, member);
+    return this.#index(`${key}${stiff ? ' stiff' : ''}${shears ? ' shears' : ''}`, () => {
       const section = toSection(definition, found);
-      return stiff ? { ...section, axialStiffness: undefined } : section;
+      return {
+        ...section,
+        ...(stiff && { axialStiffness: undefined }),
+        ...(shears && figuresInShear(found)),
+      };
     });
   }
 
@@ -138,6 +146,25 @@ class Sections {
     return undefined;
   }
 
+  #needShear(definition: Definition, { properties }: SectionFigures, member: LaidMember): void {
+    const key = `${definition.name} in shear`;
+    if (properties.has('GAs') || this.#told.has(key)) return;
+    this.#told.add(key);
+    this.#building.report.flawed = true;
+    const area = properties.has('shear-area') ? [] : ['shear-area'];
+    const modulus = properties.has('G') ? [] : [properties.has('E') ? 'G or nu' : 'G'];
+    const missing = [...modulus, ...area];
+    this.#building.report.error(
+      'missing-property',
+      definition.definition,
+      `${definition.name} has no shear stiffness, and shear deformation is to be counted: ${missing.join(' and ')} ${missing.length > 1 ? 'are' : 'is'} missing.`,
+      {
+        hint: `${modulus.length > 0 ? 'give its material a G or a nu' : 'give its shear-area'}, or give GAs`,
+        related: [{ range: member.range, message: `${member.name} has this section.` }],
+      },
+    );
+  }
+
   #needBending(definition: Definition, { properties }: SectionFigures, member: LaidMember): void {
     if (properties.has('EI') || this.#told.has(definition.name)) return;
     this.#told.add(definition.name);
@@ -153,6 +180,16 @@ class Sections {
       },
     );
   }
+}
+
+/** What shear deformation is counted with. */
+function figuresInShear({ properties }: SectionFigures): Partial<Section> {
+  const [stiffness, area, modulus] = ['GAs', 'shear-area', 'G'].map(key => properties.get(key)?.value);
+  return {
+    ...(stiffness !== undefined && { shearStiffness: stiffness }),
+    ...(area !== undefined && { shearArea: area }),
+    ...(modulus !== undefined && { shearModulus: modulus }),
+  };
 }
 
 /** Stands for a section that could not be read, so that a drawing can still be made. */
@@ -191,28 +228,4 @@ function toSection(
     thermalExpansion: value('alpha'),
     range: definition.definition,
   };
-}
-
-function readHinges({ scope, geometry, report }: Building): Hinge[] {
-  const hinges: Hinge[] = [];
-  for (const statement of scope.statements) {
-    if (statement.kind !== 'hinge') continue;
-    const point = geometry.pointNamed.get(statement.point.text);
-    const member = statement.member === undefined ? undefined : geometry.memberNamed.get(statement.member.text);
-    if (point === undefined || (statement.member !== undefined && member === undefined)) {
-      report.flawed = true;
-      continue;
-    }
-    if (member !== undefined && distanceOf(geometry.members[member]!, point) === undefined) {
-      report.flawed = true;
-      report.error(
-        'bad-geometry',
-        statement.member!.range,
-        `${statement.member!.text} does not run through ${statement.point.text}.`,
-      );
-      continue;
-    }
-    hinges.push({ point, range: statement.point.range, ...(member === undefined ? {} : { member }) });
-  }
-  return hinges;
 }

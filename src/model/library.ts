@@ -319,6 +319,7 @@ class SectionReading {
     into.set('A', { value: found.area, dimension: AREA });
     into.set('I', { value: found.secondMomentOfArea, dimension: SECOND_MOMENT_OF_AREA });
     into.set('modulus', { value: found.sectionModulus, dimension: SECTION_MODULUS });
+    into.set('shear-area', { value: found.shearArea, dimension: AREA });
     into.set('depth', { value: found.depth, dimension: LENGTH });
     into.set('width', { value: found.width, dimension: LENGTH });
   }

@@ -80,8 +80,8 @@ export interface UnitAction {
   /** Anticlockwise. */
   readonly moment: number;
   /**
-   * Where the member is hinged at the place and runs on: which of its two ends the couple turns, in the direction of
-   * travel; `before` if not said.
+   * Where a member runs through the place and its ends there are hinged, connected or freed: which of the two the action is
+   * on, in the direction of travel. If not said, a force is on the joint and a couple on the end before.
    */
   readonly side?: 'before' | 'after';
 }

@@ -12,7 +12,17 @@ export interface ShapeProperties {
   readonly depth: number;
   /** Across the plane of bending. */
   readonly width: number;
+  /** What stands for the area in shear flexibility, γ = V/G shearArea. */
+  readonly shearArea: number;
 }
+
+/**
+ * Shares of an area that count in shear: of a rectangle, a circle and a thin tube by the energy of the stresses (Young,
+ * Budynas, Sadegh, Roark's Formulas for Stress and Strain, 8th ed., section 8.10, from memory: F = 6/5, 10/9 and 2). Of
+ * walls joined into a box, an I, a channel or a tee, what stands along the shear is taken: webs over the full depth, or
+ * 5/6 of the flanges when turned (common practice).
+ */
+const IN_SHEAR = { rectangle: 5 / 6, circle: 9 / 10, tube: 1 / 2 } as const;
 
 /** The dimensions of each shape in the order in which they are written. */
 export const SHAPE_DIMENSIONS = {
@@ -54,11 +64,13 @@ export function shapeProperties(shape: ShapeKind, dimensions: readonly number[],
     case 'solid':
       return turned ? rectangle(second, first) : rectangle(first, second);
     case 'round':
-      return ring(first, 0);
+      return ring(first, 0, IN_SHEAR.circle);
     case 'tube':
-      return ring(first, first - 2 * second);
+      return ring(first, first - 2 * second, IN_SHEAR.tube);
     case 'box':
-      return turned ? hollow(second, first, third) : hollow(first, second, third);
+      return turned
+        ? hollow(second, first, third, IN_SHEAR.rectangle * 2 * third * first)
+        : hollow(first, second, third, 2 * third * second);
     case 'i-shape':
       return turned ? turnedI(first, second, third, fourth) : flanged(first, second, third, fourth);
     case 'channel':
@@ -69,29 +81,42 @@ export function shapeProperties(shape: ShapeKind, dimensions: readonly number[],
 }
 
 function rectangle(b: number, d: number): ShapeProperties {
-  return { area: b * d, secondMomentOfArea: (b * d ** 3) / 12, sectionModulus: (b * d * d) / 6, depth: d, width: b };
+  return {
+    area: b * d,
+    secondMomentOfArea: (b * d ** 3) / 12,
+    sectionModulus: (b * d * d) / 6,
+    depth: d,
+    width: b,
+    shearArea: IN_SHEAR.rectangle * b * d,
+  };
 }
 
-function ring(outside: number, inside: number): ShapeProperties {
+function ring(outside: number, inside: number, inShear: number): ShapeProperties {
   const area = (Math.PI / 4) * (outside ** 2 - inside ** 2);
   const secondMomentOfArea = (Math.PI / 64) * (outside ** 4 - inside ** 4);
-  return symmetric(area, secondMomentOfArea, outside, outside);
+  return symmetric(area, secondMomentOfArea, outside, outside, inShear * area);
 }
 
-function hollow(b: number, d: number, wall: number): ShapeProperties {
+function hollow(b: number, d: number, wall: number, shearArea: number): ShapeProperties {
   const [bi, di] = [b - 2 * wall, d - 2 * wall];
-  return symmetric(b * d - bi * di, (b * d ** 3 - bi * di ** 3) / 12, d, b);
+  return symmetric(b * d - bi * di, (b * d ** 3 - bi * di ** 3) / 12, d, b, shearArea);
 }
 
 /** I-shape or channel about its strong axis: the outer rectangle less the space beside the web. */
 function flanged(d: number, b: number, flange: number, web: number): ShapeProperties {
   const clear = d - 2 * flange;
-  return symmetric(2 * b * flange + clear * web, (b * d ** 3 - (b - web) * clear ** 3) / 12, d, b);
+  return symmetric(2 * b * flange + clear * web, (b * d ** 3 - (b - web) * clear ** 3) / 12, d, b, web * d);
 }
 
 function turnedI(d: number, b: number, flange: number, web: number): ShapeProperties {
   const clear = d - 2 * flange;
-  return symmetric(2 * b * flange + clear * web, (2 * flange * b ** 3 + clear * web ** 3) / 12, b, d);
+  return symmetric(
+    2 * b * flange + clear * web,
+    (2 * flange * b ** 3 + clear * web ** 3) / 12,
+    b,
+    d,
+    IN_SHEAR.rectangle * 2 * flange * b,
+  );
 }
 
 /** Two flanges stand on the web: levels are measured from the back of the web. */
@@ -104,6 +129,7 @@ function turnedChannel(d: number, b: number, flange: number, web: number): Shape
     ],
     b,
     d,
+    IN_SHEAR.rectangle * 2 * flange * b,
   );
 }
 
@@ -116,16 +142,29 @@ function tee(d: number, b: number, flange: number, web: number): ShapeProperties
     ],
     d,
     b,
+    web * d,
   );
 }
 
 function turnedTee(d: number, b: number, flange: number, web: number): ShapeProperties {
   const stem = d - flange;
-  return symmetric(b * flange + stem * web, (flange * b ** 3 + stem * web ** 3) / 12, b, d);
+  return symmetric(
+    b * flange + stem * web,
+    (flange * b ** 3 + stem * web ** 3) / 12,
+    b,
+    d,
+    IN_SHEAR.rectangle * flange * b,
+  );
 }
 
-function symmetric(area: number, secondMomentOfArea: number, depth: number, width: number): ShapeProperties {
-  return { area, secondMomentOfArea, sectionModulus: (2 * secondMomentOfArea) / depth, depth, width };
+function symmetric(
+  area: number,
+  secondMomentOfArea: number,
+  depth: number,
+  width: number,
+  shearArea: number,
+): ShapeProperties {
+  return { area, secondMomentOfArea, sectionModulus: (2 * secondMomentOfArea) / depth, depth, width, shearArea };
 }
 
 interface Strip {
@@ -135,7 +174,7 @@ interface Strip {
 }
 
 /** Rectangles between two levels each, about their common centroid (parallel-axis theorem). */
-function stacked(strips: readonly Strip[], depth: number, width: number): ShapeProperties {
+function stacked(strips: readonly Strip[], depth: number, width: number, shearArea: number): ShapeProperties {
   let area = 0;
   let firstMoment = 0;
   for (const { width: b, from, to } of strips) {
@@ -148,5 +187,5 @@ function stacked(strips: readonly Strip[], depth: number, width: number): ShapeP
     secondMomentOfArea += (b * ((to - centroid) ** 3 - (from - centroid) ** 3)) / 3;
   }
   const sectionModulus = secondMomentOfArea / Math.max(centroid, depth - centroid);
-  return { area, secondMomentOfArea, sectionModulus, depth, width };
+  return { area, secondMomentOfArea, sectionModulus, depth, width, shearArea };
 }

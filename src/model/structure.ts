@@ -51,6 +51,11 @@ export interface Section {
   readonly secondMomentOfArea: number | undefined;
   /** Pa. */
   readonly youngsModulus: number | undefined;
+  /** GAs, N: shear deformation is counted with it; absent where it is not counted. */
+  readonly shearStiffness?: number;
+  /** m², and the shear modulus, Pa; for schedules. */
+  readonly shearArea?: number;
+  readonly shearModulus?: number;
   /** m, in the plane of bending. */
   readonly depth: number | undefined;
   /** Of its material, 1/K. */
@@ -86,7 +91,20 @@ export interface Leg {
   /** Unit vector along the travel. The left-hand normal, local y, is (−sine, cosine). */
   readonly cosine: number;
   readonly sine: number;
+  /** Absent: the end is attached rigidly, or by what a hinge leaves. */
+  readonly startAttachment?: Attachment;
+  readonly endAttachment?: Attachment;
 }
+
+/** How the end of a leg of a member is attached to the joint at its point, other than rigidly; hinges are told apart. */
+export interface Attachment {
+  /** Forces that do not pass: axial force along the leg, shear across it. */
+  readonly freed: readonly FreedForce[];
+  /** Of a semi-rigid connection, N m/rad: moment for each radian between the end of the leg and the joint. */
+  readonly turning?: number;
+}
+
+export type FreedForce = 'axial' | 'shear';
 
 export interface Group {
   readonly name: string;

@@ -1,5 +1,5 @@
 // Supports as restraints: what is held or sprung at a point, and the symbol that a drawing shows for it.
-import type { Statement, StatementOf, SupportItem } from '../language/syntax.ts';
+import type { StatementOf, SupportItem } from '../language/syntax.ts';
 import { divideDimensions, FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
 import type { Range } from '../quantity/range.ts';
 import type { Due, Figures } from './figures.ts';
@@ -142,27 +142,4 @@ function readSpring(
     rotation: { kind: 'rotation' } as const,
   }[item.freedom];
   return { freedom, stiffness };
-}
-
-/** Statements that free or soften a joint and are read but not evaluated. */
-export function reportUnevaluatedJoints(statement: Statement, report: Report): void {
-  if (statement.kind === 'connection') {
-    report.flawed = true;
-    report.error(
-      'not-evaluated-yet',
-      statement.keyword,
-      'A semi-rigid connection is read but not evaluated by this version: answers of this structure are withheld.',
-    );
-  }
-  if (statement.kind === 'release') {
-    report.flawed = true;
-    report.error(
-      'not-evaluated-yet',
-      statement.keyword,
-      'A release is read but not evaluated by this version: answers of this structure are withheld.',
-      {
-        hint: `for a freed moment, write hinge ${statement.point.text} in ${statement.member.text}`,
-      },
-    );
-  }
 }

@@ -38,11 +38,10 @@ export interface Held {
 export function hold({ measure, place, value, factors, solved }: Taken): Held {
   const actions = unitActions(measure, place, solved.analysis.structure);
   if (actions === undefined) return { difference: 0, rounding: 0 };
-  // Over a hinge a member that runs on has a rotation on either side: the one that was meant is the nearer.
-  const ways =
-    measure.kind === 'rotation' && place !== undefined
-      ? [onSide(actions, 'before'), onSide(actions, 'after')]
-      : [actions];
+  // Over a hinge, a connection or a release a member that runs on moves by another amount on either side: the one that was
+  // meant is the nearer.
+  const parted = measure.kind === 'rotation' || hasReleases(solved.analysis.structure);
+  const ways = parted && place !== undefined ? [onSide(actions, 'before'), onSide(actions, 'after')] : [actions];
   const solution = solved.solution(factors);
   const largest = sizesOf(solution)[measure.kind === 'rotation' ? 'rotation' : 'movement'];
   let held: Held = { difference: Infinity, rounding: 0 };
@@ -63,8 +62,15 @@ export function hold({ measure, place, value, factors, solved }: Taken): Held {
   return held;
 }
 
+/** The first action is the one at the place; the ends of a sag's chord are those behind the points. */
 function onSide(actions: readonly UnitAction[], side: 'before' | 'after'): readonly UnitAction[] {
-  return actions.map(action => ({ ...action, side }));
+  return actions.map((action, index) => ({ ...action, side: index === 0 ? side : 'after' }));
+}
+
+function hasReleases({ members }: Structure): boolean {
+  return members.some(({ legs }) =>
+    legs.some(leg => [leg.startAttachment, leg.endAttachment].some(end => end !== undefined && end.freed.length > 0)),
+  );
 }
 
 /** The virtual loads of a movement, in the sense in which the measure is positive; undefined for what is no movement. */

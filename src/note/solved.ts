@@ -1,7 +1,7 @@
 // A structure with what it does: its analysis, the solutions of combinations and the second road, each worked once, when
 // first asked for. A structure that did not change is taken from memory with all of them.
 import { type Analysis, analyse, combine, type Solution } from '../mechanics/index.ts';
-import type { Structure } from '../model/structure.ts';
+import type { Leg, Structure } from '../model/structure.ts';
 import { SecondRoad } from '../virtual-work/index.ts';
 
 export class Solved {
@@ -30,22 +30,17 @@ export function solutionKey(structure: Structure): string {
   const { points, sections, members, hinges, supports, cases, loads } = structure;
   return JSON.stringify([
     points.map(({ x, y }) => [x, y]),
-    sections.map(
-      ({ bendingStiffness, axialStiffness, massPerLength, sectionModulus, area, depth, thermalExpansion }) => [
-        depth ?? '',
-        thermalExpansion ?? '',
-        bendingStiffness ?? '',
-        axialStiffness ?? '',
-        massPerLength ?? '',
-        sectionModulus ?? '',
-        area ?? '',
-      ],
-    ),
-    members.map(({ kind, only, legs }) => [
-      kind,
-      only ?? '',
-      ...legs.map(({ from, to, section }) => [from, to, section]),
+    sections.map(section => [
+      section.depth ?? '',
+      section.thermalExpansion ?? '',
+      section.bendingStiffness ?? '',
+      section.axialStiffness ?? '',
+      section.massPerLength ?? '',
+      section.sectionModulus ?? '',
+      section.area ?? '',
+      ...(section.shearStiffness === undefined ? [] : [{ shearStiffness: section.shearStiffness }]),
     ]),
+    members.map(({ kind, only, legs }) => [kind, only ?? '', ...legs.map(legKey)]),
     hinges.map(({ point, member }) => [point, member ?? '']),
     supports.map(({ point, restraints, bears }) => [
       point,
@@ -55,4 +50,11 @@ export function solutionKey(structure: Structure): string {
     cases.map(({ span }) => span?.of ?? ''),
     loads.map(({ range: _range, source: _source, ...load }) => load),
   ]);
+}
+
+function legKey({ from, to, section, startAttachment, endAttachment }: Leg) {
+  const leg = [from, to, section];
+  return startAttachment === undefined && endAttachment === undefined
+    ? leg
+    : [...leg, startAttachment ?? '', endAttachment ?? ''];
 }

@@ -91,9 +91,10 @@ export class StructureState {
       if (statement.kind === 'case' && statement.title !== undefined)
         titles.set(statement.name.text, statement.title.text);
     }
-    const assumed = [...head.statements, ...scope.statements].some(
-      statement => statement.kind === 'assume' && statement.assumption.kind === 'axially stiff',
-    );
+    const isAssumed = (kind: 'axially stiff' | 'shear deformation') =>
+      [...head.statements, ...scope.statements].some(
+        statement => statement.kind === 'assume' && statement.assumption.kind === kind,
+      );
     const structure = buildStructure({
       scope,
       names,
@@ -102,7 +103,8 @@ export class StructureState {
       figures: values.figures(scope, this.report),
       report: this.report,
       titles,
-      axiallyStiff: assumed,
+      axiallyStiff: isAssumed('axially stiff'),
+      shearDeformation: isAssumed('shear deformation'),
     });
     return structure.members.length === 0 ? undefined : structure;
   }
@@ -130,15 +132,6 @@ export class StructureState {
             hint: 'put the reaction on as a load, from its result: load dead: (seat of Rafter) down at D',
           },
         );
-      }
-      if (statement.kind === 'assume' && statement.assumption.kind === 'shear deformation') {
-        this.report.flawed = true;
-        if (own)
-          this.report.error(
-            'not-evaluated-yet',
-            statement.range,
-            'Shear deformation is read but not evaluated by this version: answers of this structure are withheld.',
-          );
       }
     }
   }

@@ -78,8 +78,12 @@ function methodOf(structure: Structure): string[] {
   );
   if (members.length > 0) {
     const isBending = stiff.length === structure.members.length;
-    const what = isBending ? 'Bending only' : 'Bending and axial deformation';
-    sentences.push(`${what}; shear deformation is not counted.`);
+    const shears = structure.sections.some(({ shearStiffness }) => shearStiffness !== undefined);
+    if (shears) sentences.push(isBending ? 'Bending and shear deformation.' : 'Bending, shear and axial deformation.');
+    else {
+      const what = isBending ? 'Bending only' : 'Bending and axial deformation';
+      sentences.push(`${what}; shear deformation is not counted.`);
+    }
     if (stiff.length > 0 && !isBending) {
       const names = stiff.length > 6 ? `${stiff.length} members` : listed(stiff.map(({ name }) => name));
       sentences.push(

@@ -18,6 +18,7 @@ import type { DisplayUnits } from '../quantity/display.ts';
 import { showQuantity } from '../quantity/display.ts';
 import { significant } from '../quantity/number.ts';
 import { counted, decimalColumn, escapeHtml, listed, plainHtml, typeset, unitHtml } from './html.ts';
+import { jointRows } from './joint-rows.ts';
 import { statementAt } from './note-index.ts';
 import { alternativeName, factorsOf } from './reactions-table.ts';
 
@@ -41,6 +42,7 @@ export function inputSchedule(note: NoteResult, result: StructureResult, open: b
     `<details class="tl-inputs"${open ? ' open' : ''}><summary>Inputs <small>${parts.join(', ')}${without}</small></summary>` +
     valueTable(note, values, result) +
     sectionTable(structure, result.display) +
+    schedule(['Joint', 'attached', 'source'], ['120px', '', '190px'], jointRows(note, result)) +
     loadTable(loads, result) +
     combinationTable(result) +
     '</details>'
@@ -76,7 +78,7 @@ function sectionTable(structure: Structure, units: DisplayUnits): string {
     const weight = section.massPerLength === undefined ? undefined : section.massPerLength * GRAVITY;
     const description = section.description === '' ? '' : `${plainHtml(section.description)}; `;
     return [
-      `${escapeHtml(section.name)}<span class="tl-sub">${description}of ${escapeHtml(of)}</span>`,
+      `${escapeHtml(section.name)}<span class="tl-sub">${description}of ${escapeHtml(of)}${inShear(section, units)}</span>`,
       modulus(section.youngsModulus, units),
       figure(section.area, AREA, units),
       figure(section.secondMomentOfArea, SECOND_MOMENT_OF_AREA, units),
@@ -93,6 +95,17 @@ function sectionTable(structure: Structure, units: DisplayUnits): string {
 
 function expansion(value: number | undefined): string {
   return value === undefined ? '–' : plainHtml(`${asGiven(value * 1e6)}e-6 /K`);
+}
+
+/** `; in shear G 81 GPa, area 2400 mm², GAs 194.4 MN`, of what is known and counted. */
+function inShear({ shearModulus, shearArea, shearStiffness }: Section, units: DisplayUnits): string {
+  if (shearStiffness === undefined) return '';
+  const figures = [
+    shearModulus === undefined ? '' : `G ${modulus(shearModulus, units)}`,
+    shearArea === undefined ? '' : `area ${figure(shearArea, AREA, units)}`,
+    `GAs ${figure(shearStiffness, FORCE, units)}`,
+  ];
+  return `; in shear ${figures.filter(text => text !== '').join(', ')}`;
 }
 
 /** A modulus of elasticity goes by the thousand of the unit for stresses. */

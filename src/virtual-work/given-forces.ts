@@ -45,7 +45,9 @@ export function givenForces(
   for (let index = 0; index < legs.length; index++) {
     const leg = legs[index]!;
     const pieces = piecesWithin(forces, leg);
-    strains.set(strainsWithin(leg, pieces), 3 * index);
+    const own = loading.spans.get(index);
+    const couples = { start: own?.startMoment ?? 0, end: own?.endMoment ?? 0 };
+    strains.set(strainsWithin(leg, pieces, couples), 3 * index);
     for (const { start, end, axialForce, bendingMoment } of pieces) {
       const axial = bound(axialForce, end - start);
       const lever = bound(bendingMoment, end - start) / leg.length;
@@ -53,10 +55,11 @@ export function givenForces(
       size = Math.max(
         size,
         axial * leg.axialFlexibility * leg.length,
-        lever * leg.bendingFlexibility * leg.length ** 3,
+        lever * (leg.bendingFlexibility * leg.length ** 3 + leg.shearFlexibility * leg.length),
+        lever * (leg.startTurning + leg.endTurning) * leg.length ** 2,
       );
     }
-    ends.set(endForces(leg, pieces), 2 * index * COMPONENTS);
+    ends.set(endForces(leg, pieces, couples), 2 * index * COMPONENTS);
   }
   addFreeStrains(statics, loading.free, strains);
   for (const [index, { axial, curvature }] of (loading.free ?? []).entries()) {
@@ -130,24 +133,43 @@ function piecesWithin(forces: InternalForces, leg: StaticLeg): SpanPiece[] {
   return pieces;
 }
 
+/** Moments that loads put on hinged or connected ends of a leg from within, tension on the underside positive, N m. */
+interface EndCouples {
+  readonly start: number;
+  readonly end: number;
+}
+
 function strainsWithin(
-  { length, axialFlexibility, bendingFlexibility }: StaticLeg,
+  leg: StaticLeg,
   pieces: readonly SpanPiece[],
+  couples: EndCouples,
 ): [axial: number, start: number, end: number] {
+  const { length, axialFlexibility, bendingFlexibility, shearFlexibility, startTurning, endTurning } = leg;
   let axial = 0;
   let falling = 0;
   let rising = 0;
+  let shear = 0;
   for (const { start, end, axialForce, bendingMoment } of pieces) {
     const span = end - start;
     axial += productIntegral(axialForce, [1], span);
     falling += productIntegral(bendingMoment, [1 - start / length, -1 / length], span);
     rising += productIntegral(bendingMoment, [start / length, 1 / length], span);
+    shear += productIntegral(derivative(bendingMoment), [1], span);
   }
-  return [axialFlexibility * axial, bendingFlexibility * falling, bendingFlexibility * rising];
+  const sliding = (shearFlexibility * shear) / length;
+  return [
+    axialFlexibility * axial,
+    bendingFlexibility * falling - sliding + startTurning * (momentAtStart(pieces) - couples.start),
+    bendingFlexibility * rising + sliding + endTurning * (momentAtEnd(pieces) - couples.end),
+  ];
 }
 
 /** What the leg does to the points at its start and end, `COMPONENTS` each. */
-function endForces({ cosine, sine, rigidStart, rigidEnd }: StaticLeg, pieces: readonly SpanPiece[]): number[] {
+function endForces(
+  { cosine, sine, rigidStart, rigidEnd }: StaticLeg,
+  pieces: readonly SpanPiece[],
+  couples: EndCouples,
+): number[] {
   const first = pieces[0]!;
   const last = pieces[pieces.length - 1]!;
   const span = last.end - last.start;
@@ -158,11 +180,20 @@ function endForces({ cosine, sine, rigidStart, rigidEnd }: StaticLeg, pieces: re
   return [
     startAxial * cosine + startShear * sine,
     startAxial * sine - startShear * cosine,
-    rigidStart ? valueAt(first.bendingMoment, 0) : 0,
+    rigidStart ? momentAtStart(pieces) - couples.start : 0,
     -endAxial * cosine - endShear * sine,
     -endAxial * sine + endShear * cosine,
-    rigidEnd ? -valueAt(last.bendingMoment, span) : 0,
+    rigidEnd ? couples.end - momentAtEnd(pieces) : 0,
   ];
+}
+
+function momentAtStart([first]: readonly SpanPiece[]): number {
+  return valueAt(first!.bendingMoment, 0);
+}
+
+function momentAtEnd(pieces: readonly SpanPiece[]): number {
+  const { start, end, bendingMoment } = pieces[pieces.length - 1]!;
+  return valueAt(bendingMoment, end - start);
 }
 
 /** Legs and loads together, by the rows of the equations. */

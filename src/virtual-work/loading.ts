@@ -3,7 +3,7 @@
 import { STANDARD_GRAVITY } from '../model/gravity.ts';
 import type { LineDirection, Load, Location } from '../model/structure.ts';
 import { emptySpanLoad, type SpanLoad } from './span.ts';
-import type { StaticLeg, Statics } from './statics.ts';
+import { type End, releaseAt, type StaticLeg, type Statics } from './statics.ts';
 
 export interface Loading {
   /** N and N m, by the rows of the equations. */
@@ -59,8 +59,9 @@ export function addLoad(statics: Statics, loading: Loading, load: Load, factor: 
 }
 
 /**
- * A force (global components) and a couple, anticlockwise, at a place. `side`: where the member is hinged at the place and
- * runs on, which of its two ends the couple turns, in the direction of travel.
+ * A force (global components) and a couple, anticlockwise, at a place. At a point of a member the force acts on the joint,
+ * or with a `side` on the end of the member that stands there (before or behind, in the direction of travel); the couple
+ * turns that end, `before` if not said. It makes a difference where the end is hinged, connected or freed.
  */
 export function addAction(
   statics: Statics,
@@ -69,12 +70,13 @@ export function addAction(
   x: number,
   y: number,
   moment: number,
-  side: 'before' | 'after' = 'before',
+  side?: 'before' | 'after',
 ): void {
   const place = at.kind === 'point' ? at : placeOnMember(statics, at.member, at.distance);
   if (place.kind === 'point') {
     addToPoint(statics, loading, place.point, x, y);
-    if (moment !== 0) addCouple(statics, loading, place, moment, side);
+    if (side !== undefined) addToFreedEnd(statics, loading, place, x, y, side);
+    if (moment !== 0) addCouple(statics, loading, place, moment, side ?? 'before');
     return;
   }
   const leg = statics.legs[place.leg]!;
@@ -108,37 +110,70 @@ function addToPoint({ forceRow }: Statics, { joints }: Loading, point: number, x
   joints[row + 1]! += y;
 }
 
-/** On the joint, or on the member's own end where that is hinged. */
+interface MemberPoint {
+  readonly point: number;
+  readonly member?: number;
+}
+
+/**
+ * What a force on the joint lacks to be one on the end of the member, where that end slides past the joint: the force that
+ * is nil at the release stands against it within the leg.
+ */
+function addToFreedEnd(
+  statics: Statics,
+  { joints }: Loading,
+  place: MemberPoint,
+  x: number,
+  y: number,
+  side: 'before' | 'after',
+): void {
+  const found = endOf(statics, place, side);
+  if (!found) return;
+  const { leg, end } = found;
+  const [along, across] = inLocalAxes(statics.legs[leg]!, x, y);
+  const sign = end === 'start' ? 1 : -1;
+  const axial = statics.releaseRow[releaseAt(leg, 'axial', end)]!;
+  const shear = statics.releaseRow[releaseAt(leg, 'shear', end)]!;
+  if (axial >= 0) joints[axial]! += sign * along;
+  if (shear >= 0) joints[shear]! -= sign * across;
+}
+
+/** On the joint, or on the member's own end where that is hinged or connected. */
 function addCouple(
   statics: Statics,
   loading: Loading,
-  { point, member }: { readonly point: number; readonly member?: number },
+  place: MemberPoint,
   moment: number,
   side: 'before' | 'after',
 ): void {
-  const end = member === undefined ? undefined : freeEnd(statics, point, member, side);
-  if (end) {
+  const found = endOf(statics, place, side);
+  if (found && turnsAlone(statics.legs[found.leg]!, found.end)) {
     // An anticlockwise couple on the start of a leg puts its upper side in tension, one on its end the underside.
-    const span = spanOf(loading, end.leg);
-    if (end.which === 'start') span.startMoment -= moment;
+    const span = spanOf(loading, found.leg);
+    if (found.end === 'start') span.startMoment -= moment;
     else span.endMoment += moment;
     return;
   }
-  const row = statics.coupleRow[point]!;
+  const row = statics.coupleRow[place.point]!;
   if (row >= 0) loading.joints[row]! += moment;
 }
 
-interface FreeEnd {
-  readonly leg: number;
-  readonly which: 'start' | 'end';
+/** Hinged, connected, or of a bar. */
+function turnsAlone(leg: StaticLeg, end: End): boolean {
+  return end === 'start' ? !leg.rigidStart || leg.startTurning > 0 : !leg.rigidEnd || leg.endTurning > 0;
 }
 
-function freeEnd(statics: Statics, point: number, member: number, side: 'before' | 'after'): FreeEnd | undefined {
-  let found: FreeEnd | undefined;
-  for (let index = statics.firstLeg[member]!; index < statics.firstLeg[member + 1]!; index++) {
-    const leg = statics.legs[index]!;
-    if (leg.to === point && !leg.rigidEnd) found = { leg: index, which: 'end' };
-    if (leg.from === point && !leg.rigidStart && (!found || side === 'after')) found = { leg: index, which: 'start' };
+/** The end of a leg of the member at its point, on the side meant if the member runs on. */
+function endOf(
+  { legs, firstLeg }: Statics,
+  { point, member }: MemberPoint,
+  side: 'before' | 'after',
+): { readonly leg: number; readonly end: End } | undefined {
+  if (member === undefined) return undefined;
+  let found: { readonly leg: number; readonly end: End } | undefined;
+  for (let leg = firstLeg[member]!; leg < firstLeg[member + 1]!; leg++) {
+    if (legs[leg]!.to === point) found = { leg, end: 'end' };
+    if (legs[leg]!.from === point && (!found || side === 'after')) found = { leg, end: 'start' };
   }
   return found;
 }

@@ -6,7 +6,7 @@ import { type Elimination, eliminate } from './elimination.ts';
 import { addAction, emptyLoading, type FreeStrain, type Loading } from './loading.ts';
 import { type Preference, stiffestFromTheGround } from './preference.ts';
 import { type SpanForces, spanForces } from './span.ts';
-import { ENTRIES_PER_UNKNOWN, entriesOf, type Statics, staticsOf, toPhysicalUnits } from './statics.ts';
+import { ENTRIES_PER_UNKNOWN, entriesOf, releaseAt, type Statics, staticsOf, toPhysicalUnits } from './statics.ts';
 import { balance } from './substitution.ts';
 
 export interface PrimaryStructure {
@@ -60,7 +60,7 @@ export function primaryStructureOf(
 
 /** The forces of the primary structure under the loading, every redundant zero. */
 export function primaryForces({ statics, elimination }: PrimaryStructure, loading: Loading): ForceState {
-  const { legs, forceRow, coupleRow, lever } = statics;
+  const { legs, forceRow, coupleRow, releaseRow, lever } = statics;
   const spans = new Map<number, SpanForces>();
   const load = loading.joints.slice();
   for (const [index, span] of loading.spans) {
@@ -75,6 +75,10 @@ export function primaryForces({ statics, elimination }: PrimaryStructure, loadin
     load[start + 1]! -= leg.cosine * startShear;
     load[end]! -= leg.cosine * endAxial + leg.sine * endShear;
     load[end + 1]! += leg.cosine * endShear - leg.sine * endAxial;
+    // Where a force is freed, what the leg has of it there; the axial force of a span begins at nil.
+    addTo(load, releaseRow[releaseAt(index, 'axial', 'end')]!, endAxial);
+    addTo(load, releaseRow[releaseAt(index, 'shear', 'start')]!, startShear);
+    addTo(load, releaseRow[releaseAt(index, 'shear', 'end')]!, endShear);
   }
   for (let point = 0; point < coupleRow.length; point++) {
     const row = coupleRow[point]!;
@@ -91,4 +95,8 @@ export function virtualSystem(primary: PrimaryStructure, actions: readonly UnitA
   const loading = emptyLoading(primary.statics);
   for (const { at, x, y, moment, side } of actions) addAction(primary.statics, loading, at, x, y, moment, side);
   return primaryForces(primary, loading);
+}
+
+function addTo(load: Float64Array, row: number, force: number): void {
+  if (row >= 0) load[row]! += force;
 }

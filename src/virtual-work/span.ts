@@ -49,6 +49,8 @@ export interface SpanForces {
   readonly axialIntegral: number;
   readonly fallingIntegral: number;
   readonly risingIntegral: number;
+  /** Of the shear, N m: what the couples on the leg and at its hinged ends leave. */
+  readonly shearIntegral: number;
 }
 
 export function emptySpanLoad(): SpanLoad {
@@ -65,6 +67,7 @@ export function spanForces(load: SpanLoad, length: number): SpanForces {
   let axialIntegral = 0;
   let fallingIntegral = 0;
   let risingIntegral = 0;
+  let shearIntegral = 0;
   for (let index = 0; index + 1 < ends.length; index++) {
     const start = ends[index]!;
     const end = ends[index + 1]!;
@@ -82,11 +85,22 @@ export function spanForces(load: SpanLoad, length: number): SpanForces {
     axialIntegral += productIntegral(axialForce, [1], span);
     fallingIntegral += productIntegral(bendingMoment, [(length - start) / length, -1 / length], span);
     risingIntegral += productIntegral(bendingMoment, [start / length, 1 / length], span);
-    moment += span * (shear + span * (across / 2 + (span * acrossSlope) / 6));
+    const gained = span * (shear + span * (across / 2 + (span * acrossSlope) / 6));
+    shearIntegral += gained;
+    moment += gained;
     axial -= span * (along + (span * alongSlope) / 2);
     shear += span * (across + (span * acrossSlope) / 2);
   }
-  return { pieces, startShear, endShear: shear, endAxial: axial, axialIntegral, fallingIntegral, risingIntegral };
+  return {
+    pieces,
+    startShear,
+    endShear: shear,
+    endAxial: axial,
+    axialIntegral,
+    fallingIntegral,
+    risingIntegral,
+    shearIntegral,
+  };
 }
 
 /** By turning about the end: the shear there has no lever. */

@@ -4,8 +4,9 @@
 // Unknowns of leg i stand at 3i, 3i + 1, 3i + 2: its axial force at the start (N, tension positive), and its bending
 // moments at start and end (N m, positive with tension on the underside). The reactions follow from `firstReaction` on.
 // Equations: a force to the right and a force up for each point that a leg reaches, and a couple, anticlockwise, where
-// ends are rigidly joined or the rotation is held. Each says: internal forces + reactions + loads = 0.
-import type { Structure } from '../model/structure.ts';
+// ends are rigidly joined or connected or the rotation is held; then one for each force that is freed at an end, which is
+// nil there. Each says: internal forces + reactions + loads = 0.
+import type { Attachment, FreedForce, Structure } from '../model/structure.ts';
 import { type Ground, groundsOf } from './grounds.ts';
 
 export interface Statics {
@@ -21,6 +22,8 @@ export interface Statics {
   readonly forceRow: Int32Array;
   /** Per point: the row of the couple, −1 where there is none. */
   readonly coupleRow: Int32Array;
+  /** Four per leg: the rows of what is freed, as `releaseAt` numbers them; −1 where it passes. */
+  readonly releaseRow: Int32Array;
   readonly rowCount: number;
   /** Per point: the longest leg that reaches it, m; the lever by which couples are compared with forces. */
   readonly lever: Float64Array;
@@ -40,13 +43,25 @@ export interface StaticLeg {
   readonly axialFlexibility: number;
   /** 1/EI, 1/(N m²); 0 for a bar, which does not bend. */
   readonly bendingFlexibility: number;
-  /** Whether the end is joined rigidly, so that it can carry a moment. */
+  /** 1/GAs, 1/N; 0 where shear deformation is not counted. */
+  readonly shearFlexibility: number;
+  /** Of the connection at the end, rad/(N m): how far it turns for a moment of 1 N m; 0 where there is none. */
+  readonly startTurning: number;
+  readonly endTurning: number;
+  /** Whether the end is joined rigidly or by a connection, so that it can carry a moment. */
   readonly rigidStart: boolean;
   readonly rigidEnd: boolean;
 }
 
-/** The most equations that one unknown enters: two forces at each end, and a couple at one. */
-export const ENTRIES_PER_UNKNOWN = 5;
+/** The most equations that one unknown enters: two forces at each end, a couple at one, and a release. */
+export const ENTRIES_PER_UNKNOWN = 6;
+
+export type End = 'start' | 'end';
+
+/** Index into `releaseRow`. */
+export function releaseAt(leg: number, force: FreedForce, end: End): number {
+  return 4 * leg + (force === 'axial' ? 0 : 2) + (end === 'start' ? 0 : 1);
+}
 
 /** Undefined where a member's bending stiffness is not known. */
 export function staticsOf(structure: Structure): Statics | undefined {
@@ -80,9 +95,27 @@ export function staticsOf(structure: Structure): Statics | undefined {
     rowCount += 2;
     if (turning[point]) coupleRow[point] = rowCount++;
   }
+  const releaseRow = new Int32Array(4 * legs.length).fill(-1);
+  for (const [leg, { member, index }] of legs.entries()) {
+    const { startAttachment, endAttachment } = structure.members[member]!.legs[index]!;
+    for (const force of freedOf(startAttachment)) releaseRow[releaseAt(leg, force, 'start')] = rowCount++;
+    for (const force of freedOf(endAttachment)) releaseRow[releaseAt(leg, force, 'end')] = rowCount++;
+  }
   const firstReaction = 3 * legs.length;
   const unknownCount = firstReaction + grounds.length;
-  return { structure, legs, firstLeg, grounds, firstReaction, unknownCount, forceRow, coupleRow, rowCount, lever };
+  return {
+    structure,
+    legs,
+    firstLeg,
+    grounds,
+    firstReaction,
+    unknownCount,
+    forceRow,
+    coupleRow,
+    releaseRow,
+    rowCount,
+    lever,
+  };
 }
 
 /** Whether there is such an unknown: hinged ends and bars have no end moments. */
@@ -98,7 +131,7 @@ export function isUnknown(statics: Statics, unknown: number): boolean {
  * and the unit is that of `unitOf`. Writes into `rows` and `values`, returns how many; no row comes twice.
  */
 export function entriesOf(statics: Statics, unknown: number, rows: Int32Array, values: Float64Array): number {
-  const { forceRow, coupleRow, lever } = statics;
+  const { forceRow, coupleRow, releaseRow, lever } = statics;
   if (unknown >= statics.firstReaction) {
     const { point, x, y, moment } = statics.grounds[unknown - statics.firstReaction]!;
     if (moment) {
@@ -126,11 +159,20 @@ export function entriesOf(statics: Statics, unknown: number, rows: Int32Array, v
   values[2] = -x;
   rows[3] = forceRow[leg.to]! + 1;
   values[3] = -y;
-  if (which === 0) return 4;
-  const point = which === 1 ? leg.from : leg.to;
-  rows[4] = coupleRow[point]!;
-  values[4] = ((which === 1 ? 1 : -1) * leg.length) / lever[point]!;
-  return 5;
+  let count = 4;
+  if (which !== 0) {
+    const point = which === 1 ? leg.from : leg.to;
+    rows[4] = coupleRow[point]!;
+    values[4] = ((which === 1 ? 1 : -1) * leg.length) / lever[point]!;
+    count = 5;
+  }
+  // The force itself, at whichever end it is freed: N, or the shear of the end moments.
+  const release = releaseAt(Math.floor(unknown / 3), which === 0 ? 'axial' : 'shear', 'start');
+  const row = Math.max(releaseRow[release]!, releaseRow[release + 1]!);
+  if (row < 0) return count;
+  rows[count] = row;
+  values[count] = which === 1 ? -1 : 1;
+  return count + 1;
 }
 
 /** What a dimensionless unit of the unknown is: 1 N, or the couple of 1 N on the leg's length or on the point's lever. */
@@ -147,13 +189,16 @@ export function toPhysicalUnits(statics: Statics, unknowns: Float64Array): void 
   }
 }
 
-/** Movement per N of a dimensionless unit of the unknown by itself, m/N: L/EA, L³/3EI, 1/k, lever²/k. */
+/** Movement per N of a dimensionless unit of the unknown by itself, m/N: L/EA, L³/3EI + L/GAs + L²/k of a connection, 1/k, lever²/k. */
 export function flexibilityOf(statics: Statics, unknown: number): number {
   if (unknown >= statics.firstReaction) {
     return statics.grounds[unknown - statics.firstReaction]!.flexibility * unitOf(statics, unknown) ** 2;
   }
   const leg = statics.legs[Math.floor(unknown / 3)]!;
-  return unknown % 3 === 0 ? leg.axialFlexibility * leg.length : (leg.bendingFlexibility * leg.length ** 3) / 3;
+  const { length } = leg;
+  if (unknown % 3 === 0) return leg.axialFlexibility * length;
+  const turning = unknown % 3 === 1 ? leg.startTurning : leg.endTurning;
+  return (leg.bendingFlexibility * length ** 3) / 3 + leg.shearFlexibility * length + turning * length ** 2;
 }
 
 function legsOf(structure: Structure): StaticLeg[] | undefined {
@@ -177,12 +222,23 @@ function legsOf(structure: Structure): StaticLeg[] | undefined {
         sine: leg.sine,
         axialFlexibility: section.axialStiffness === undefined ? 0 : 1 / section.axialStiffness,
         bendingFlexibility: kind === 'bar' ? 0 : 1 / section.bendingStiffness!,
+        shearFlexibility: kind === 'bar' || section.shearStiffness === undefined ? 0 : 1 / section.shearStiffness,
+        startTurning: turningOf(leg.startAttachment),
+        endTurning: turningOf(leg.endAttachment),
         rigidStart: kind === 'member' && !free(leg.from, member),
         rigidEnd: kind === 'member' && !free(leg.to, member),
       });
     }
   }
   return legs;
+}
+
+function freedOf(attachment: Attachment | undefined): readonly FreedForce[] {
+  return attachment?.freed ?? [];
+}
+
+function turningOf(attachment: Attachment | undefined): number {
+  return attachment?.turning === undefined ? 0 : 1 / attachment.turning;
 }
 
 function hingeKey(point: number, member?: number): string {

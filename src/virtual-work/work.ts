@@ -1,33 +1,36 @@
 // The work of one state of forces on the strains of another: the integrals of virtual work, leg by leg.
 
 import { type FreeStrain, UNSTRAINED } from './loading.ts';
-import { bound, productIntegral, shifted } from './polynomial.ts';
+import { bound, derivative, productIntegral, shifted } from './polynomial.ts';
 import type { ForceState, Imposed } from './primary.ts';
 import type { SpanForces, SpanPiece } from './span.ts';
 import type { StaticLeg, Statics } from './statics.ts';
 
 /**
  * What one unit of each unknown does work on, m or rad, by unknown. For a leg's axial force its lengthening ∫(N/EA + ε) dx;
- * for its end moments ∫(M/EI + κ)(1 − x/L) dx and ∫(M/EI + κ)(x/L) dx, the turns of its ends against its chord, ε and κ
- * being what heat and lack of fit do; for a reaction the movement of the point, turned about: r R/k − r g.
+ * for its end moments ∫(M/EI + κ)(1 − x/L) − V/GAs L dx and ∫(M/EI + κ)(x/L) + V/GAs L dx, the turns of its ends against its
+ * chord, ε and κ being what heat and lack of fit do, and M/k more where the end is connected; for a reaction the movement
+ * of the point, turned about: r R/k − r g.
  */
 export function strainsOf(statics: Statics, { unknowns, spans, imposed }: ForceState): Float64Array {
   const { legs, grounds, firstReaction } = statics;
   const strains = new Float64Array(statics.unknownCount);
   for (let index = 0; index < legs.length; index++) {
-    const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
+    const { length, axialFlexibility, bendingFlexibility, shearFlexibility, startTurning, endTurning } = legs[index]!;
     const at = 3 * index;
     const start = unknowns[at + 1]!;
     const end = unknowns[at + 2]!;
     strains[at] = axialFlexibility * length * unknowns[at]!;
-    strains[at + 1] = (bendingFlexibility * length * (2 * start + end)) / 6;
-    strains[at + 2] = (bendingFlexibility * length * (start + 2 * end)) / 6;
+    const sliding = (shearFlexibility * (end - start)) / length;
+    strains[at + 1] = (bendingFlexibility * length * (2 * start + end)) / 6 - sliding + startTurning * start;
+    strains[at + 2] = (bendingFlexibility * length * (start + 2 * end)) / 6 + sliding + endTurning * end;
   }
   for (const [index, span] of spans) {
-    const { axialFlexibility, bendingFlexibility } = legs[index]!;
+    const { length, axialFlexibility, bendingFlexibility, shearFlexibility } = legs[index]!;
+    const sliding = (shearFlexibility * span.shearIntegral) / length;
     strains[3 * index]! += axialFlexibility * span.axialIntegral;
-    strains[3 * index + 1]! += bendingFlexibility * span.fallingIntegral;
-    strains[3 * index + 2]! += bendingFlexibility * span.risingIntegral;
+    strains[3 * index + 1]! += bendingFlexibility * span.fallingIntegral - sliding;
+    strains[3 * index + 2]! += bendingFlexibility * span.risingIntegral + sliding;
   }
   addFreeStrains(statics, imposed.free, strains);
   const { ground } = imposed;
@@ -55,7 +58,10 @@ export function addFreeStrains(
   }
 }
 
-/** Σ∫((N/EA + ε) n + (M/EI + κ) m) dx + Σ R r/k − Σ r g of a virtual state on real forces, whose strains are given. */
+/**
+ * Σ∫((N/EA + ε) n + (M/EI + κ) m + V v/GAs) dx + Σ M m/k of connections + Σ R r/k − Σ r g of a virtual state on real forces,
+ * whose strains are given.
+ */
 export function virtualWork(statics: Statics, virtual: ForceState, real: RealForces, strains: Float64Array): number {
   let work = 0;
   const { unknowns } = virtual;
@@ -105,17 +111,21 @@ export function workOnImposed(statics: Statics, { unknowns, spans }: ForceState,
 function workOfUnitForce({ legs, grounds, firstReaction }: Statics, { unknowns, spans }: ForceState): number {
   let work = 0;
   for (let index = 0; index < legs.length; index++) {
-    const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
-    const moments = Math.abs(unknowns[3 * index + 1]!) + Math.abs(unknowns[3 * index + 2]!);
-    work += axialFlexibility * length * Math.abs(unknowns[3 * index]!) + bendingFlexibility * length ** 2 * moments;
+    const { length, axialFlexibility, bendingFlexibility, shearFlexibility, startTurning, endTurning } = legs[index]!;
+    const start = Math.abs(unknowns[3 * index + 1]!);
+    const end = Math.abs(unknowns[3 * index + 2]!);
+    work += axialFlexibility * length * Math.abs(unknowns[3 * index]!);
+    work += (bendingFlexibility * length ** 2 + shearFlexibility) * (start + end);
+    work += length * (startTurning * start + endTurning * end);
   }
   for (let index = 0; index < grounds.length; index++) {
     work += grounds[index]!.flexibility * Math.abs(unknowns[firstReaction + index]!);
   }
   for (const [index, { startShear, endShear, endAxial }] of spans) {
-    const { length, axialFlexibility, bendingFlexibility } = legs[index]!;
+    const { length, axialFlexibility, bendingFlexibility, shearFlexibility } = legs[index]!;
+    const shear = Math.abs(startShear) + Math.abs(endShear);
     work += axialFlexibility * length * Math.abs(endAxial);
-    work += bendingFlexibility * length ** 3 * (Math.abs(startShear) + Math.abs(endShear));
+    work += (bendingFlexibility * length ** 3 + shearFlexibility * length) * shear;
   }
   return work;
 }
@@ -148,10 +158,11 @@ export interface RealForces {
 
 /** Of what a virtual action within the leg adds to the forces that stand at its ends. */
 function workWithin(leg: StaticLeg, index: number, virtual: SpanForces, real: RealForces): number {
-  const { axialFlexibility, bendingFlexibility } = leg;
+  const { length: whole, axialFlexibility, bendingFlexibility, shearFlexibility } = leg;
   const { unknowns, spans, imposed } = real;
   let axial = unknowns[3 * index]! * virtual.axialIntegral;
   let bending = unknowns[3 * index + 1]! * virtual.fallingIntegral + unknowns[3 * index + 2]! * virtual.risingIntegral;
+  let shear = ((unknowns[3 * index + 2]! - unknowns[3 * index + 1]!) / whole) * virtual.shearIntegral;
   const pieces = spans.get(index)?.pieces ?? [];
   for (const a of virtual.pieces) {
     for (const b of pieces) {
@@ -161,11 +172,14 @@ function workWithin(leg: StaticLeg, index: number, virtual: SpanForces, real: Re
       const inA = start - a.start;
       const inB = start - b.start;
       axial += productIntegral(shifted(a.axialForce, inA), shifted(b.axialForce, inB), length);
-      bending += productIntegral(shifted(a.bendingMoment, inA), shifted(b.bendingMoment, inB), length);
+      const m = shifted(a.bendingMoment, inA);
+      const M = shifted(b.bendingMoment, inB);
+      bending += productIntegral(m, M, length);
+      if (shearFlexibility !== 0) shear += productIntegral(derivative(m), derivative(M), length);
     }
   }
   const free = imposed.free?.[index] ?? UNSTRAINED;
   const unforced =
     free.axial * virtual.axialIntegral + free.curvature * (virtual.fallingIntegral + virtual.risingIntegral);
-  return axialFlexibility * axial + bendingFlexibility * bending + unforced;
+  return axialFlexibility * axial + bendingFlexibility * bending + shearFlexibility * shear + unforced;
 }

@@ -21,10 +21,12 @@ function inWords({ points, members, sections, hinges, supports, loads }: Structu
     ...members.map(({ name, kind, legs }) => {
       const names = [point(legs[0]!.from), ...legs.map(leg => point(leg.to))].join(' ');
       const figures = legs.map(({ section }) => {
-        const { bendingStiffness, axialStiffness, massPerLength } = sections[section]!;
-        return `EI ${number(bendingStiffness)} EA ${number(axialStiffness)} mass ${massPerLength}`;
+        const { bendingStiffness, axialStiffness, massPerLength, shearStiffness } = sections[section]!;
+        return `EI ${number(bendingStiffness)} EA ${number(axialStiffness)} mass ${massPerLength} GAs ${number(shearStiffness)}`;
       });
-      return `${kind} ${name}: ${names}, ${[...new Set(figures)].join('; ')}`;
+      const ends = legs.map(({ startAttachment, endAttachment }) => [startAttachment ?? '', endAttachment ?? '']);
+      const attached = ends.flat().some(end => end !== '') ? `, ends ${JSON.stringify(ends)}` : '';
+      return `${kind} ${name}: ${names}, ${[...new Set(figures)].join('; ')}${attached}`;
     }),
     ...hinges.map(
       hinge => `hinge ${point(hinge.point)}${hinge.member === undefined ? '' : ` in ${member(hinge.member)}`}`,

@@ -1,13 +1,15 @@
 // The same structure said otherwise: with a member run the other way, with a point more, in another order, in other units;
 // and with other stiffness and loads.
-import type { Leg, Load, Location, Point, Structure } from '../../src/model/structure.ts';
+import type { Attachment, Leg, Load, Location, Point, Structure } from '../../src/model/structure.ts';
 
 /** The member runs from its last point to its first. */
 export function reversed(structure: Structure, member: number): Structure {
   const old = structure.members[member]!;
   const legs = old.legs.toReversed().map(
-    (leg): Leg => ({
+    ({ startAttachment, endAttachment, ...leg }): Leg => ({
       ...leg,
+      ...(endAttachment !== undefined && { startAttachment: endAttachment }),
+      ...(startAttachment !== undefined && { endAttachment: startAttachment }),
       from: leg.to,
       to: leg.from,
       start: old.length - leg.start - leg.length,
@@ -59,9 +61,16 @@ export function subdivided(structure: Structure, member: number, leg: number, fr
     range: from.range,
   };
   const index = structure.points.length;
+  const { startAttachment, endAttachment, ...middle } = whole;
   const halves: Leg[] = [
-    { ...whole, to: index, length: first },
-    { ...whole, from: index, start: whole.start + first, length: whole.length - first },
+    { ...middle, ...(startAttachment !== undefined && { startAttachment }), to: index, length: first },
+    {
+      ...middle,
+      ...(endAttachment !== undefined && { endAttachment }),
+      from: index,
+      start: whole.start + first,
+      length: whole.length - first,
+    },
   ];
   const legs = old.legs.toSpliced(leg, 1, ...halves);
   return {
@@ -146,6 +155,7 @@ export function inUnits(structure: Structure, length: number, force: number): St
       ...section,
       bendingStiffness: stiff(section.bendingStiffness, force * length ** 2),
       axialStiffness: stiff(section.axialStiffness, force),
+      ...(section.shearStiffness !== undefined && { shearStiffness: section.shearStiffness * force }),
       // Such that mass times gravity comes out as force per length.
       massPerLength: stiff(section.massPerLength, force / length),
       depth: stiff(section.depth, length),
@@ -153,7 +163,12 @@ export function inUnits(structure: Structure, length: number, force: number): St
     members: structure.members.map(member => ({
       ...member,
       length: member.length * length,
-      legs: member.legs.map(leg => ({ ...leg, start: leg.start * length, length: leg.length * length })),
+      legs: member.legs.map(leg => ({
+        ...leg,
+        ...attachments(leg, force * length),
+        start: leg.start * length,
+        length: leg.length * length,
+      })),
     })),
     supports: structure.supports.map(support => ({
       ...support,
@@ -175,11 +190,26 @@ export function stiffened(structure: Structure, factor: number): Structure {
       ...section,
       bendingStiffness: stiff(section.bendingStiffness),
       axialStiffness: stiff(section.axialStiffness),
+      ...(section.shearStiffness !== undefined && { shearStiffness: section.shearStiffness * factor }),
+    })),
+    members: structure.members.map(member => ({
+      ...member,
+      legs: member.legs.map(leg => ({ ...leg, ...attachments(leg, factor) })),
     })),
     supports: structure.supports.map(support => ({
       ...support,
       restraints: support.restraints.map(({ freedom, stiffness }) => ({ freedom, stiffness: stiffness * factor })),
     })),
+  };
+}
+
+/** The ends of a leg, connections stiffer by a factor. */
+function attachments({ startAttachment, endAttachment }: Leg, factor: number): Partial<Leg> {
+  const stiffer = ({ turning, ...rest }: Attachment): Attachment =>
+    turning === undefined ? rest : { ...rest, turning: turning * factor };
+  return {
+    ...(startAttachment !== undefined && { startAttachment: stiffer(startAttachment) }),
+    ...(endAttachment !== undefined && { endAttachment: stiffer(endAttachment) }),
   };
 }
 

@@ -182,3 +182,19 @@ describe('elsewhere', () => {
     expect(line).toContain('\\<b\\>\\*x\\*\\</b\\> \\[a\\](http\\://b)');
   });
 });
+
+test('on a point or a joint, how members are attached there', () => {
+  const text = `section P: EI 1 MN m2, EA 40 MN
+member B1, P: A -- 3 m -- B -- 3 m -- C
+support A: fixed
+support C: fixed
+conn¦ection A in B1: 850 kN m/rad
+release B in B1: axial
+load dead: 1 kN/m down on B1
+find mid: deflection at B`;
+  expect(hoverLines(fenced(text.replace('conn¦ection A in', 'connection ¦A in')))).toContain(
+    'B1: semi-rigid, 850.0 kN m/rad',
+  );
+  const at = text.replace('¦', '').replace('release B in', 'release ¦B in');
+  expect(hoverLines(fenced(at))).toContain('B1: free along its axis');
+});

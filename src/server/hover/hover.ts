@@ -120,6 +120,8 @@ function cardOfStatement(
     }
     case 'support':
     case 'hinge':
+    case 'connection':
+    case 'release':
       return pointCard(owner, indexOf(owner.structure?.points, statement.point.text));
     case 'member':
     case 'bar':

@@ -1,8 +1,11 @@
 // Hovers on a point and on a support: where it stands, how far it moves, and what the support gives.
+
+import { attachmentsAt } from '../../model/joints.ts';
 import type { ResolvedMeasure } from '../../model/question.ts';
 import type { Structure } from '../../model/structure.ts';
 import type { Alternative, StructureResult } from '../../note/result.ts';
-import type { DisplayUnits } from '../../quantity/display.ts';
+import { MOMENT } from '../../quantity/dimension.ts';
+import { type DisplayUnits, showQuantity } from '../../quantity/display.ts';
 import { length } from '../words.ts';
 import type { Card, Row } from './card.ts';
 import { alternativesOf, inWords, measuredOf, type Reading, readingOf } from './reading.ts';
@@ -20,7 +23,23 @@ export function pointCard(result: StructureResult, index: number): Card | undefi
   const rows = isSolved(result)
     ? [...movementRows(structure, index, result), ...(support >= 0 ? reactionRows(structure, support, result) : [])]
     : [];
-  return { title: point.name, about, rows };
+  return { title: point.name, about, rows: [...jointRows(structure, index, display), ...rows] };
+}
+
+/** How members are attached there other than rigidly, `R1: semi-rigid, 850.0 kN m/rad`; the hinge has its symbol. */
+function jointRows({ members }: Structure, point: number, units: DisplayUnits): Row[] {
+  return members.flatMap(member => {
+    const ends = attachmentsAt(member, point);
+    const freed = [...new Set(ends.flatMap(end => end.freed))];
+    const turning = ends.find(end => end.turning !== undefined)?.turning;
+    const words = [
+      ...(turning === undefined
+        ? []
+        : [`semi-rigid, ${showQuantity({ value: turning, dimension: MOMENT }, units).text}/rad`]),
+      ...freed.map(force => (force === 'axial' ? 'free along its axis' : 'free across its axis')),
+    ];
+    return words.length === 0 ? [] : [{ label: member.name, text: words.join(', ') }];
+  });
 }
 
 function isSolved({ analysis }: StructureResult): boolean {
