@@ -61,7 +61,13 @@ export interface LabelAt {
   readonly largest: number;
 }
 
-export function labelOf({ reading, beside }: Told, at: LabelAt): LabelRequest {
+/** What of a reading its words are made of. */
+export type Value = Pick<Reading, 'value' | 'distance' | 'kind'>;
+
+export function labelOf(
+  { reading, beside }: { readonly reading: Value; readonly beside: boolean },
+  at: LabelAt,
+): LabelRequest {
   const side = sideOf(reading.value, at.leg, FIELD_STYLES[at.field]);
   const rank = Math.abs(reading.value) / at.largest;
   return {
@@ -74,7 +80,7 @@ export function labelOf({ reading, beside }: Told, at: LabelAt): LabelRequest {
 }
 
 /** The longest first. */
-function wordings({ value, distance, kind }: Reading, side: Spot, { field, from, units }: LabelAt): Label[] {
+function wordings({ value, distance, kind }: Value, side: Spot, { field, from, units }: LabelAt): Label[] {
   const place = joined(`, ${withUnit(distance, units.length)} from `, [pointName(from)]);
   switch (field) {
     case 'axial':
@@ -102,7 +108,7 @@ function placesOver(side: Spot, { spot }: LabelAt): Place[] {
   ];
 }
 
-function placesBeside(reading: Reading, side: Spot, { spot, leg }: LabelAt): Place[] {
+function placesBeside(reading: Value, side: Spot, { spot, leg }: LabelAt): Place[] {
   const isOver = side.y < 0;
   const forwards = (reading.kind === 'before' ? -1 : 1) * (leg.along.x < 0 ? -1 : 1);
   const anchor = forwards > 0 ? 'start' : 'end';

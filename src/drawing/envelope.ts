@@ -1,53 +1,55 @@
-// The envelope of a field along a straight member: the outline of the largest and the least value of any alternative. The
-// outline is sampled, its told values are exact.
-import { evaluate } from '../mechanics/polynomial.ts';
-import type { MemberField } from '../mechanics/solution.ts';
+// The envelope of a field along a straight member: the outline of the greatest and the least value of any alternative, each
+// piece the polynomial of one of them.
+import { derivative, evaluate, extremes, type Polynomial, roots, shifted } from '../mechanics/polynomial.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
-import type { Acting } from './acting.ts';
 import { labelOf } from './beam-field-labels.ts';
 import { drawFieldTitle, fieldUnit, LABEL_ROOM, ORDINATE, TITLE_DOWN, TITLE_UP } from './beam-fields.ts';
+import { type Curve, curveTo, degreeOf } from './curves.ts';
 import { FIELD_STYLES, type FieldName } from './field-curves.ts';
 import { asGiven, spaced, THIN } from './figures.ts';
-import { path, type Spot } from './geometry.ts';
+import { path, px, type Spot } from './geometry.ts';
 import { roundedExaggeration } from './moved-shape.ts';
 import { placeLabels } from './placing.ts';
-import { localExtremes, type Quantity, type Reading } from './readings.ts';
 import type { Sheet } from './sheet.ts';
 import { type DrawnLeg, spotOnLeg } from './view.ts';
 import { joined } from './words.ts';
+
+/** A stretch of an outline, m along the member, in s = distance − start. */
+export interface OutlinePiece {
+  readonly start: number;
+  readonly end: number;
+  readonly polynomial: Polynomial;
+  /** Of the alternative that gives it. */
+  readonly name: string;
+}
+
+export interface Envelope {
+  /** What it is taken under. */
+  readonly name: string;
+  /** From the member's start to its end, without gaps. */
+  readonly greatest: readonly OutlinePiece[];
+  readonly least: readonly OutlinePiece[];
+}
 
 export interface EnvelopeAt {
   /** Of the member, set level; on the axis once it is known. */
   readonly legsAt: (axis: number) => readonly DrawnLeg[];
   readonly from: string;
   readonly units: DisplayUnits;
-  /** What the envelope is taken under. */
-  readonly name: string;
   readonly pxPerMetre: number;
   readonly top: number;
 }
 
-/** Between two places of the outline, as a share of a piece. */
-const SAMPLES = 24;
-
 /** One field of one member under several alternatives; returns the height at which it ends. */
-export function drawEnvelope(
-  sheet: Sheet,
-  fields: readonly { readonly acting: Acting; readonly field: MemberField }[],
-  name: FieldName,
-  at: EnvelopeAt,
-): number {
-  const { quantity, side, line, wash, hue } = FIELD_STYLES[name];
-  const hull = hullOf(
-    fields.map(({ field }) => field),
-    quantity,
-  );
-  const largest = Math.max(...hull.map(({ greatest, least }) => Math.max(greatest, -least)), 0);
+export function drawEnvelope(sheet: Sheet, envelope: Envelope, name: FieldName, at: EnvelopeAt): number {
+  const { side, line, wash, hue } = FIELD_STYLES[name];
+  const outlines = [beyondAxis(envelope.greatest, 1), beyondAxis(envelope.least, -1)] as const;
+  const peaks = outlines.map(peakOf);
+  const largest = Math.max(...peaks.map(peak => Math.abs(peak?.value ?? 0)));
   if (largest === 0) return at.top;
   const exaggeration = name === 'movement' ? roundedExaggeration(ORDINATE.movement / (largest * at.pxPerMetre)) : 1;
   const scale = name === 'movement' ? exaggeration * at.pxPerMetre : ORDINATE[name] / largest;
-  const greatest = Math.max(0, ...hull.map(one => one.greatest));
-  const least = Math.max(0, ...hull.map(one => -one.least));
+  const [greatest, least] = [peaks[0]?.value ?? 0, -(peaks[1]?.value ?? 0)];
   // Positive values lie over the axis where the side is 1.
   const [above, below] = side === 1 ? [greatest, least] : [least, greatest];
   const up = Math.max(TITLE_UP, above * scale + (above > 0 ? LABEL_ROOM : 0));
@@ -59,62 +61,96 @@ export function drawEnvelope(
     const base = leg === undefined ? { x: 0, y: axis } : spotOnLeg(leg, distance);
     return { x: base.x, y: base.y - side * scale * value };
   };
-  const [first, last] = [hull[0], hull.at(-1)];
+  const [first, last] = [envelope.greatest[0], envelope.greatest.at(-1)];
   if (first === undefined || last === undefined) return at.top;
-  for (const bound of ['greatest', 'least'] as const) {
-    const outline = hull.map(one => spot(one.distance, one[bound]));
-    sheet.wash(wash, `${path(spot(first.distance, 0), ...outline, spot(last.distance, 0))}Z`);
-    sheet.line(line, path(spot(first.distance, 0), ...outline, spot(last.distance, 0)));
+  const [begin, end] = [spot(first.start, 0), spot(last.end, 0)];
+  for (const outline of outlines) {
+    const curves = outline.map(piece => curveOf(piece, spot, at.pxPerMetre, -side * scale));
+    const d = curves.map(curve => lineTo(curve.at(0)) + curveTo(curve)).join('');
+    sheet.wash(wash, `${path(begin)}${d}${lineTo(end)}Z`);
+    sheet.line(line, `${path(begin)}${d}${lineTo(end)}`);
   }
-  sheet.line('outline', path(spot(first.distance, 0), spot(last.distance, 0)));
-  const told = extremesOf(fields, quantity, largest);
+  sheet.line('outline', path(begin, end));
   placeLabels(
     sheet,
-    told.map(({ reading, acting }) => {
-      const dot = spot(reading.distance, reading.value);
-      const leg = legs[reading.piece.leg] ?? (legs[0] as DrawnLeg);
+    peaks.flatMap(peak => {
+      if (peak === undefined || Math.abs(peak.value) <= NEGLIGIBLE * largest) return [];
+      const dot = spot(peak.distance, peak.value);
+      const leg =
+        legs.find(({ leg: { start, length } }) => peak.distance <= start + length * (1 + 1e-9)) ?? legs.at(-1);
+      if (leg === undefined) return [];
       sheet.dot(hue, dot, 2.3);
       const request = labelOf(
-        { reading, beside: false },
+        { reading: peak, beside: false },
         { field: name, spot: dot, leg, from: at.from, units: at.units, largest },
       );
-      return { ...request, labels: request.labels.map(label => joined(label, `, ${acting.name}`)) };
+      return { ...request, labels: request.labels.map(label => joined(label, `, ${peak.name}`)) };
     }),
   );
   const note = name === 'movement' ? `drawn ×${THIN}${asGiven(exaggeration, { text: '', size: 1 })}` : 'envelope';
-  drawFieldTitle(sheet, name, axis, [`${spaced(fieldUnit(name, at.units).text)}, ${at.name}`, note]);
+  drawFieldTitle(sheet, name, axis, [`${spaced(fieldUnit(name, at.units).text)}, ${envelope.name}`, note]);
   return axis + down;
 }
 
-interface HullPlace {
+/** A value smaller than this share of the largest is rounding. */
+const NEGLIGIBLE = 1e-9;
+
+/** What of an outline lies beyond the axis; where it would cross, it runs along the axis. */
+function beyondAxis(outline: readonly OutlinePiece[], sense: 1 | -1): OutlinePiece[] {
+  return outline.flatMap(({ start, end, polynomial, name }) => {
+    const length = end - start;
+    const cuts = [0, ...roots(polynomial, 0, length).filter(s => s > 0 && s < length), length];
+    return cuts.slice(1).map((to, i): OutlinePiece => {
+      const from = cuts[i] as number;
+      const isBeyond = sense * evaluate(polynomial, 0.5 * (from + to)) > 0;
+      return {
+        start: start + from,
+        end: to === length ? end : start + to,
+        polynomial: isBeyond ? shifted(polynomial, from) : [0],
+        name,
+      };
+    });
+  });
+}
+
+interface Peak {
   readonly distance: number;
-  /** Never below zero, and never above it. */
-  readonly greatest: number;
-  readonly least: number;
+  readonly value: number;
+  readonly kind: 'level' | 'before' | 'after';
+  readonly name: string;
 }
 
-/** Pieces break at the same places under every alternative. */
-function hullOf(fields: readonly MemberField[], quantity: Quantity): HullPlace[] {
-  const pieces = fields[0]?.pieces ?? [];
-  return pieces.flatMap((piece, p) =>
-    Array.from({ length: SAMPLES + 1 }, (_, i): HullPlace => {
-      const s = ((piece.end - piece.start) * i) / SAMPLES;
-      const values = fields.map(field => evaluate(field.pieces[p]?.[quantity] ?? [], s));
-      return { distance: piece.start + s, greatest: Math.max(0, ...values), least: Math.min(0, ...values) };
-    }),
-  );
+/** The place farthest from the axis, the first of equals; a place of level slope before an end. */
+function peakOf(outline: readonly OutlinePiece[]): Peak | undefined {
+  let peak: Peak | undefined;
+  for (const { start, end, polynomial, name } of outline) {
+    const length = end - start;
+    for (const s of extremes(polynomial, 0, length)) {
+      const value = evaluate(polynomial, s);
+      if (Math.abs(value) <= Math.abs(peak?.value ?? 0) * (1 + NEGLIGIBLE)) continue;
+      const kind = s === 0 ? 'after' : s === length ? 'before' : 'level';
+      peak = { distance: s === length ? end : start + s, value, kind, name };
+    }
+  }
+  return peak;
 }
 
-/** The greatest and the least of all, with the alternative that gives it. */
-function extremesOf(
-  fields: readonly { readonly acting: Acting; readonly field: MemberField }[],
-  quantity: Quantity,
-  largest: number,
-): { readonly reading: Reading; readonly acting: Acting }[] {
-  const all = fields.flatMap(({ acting, field }) =>
-    localExtremes(field, quantity, largest).map(reading => ({ reading, acting })),
-  );
-  const greatest = all.filter(({ reading }) => reading.value > 0).sort((a, b) => b.reading.value - a.reading.value)[0];
-  const least = all.filter(({ reading }) => reading.value < 0).sort((a, b) => a.reading.value - b.reading.value)[0];
-  return [greatest, least].flatMap(one => one ?? []);
+/** `across`: px downwards for one unit. */
+function curveOf(
+  { start, end, polynomial }: OutlinePiece,
+  spot: (distance: number, value: number) => Spot,
+  pxPerMetre: number,
+  across: number,
+): Curve {
+  const slope = derivative(polynomial);
+  return {
+    length: end - start,
+    degree: degreeOf(polynomial, end - start),
+    at: s => spot(start + s, evaluate(polynomial, s)),
+    slope: s => ({ x: pxPerMetre, y: across * evaluate(slope, s) }),
+  };
+}
+
+function lineTo({ x, y }: Spot): string {
+  return `L${px(x)} ${px(y)}`;
 }

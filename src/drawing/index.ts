@@ -1,7 +1,8 @@
 // The public face of the drawing room: structures, loads and fields as SVG.
 export type { Acting } from './acting.ts';
 export { caseSketch } from './case-sketch.ts';
-export type { FieldName } from './field-curves.ts';
+export type { Envelope, OutlinePiece } from './envelope.ts';
+export { FIELD_STYLES, type FieldName } from './field-curves.ts';
 export type { Panel } from './frame-fields.ts';
 export type { Palette } from './ink.ts';
 export { loadSum } from './load-sum.ts';

@@ -6,7 +6,7 @@ import { type Acting, SHEET_WIDTH } from './acting.ts';
 import { BETWEEN, drawBeamField } from './beam-fields.ts';
 import { drawBones } from './bones.ts';
 import { drawLevelDimensions } from './dimensions.ts';
-import { drawEnvelope } from './envelope.ts';
+import { drawEnvelope, type Envelope } from './envelope.ts';
 import { FIELD_STYLES, type FieldName } from './field-curves.ts';
 import type { Palette } from './ink.ts';
 import { placeLabels } from './placing.ts';
@@ -19,10 +19,10 @@ export interface MemberPlate {
   /** Index into the structure's members. */
   readonly member: number;
   readonly field: FieldName;
-  /** One strip each, or all in one envelope. Only those with a solution are drawn. */
+  /** One strip each, but for an envelope. Only those with a solution are drawn. */
   readonly acting: readonly Acting[];
-  /** What the envelope is taken under; undefined: no envelope, one strip an alternative. */
-  readonly envelope: string | undefined;
+  /** Undefined: no envelope, one strip an alternative. */
+  readonly envelope: Envelope | undefined;
 }
 
 const LEFT = 96.5;
@@ -51,17 +51,13 @@ export function memberPlate(
       top = drawBeamField(sheet, straight, solution, field, { view, units, name: one.name, top }).bottom + BETWEEN;
     }
   } else {
-    const fields = solved.flatMap(({ acting: one, solution }) =>
-      solution.members.map(of => ({ acting: one, field: of })),
-    );
-    top = drawEnvelope(sheet, fields, field, {
+    top = drawEnvelope(sheet, envelope, field, {
       legsAt: axis => {
         const onAxis = viewAt(straight, view.scale, LEFT, axis);
         return (straight.members[0]?.legs ?? []).map(leg => drawnLeg(0, leg, onAxis));
       },
       from: straight.points[0]?.name ?? '',
       units,
-      name: envelope,
       pxPerMetre: view.scale,
       top,
     });

@@ -25,6 +25,16 @@ export function sum(a: Polynomial, b: Polynomial, factorA = 1, factorB = 1): Pol
   return result;
 }
 
+/** The same values by coefficients of x − by. */
+export function shifted(polynomial: Polynomial, by: number): Polynomial {
+  // Synthetic division by x − by, once for each coefficient.
+  const result = [...polynomial];
+  for (let k = 0; k < result.length; k++) {
+    for (let power = result.length - 2; power >= k; power--) result[power]! += by * result[power + 1]!;
+  }
+  return result;
+}
+
 /** No value on the stretch from 0 to `length` is larger in size, and rounding in a value is a few ε of this. */
 export function bound(polynomial: Polynomial, length: number): number {
   let value = 0;

@@ -1,9 +1,21 @@
 // What a `show` statement asks to see of a field: one member's moment, shear, force or movement, or an envelope of it.
-import { type Acting, type FieldName, memberPlate } from '../drawing/index.ts';
+import {
+  type Acting,
+  type Envelope,
+  FIELD_STYLES,
+  type FieldName,
+  memberPlate,
+  type OutlinePiece,
+} from '../drawing/index.ts';
 import type { MeasureKind, ShowBody, Under } from '../language/syntax.ts';
+import { envelopeAlong, type LinearQuantity, roundingIn, shifted } from '../mechanics/index.ts';
+import type { Solution } from '../mechanics/solution.ts';
+import { loadedInWords, spansUnder } from '../model/patterns.ts';
 import type { Structure } from '../model/structure.ts';
 import type { Combination, StructureResult } from '../note/result.ts';
-import { escapeHtml } from './html.ts';
+import { LENGTH } from '../quantity/dimension.ts';
+import { type DisplayUnits, showQuantity } from '../quantity/display.ts';
+import { escapeHtml, plainHtml } from './html.ts';
 import { alternativeName } from './reactions-table.ts';
 
 type ShownField = Extract<ShowBody, { readonly kind: 'field' }>;
@@ -20,14 +32,84 @@ export function shownField(result: StructureResult, structure: Structure, show: 
   if (field === undefined || members.length === 0 || combinations.length === 0 || !isSolved) return undefined;
   const acting = actingOf(combinations);
   const under = show.under?.kind === 'all' ? 'all' : (combinations[0]?.name ?? '');
-  const envelope = show.envelope ? under : undefined;
   const drawings = members.slice(0, MOST).map(member => {
-    const plate = { member, field, acting: show.envelope ? acting : acting.slice(0, MOST), envelope };
-    return `<figure>${memberPlate(structure, plate, result.display)}</figure>`;
+    const envelope = show.envelope ? envelopeOf(result, structure, member, field, acting, under) : undefined;
+    const plate = { member, field, acting: acting.slice(0, MOST), envelope };
+    const drawn = `<figure>${memberPlate(structure, plate, result.display)}</figure>`;
+    return envelope === undefined ? drawn : `${drawn}${governingWords(envelope, structure, member, result.display)}`;
   });
   const what = `${show.envelope ? 'Envelope of ' : ''}${show.measure.kind} in ${show.measure.in?.text ?? ''}`;
   const title = what.charAt(0).toUpperCase() + what.slice(1);
   return `<div class="tl-keep"><h3>${escapeHtml(title)} <small>${escapeHtml(under)}</small></h3>${drawings.join('')}</div>`;
+}
+
+/** Exact over all alternatives, each with the spans loaded that are worst at a place. */
+function envelopeOf(
+  { analysis }: StructureResult,
+  { cases }: Structure,
+  member: number,
+  field: FieldName,
+  acting: readonly Acting[],
+  under: string,
+): Envelope {
+  if (analysis === undefined) throw new Error('an envelope of a structure without an analysis was asked for');
+  const { quantity } = FIELD_STYLES[field];
+  const kind = ({ moment: 'moment', movement: 'movement', shear: 'force', axial: 'force' } as const)[field];
+  const quantityOf = (solution: Solution): LinearQuantity => ({
+    polynomial: piece => piece[quantity],
+    rounding: () => roundingIn(solution, kind),
+  });
+  const alternatives = acting.map(({ factors }) => factors);
+  // Of a patterned case alone the name says no more than its spans do.
+  const isAlone = (name: string): boolean => cases.some(one => one.span !== undefined && one.name === name);
+  const outline = (sense: 1 | -1): OutlinePiece[] =>
+    envelopeAlong(analysis, member, quantityOf, alternatives, sense).map(
+      ({ start, from, end, polynomial, alternative, factors }) => {
+        const { name, factors: all } = acting[alternative] as Acting;
+        const loaded = loadedInWords(cases, spansUnder(cases, all), k => factors[k] !== 0);
+        return {
+          start: start + from,
+          end,
+          polynomial: shifted(polynomial, from),
+          name: isAlone(name) ? loaded.join() : [name, ...loaded].join(', '),
+        };
+      },
+    );
+  return { name: under, greatest: outline(1), least: outline(-1) };
+}
+
+/** So many stretches are told of each outline. */
+const MOST_STRETCHES = 8;
+
+/** Which alternative gives the greatest and the least values, stretch by stretch; nothing where there is one only. */
+function governingWords(
+  { greatest, least }: Envelope,
+  structure: Structure,
+  member: number,
+  units: DisplayUnits,
+): string {
+  const from = structure.points[structure.members[member]?.legs[0]?.from ?? 0]?.name ?? '';
+  const sentences = (
+    [
+      ['Greatest', greatest],
+      ['Least', least],
+    ] as const
+  ).map(([word, outline]) => {
+    const stretches: { name: string; end: number }[] = [];
+    for (const { name, end } of outline) {
+      const last = stretches.at(-1);
+      if (last?.name === name) last.end = end;
+      else stretches.push({ name, end });
+    }
+    const told = stretches.slice(0, MOST_STRETCHES).map(({ name, end }, i) => {
+      if (i === stretches.length - 1) return i === 0 ? `${name} throughout` : `${name} from there on`;
+      const to = showQuantity({ value: end, dimension: LENGTH }, units, 'length').text;
+      return i === 0 ? `${name} to ${to} from ${from}` : `${name} to ${to}`;
+    });
+    const more = stretches.length > MOST_STRETCHES ? `; ${stretches.length - MOST_STRETCHES} further stretches` : '';
+    return `${word}: ${told.join('; ')}${more}.`;
+  });
+  return `<p class="tl-aside">${plainHtml(sentences.join(' '))}</p>`;
 }
 
 const FIELDS: Readonly<Record<MeasureKind, FieldName | undefined>> = {

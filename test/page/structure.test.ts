@@ -214,6 +214,41 @@ describe('show', () => {
     expect(part).toContain('12.00\u2009kN\u2009m, tension below, c (b)');
   });
 
+  it('says which alternative gives an envelope, stretch by stretch', () => {
+    const html = render(
+      fenced(`section S: EI 4 MN m2
+member B1: A -- 4 m -- B
+support A: pinned
+support B: roller
+load near: 4 kN down at 1 m from A on B1
+load far: 4 kN down at 3 m from A on B1
+combine c (p): near
+combine c (q): far
+show: envelope of moment in B1 under c`),
+    );
+    const part = section(html, 'Envelope of moment in B1');
+    // 4 kN·m − x meets x at 2 m; at the loads 3 kN m.
+    expect(part).toContain('Greatest: c (p) to 2.000\u2009m from A; c (q) from there on.');
+    expect(part).toContain('Least: c (q) to 2.000\u2009m from A; c (p) from there on.');
+    expect(part).toContain('3.000\u2009kN\u2009m, tension below, c (p)');
+  });
+
+  it('draws the envelope of a patterned load with its spans', () => {
+    const html = render(
+      fenced(`section S: EI 4 MN m2
+member B1: A -- 4 m -- B -- 4 m -- C
+support A: pinned
+support B: roller
+support C: roller
+load live: 3 kN/m down on B1, patterned
+show: envelope of moment in B1 under live`),
+    );
+    const part = section(html, 'Envelope of moment in B1');
+    // wL²/8 with both spans; 49/512 wL² with one.
+    expect(part).toContain('6.000\u2009kN\u2009m, tension above, live on A–B, B–C');
+    expect(part).toContain('4.594\u2009kN\u2009m, tension below, 1.750\u2009m from ');
+  });
+
   it('says what this version does not draw', () => {
     expect(wordsOf(render(fenced(`${CANTILEVER}find tip: deflection at B\nshow: working of tip`)))).toContain(
       'working of tip: not drawn by this version.',

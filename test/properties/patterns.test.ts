@@ -1,7 +1,18 @@
 // The worst set of loaded spans is found without trying any: it is as bad as the worst of all sets, tried one by one.
 import fc from 'fast-check';
 import { expect } from 'vitest';
-import { combine, measure, worstPatterns } from '../../src/mechanics/index.ts';
+import {
+  combine,
+  envelopeAlong,
+  evaluate,
+  type FieldPiece,
+  fieldAt,
+  measure,
+  roundingIn,
+  type Solution,
+  sizesOf,
+  worstPatterns,
+} from '../../src/mechanics/index.ts';
 import { dividePatterns, spansUnder } from '../../src/model/patterns.ts';
 import type { ResolvedMeasure } from '../../src/model/question.ts';
 import type { Structure } from '../../src/model/structure.ts';
@@ -46,6 +57,43 @@ holds('the worst set of spans', fc.tuple(structures(), fc.nat(999), fc.nat(99)),
         rounding,
       );
     }
+  }
+});
+
+holds('an envelope over sets of spans and alternatives', fc.tuple(structures(), fc.nat(999)), ([plain, number]) => {
+  const structure = patterned(plain);
+  const alternatives = [1, 2].map(turn => structure.cases.map((_, k) => [1, -0.4, 1.5, 0][(turn * k + turn) % 4]!));
+  const analysis = analysed(structure);
+  const member = number % structure.members.length;
+  const sets = alternatives.flatMap(factors => {
+    const spans = spansUnder(structure.cases, factors);
+    return Array.from({ length: 2 ** spans.length }, (_, set) =>
+      combine(
+        analysis,
+        factors.map((factor, k) => (spans.includes(k) && ((set >> spans.indexOf(k)) & 1) === 0 ? 0 : factor)),
+      ),
+    );
+  });
+  const scale = Math.max(...sets.map(solution => sizesOf(solution).moment));
+  for (const sense of [1, -1] as const) {
+    const quantityOf = (solution: Solution) => ({
+      polynomial: (piece: FieldPiece) => piece.bendingMoment,
+      rounding: () => roundingIn(solution, 'moment'),
+    });
+    const pieces = envelopeAlong(analysis, member, quantityOf, alternatives, sense);
+    let reached = 0;
+    for (const { start, from, to, end, polynomial, factors } of pieces) {
+      expect(start + from).toBeCloseTo(reached, 9);
+      reached = end;
+      const s = from + (0.1 + 0.008 * (number % 100)) * (to - from);
+      const distance = start + s;
+      const all = sets.map(({ members }) => fieldAt(members[member]!, distance).bendingMoment);
+      const own = fieldAt(combine(analysis, factors).members[member]!, distance).bendingMoment;
+      const value = evaluate(polynomial, s);
+      expect(Math.abs(sense * value - Math.max(...all.map(one => sense * one)))).toBeLessThanOrEqual(1e-9 * scale);
+      expect(Math.abs(value - own)).toBeLessThanOrEqual(1e-9 * scale);
+    }
+    expect(reached).toBeCloseTo(structure.members[member]!.length, 9);
   }
 });
 
