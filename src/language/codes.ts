@@ -31,6 +31,7 @@ export const CODES = {
   'point-not-placed': 'A point that nothing places.',
   'missing-property': 'A section or a material lacks a figure that is needed.',
   'assumed-modulus': 'A section from a table gives no modulus, and that of a symmetrical section is taken.',
+  'idle-connection': 'A semi-rigid connection to a joint that turns freely, so that no moment passes.',
   'bad-support': 'A support that cannot be read, or stands where nothing is.',
   'bad-load': 'A load that cannot act where it is put.',
   'upper-side': 'Heat above and below on a member whose upper side, the one left of its travel, does not lie above.',

@@ -138,7 +138,9 @@ class Joints {
     }
     const [before, after] = this.#endsAt(end);
     // A member that runs on by itself is joined side to side, once; any other is joined to the joint.
-    const ends = after !== undefined && !this.#turnsWithOthers(end) ? [after] : [before, after];
+    const alone = !this.#turnsWithOthers(end);
+    const ends = after !== undefined && alone ? [after] : [before, after];
+    if (after === undefined && alone) this.#warnIdle(statement);
     for (const at of ends) if (at !== undefined) this.#attachment(at).turning = stiffness;
   }
 
@@ -196,6 +198,15 @@ class Joints {
     return second === undefined ? [first!] : [first!, second];
   }
 
+  #warnIdle({ point, member }: StatementOf<'connection'>): void {
+    this.#report.warn(
+      'idle-connection',
+      point.range,
+      `Nothing else holds the rotation at ${point.text}: the connection of ${member.text} passes no moment.`,
+      { hint: `hold the rotation of ${point.text}, or give its support a spring: spring 850 kN m/rad rotation` },
+    );
+  }
+
   /** Whether a joint there turns with more than this member: another one fixed to it, or a support that resists rotation. */
   #turnsWithOthers({ point, member }: MemberEnd): boolean {
     const resisted = this.#supports.some(
@@ -205,7 +216,10 @@ class Joints {
       resisted ||
       this.#members.some(
         ({ kind, legs }, other) =>
-          other !== member && kind === 'member' && legs.some(({ from, to }) => from === point || to === point),
+          other !== member &&
+          kind === 'member' &&
+          legs.some(({ from, to }) => from === point || to === point) &&
+          !this.#hinges.some(hinge => hinge.point === point && hinge.member === other),
       )
     );
   }

@@ -28,6 +28,7 @@ const names = (...namespaces: readonly Namespace[]): Offer[] => namespaces.map(n
 const words = (text: string): Offer => ({ words: text.split(' | ') });
 
 const VALUES: readonly Offer[] = [...names('value', 'result'), { words: VALUE_WORDS }];
+const FREED = words('axial | shear | moment');
 const SUPPORTS = words('pinned | roller | fixed | guided | hold | spring | bears only');
 const SECTION_KEYS = words('turned | I | A | EI | EA | GAs | depth | modulus | shear-area');
 const MATERIAL_KEYS = words('E | G | density | alpha | fy');
@@ -56,6 +57,7 @@ const BODY: Readonly<Partial<Record<StatementKind, readonly Offer[]>>> = {
   display: [DISPLAY],
   assume: [words('shear deformation | axially stiff')],
   show: [SHOWN, { measures: true }],
+  release: [FREED],
   carry: [words('reaction of')],
 };
 
@@ -80,6 +82,7 @@ const ROWS: readonly Row[] = [
     offers,
   })),
   { of: ['support'], behind: /,\s*$/, offers: [SUPPORTS] },
+  { of: ['release'], behind: /,\s*$/, offers: [FREED] },
   { of: ['section'], behind: /,\s*$/, offers: [...names('material'), SECTION_KEYS] },
   { of: ['material'], behind: /,\s*$/, offers: [MATERIAL_KEYS] },
   { of: ['group', 'load'], behind: /,\s*$/, offers: names('member') },

@@ -80,6 +80,36 @@ find mid: deflection at B`);
     expect(left[0]! / left[1]!).toBeCloseTo(10, 2);
   });
 
+  it('warms: a gradient bends the ends by EIκ / (1 + 2EI/kL)', () => {
+    const note = solved(`
+section S: EI 10 MN m2, EA 500 MN, depth 200 mm, alpha 12e-6 /K
+member R: A -- 4 m -- B
+support A: fixed
+support B: fixed
+connection A in R: 5 MN m/rad
+connection B in R: 5 MN m/rad
+load sun: heat R by 0 K above, 30 K below
+find root: moment at A in R
+find foot: rotation at A in R`);
+    expect(codesOf(note)).toEqual([]);
+    const [curvature, EI, k, span] = [(12e-6 * 30) / 0.2, 1e7, 5e6, 4];
+    const M = (EI * curvature) / (1 + (2 * EI) / (k * span));
+    // The underside is warmer and pressed: tension above. The end turns by M/k.
+    checkAnswers(note, { root: -M, foot: -M / k });
+  });
+
+  it('to a joint that turns freely is warned of', () => {
+    const codes = (lines: string) =>
+      codesOf(
+        solved(`${BEAM}${lines}
+load live: 3 kN down at B
+find mid: deflection at B`),
+      );
+    const line = 'support C: roller\nconnection A in R: 5 MN m/rad';
+    expect(codes(`support A: pinned\n${line}`)).toEqual(['idle-connection']);
+    expect(codes(`support A: hold x, y, spring 2 MN m/rad rotation\n${line}`)).toEqual([]);
+  });
+
   it('counts as rigid among the redundants', () => {
     const redundancy = (line: string) =>
       solved(`${BEAM}\nsupport A: fixed\nsupport C: fixed\nload live: 3 kN down at B\n${line}\nfind x1: sway at B`)
@@ -139,6 +169,21 @@ find push: force in R`);
     const stiffness = (4 * EI) / h + (4 * EI) / span;
     const u = H / ((12 * EI) / h ** 3 - (6 * EI) ** 2 / h ** 4 / stiffness);
     checkAnswers(note, { shift: u, turn: (-6 * EI * u) / h ** 2 / stiffness, push: 0 });
+  });
+
+  it('of the axial force lets a stiff member grow by heat', () => {
+    const note = solved(`
+material M: E 200 GPa, alpha 12e-6 /K
+section S: EI 10 MN m2, M
+member R: A -- 4 m -- B
+support A: fixed
+support B: fixed
+release B in R: axial
+load sun: heat R by 30 K
+find push: force in R
+find grow: sway of R`);
+    expect(codesOf(note)).toEqual([]);
+    checkAnswers(note, { push: 0, grow: 12e-6 * 30 * 4 });
   });
 
   it('of the shear lets the sides slide past each other, and not turn', () => {
