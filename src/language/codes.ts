@@ -39,6 +39,14 @@ export const CODES = {
   'bad-combination': 'A combination that cannot be worked.',
   'bad-question': 'A question that has no answer as it stands.',
   'unstable-structure': 'Something can move freely.',
+  'nearly-unstable': 'Something hardly resists a movement; past a condition of 1e13 the answers are withheld.',
+  'unused-combination': 'A combination that no question asks about.',
+  // doubts about results
+  'large-movement': 'A movement is more than a fiftieth of the length that it goes across.',
+  'slender-compression': 'A compression is more than the elastic critical force of the member on its own length.',
+  'unasked-uplift': 'A support must hold down, and no question asks about its reaction.',
+  'idle-member': 'A member carries no load and no force in any case.',
+  'no-weight': 'A self-weight is zero, as the density is.',
   // results
   'limit-exceeded': 'A requirement is not met.',
   'limit-without-source': 'A limit has no source.',

@@ -14,7 +14,8 @@ import { loadingOf } from './loading.ts';
 import { findMechanisms } from './mechanisms.ts';
 import { type Response, respond } from './response.ts';
 import { type Loading, SEGMENT_NUMBERS } from './shares.ts';
-import type { Analysis, CaseParts, Conflict, Mechanism, Reaction, Solution } from './solution.ts';
+import { softestMovement } from './softest.ts';
+import type { Analysis, CaseParts, Conflict, Mechanism, Reaction, Solution, Stability } from './solution.ts';
 import { project } from './supports.ts';
 import { prepareSystem, type System } from './system.ts';
 
@@ -25,11 +26,14 @@ export const MAX_FREEDOMS = 300_000;
 export const MAX_PIECES = 600_000;
 
 /**
- * A structure whose stiffness matrix is worse conditioned than this may be unstable, and its geometry is looked at. One
- * that is unstable comes out at 1 / ε or so, or Infinity, and the estimate is short of the truth by a factor of
- * ten at most.
+ * A structure whose stiffness matrix is worse conditioned than this may be unstable, and its geometry is looked at; where
+ * nothing is free, it is nearly unstable, and what it resists least is found. One that is unstable comes out at 1 / ε
+ * or so, or Infinity, and the estimate is short of the truth by a factor of ten at most.
  */
-const SUSPICIOUS_CONDITION = 1e10;
+export const SUSPICIOUS_CONDITION = 1e10;
+
+/** Past this condition too few of sixteen digits are left for an answer, whatever the checks say. */
+export const MAX_CONDITION = 1e13;
 
 export function analyse(structure: Structure): Analysis {
   if (boundFreedoms(structure) > MAX_FREEDOMS) return unanalysed(structure, 'freedoms');
@@ -37,13 +41,10 @@ export function analyse(structure: Structure): Analysis {
   if (system === undefined) return unanalysed(structure, 'axially-stiff');
   if (system.segments.count * structure.cases.length > MAX_PIECES) return unanalysed(structure, 'cases');
 
-  const condition = conditionEstimate(system.matrix, system.factorisation);
-  const suspicious = condition > SUSPICIOUS_CONDITION || hasIdleUnknown(system);
-  const mechanisms = suspicious ? findMechanisms(system) : [];
-  if (mechanisms.length > 0) return { ...unanalysed(structure), stability: unstable(mechanisms) };
+  const stability = stabilityOf(system);
+  if (!stability.stable) return { ...unanalysed(structure), stability };
 
   const redundancy = redundancyOf(system);
-  const stability = { stable: true, mechanisms, condition };
   const byCase = loadsByCase(structure);
   const imposed = byCase.map(loads => imposedBy(structure, loads, system.legs, system.freedoms, system.reduction));
   const conflict = findConflict(system, imposed);
@@ -70,7 +71,23 @@ export function analyse(structure: Structure): Analysis {
   return { structure, stability, redundancy, cases, parts };
 }
 
-function unstable(mechanisms: readonly Mechanism[]) {
+/** Whether a structure is stable, without its response to loads; undefined where it is too large to say. */
+export function findStability(structure: Structure): Stability | undefined {
+  if (boundFreedoms(structure) > MAX_FREEDOMS) return undefined;
+  const system = prepareSystem(structure);
+  return system && stabilityOf(system);
+}
+
+function stabilityOf(system: System): Stability {
+  const condition = conditionEstimate(system.matrix, system.factorisation);
+  const suspicious = condition > SUSPICIOUS_CONDITION;
+  const mechanisms = suspicious || hasIdleUnknown(system) ? findMechanisms(system) : [];
+  if (mechanisms.length > 0) return unstable(mechanisms);
+  const softest = suspicious ? softestMovement(system) : undefined;
+  return { stable: true, mechanisms, condition, ...(softest && { softest }) };
+}
+
+function unstable(mechanisms: readonly Mechanism[]): Stability {
   return { stable: false, mechanisms, condition: Number.POSITIVE_INFINITY };
 }
 

@@ -18,7 +18,9 @@ export function findMechanisms(system: System): readonly Mechanism[] {
     for (const movement of rigidMovements(system, part, turning)) rigid.push({ movement, part });
     if (rigid.length >= MAX_MECHANISMS) break;
   }
-  const mechanisms = rigid.slice(0, MAX_MECHANISMS).map(({ movement }) => describe(system, 'rigid-body', movement));
+  const mechanisms = rigid
+    .slice(0, MAX_MECHANISMS)
+    .map(({ movement }) => describeMovement(system, 'rigid-body', movement));
   if (rigid.length >= MAX_MECHANISMS) return mechanisms;
 
   const { reduction, freedoms } = system;
@@ -30,7 +32,7 @@ export function findMechanisms(system: System): readonly Mechanism[] {
   });
   holdStill(system, rigid, free);
   simplify(system, free);
-  for (const movement of free) mechanisms.push(describe(system, 'mechanism', movement));
+  for (const movement of free) mechanisms.push(describeMovement(system, 'mechanism', movement));
   return mechanisms.slice(0, MAX_MECHANISMS);
 }
 
@@ -110,7 +112,8 @@ function eliminate(vector: Float64Array, by: Float64Array, pivot: number): void 
   vector[pivot] = 0;
 }
 
-function describe(system: System, kind: Mechanism['kind'], movement: Float64Array): Mechanism {
+/** A movement by freedom in the terms of points and members. */
+export function describeMovement(system: System, kind: Mechanism['kind'], movement: Float64Array): Mechanism {
   const { structure, legs, freedoms } = system;
   const { first, startRotation, endRotation, size } = freedoms;
   const { movements, still } = globalMovements(system, movement);

@@ -41,6 +41,8 @@ export interface Stability {
   readonly mechanisms: readonly Mechanism[];
   /** Estimate of the condition of the scaled stiffness matrix (1-norm); Infinity when unstable. */
   readonly condition: number;
+  /** Of a stable structure that is nearly unstable: the movement that it resists least. */
+  readonly softest?: Mechanism;
 }
 
 export interface Mechanism {

@@ -15,11 +15,12 @@ import { type DisplayUnits, METRIC, readDisplay } from '../quantity/display.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import type { Range } from '../quantity/range.ts';
 import { answerTo, spanOf } from './answers.ts';
+import { doubtsOn } from './doubts.ts';
 import type { SourceSpan } from './fences.ts';
 import type { SolvedStructures } from './memory.ts';
 import { Descent, Once } from './once.ts';
 import { show } from './phrases.ts';
-import { remarksOn } from './remarks.ts';
+import { remarksOn, unusedSharedCombinations } from './remarks.ts';
 import type { Answer, Combination, NamedValue, ProseValue, StructureResult } from './result.ts';
 import { type Question, type Series, seriesOf } from './series.ts';
 import { StructureState } from './structure-state.ts';
@@ -99,7 +100,12 @@ export class NoteEvaluation {
     }
     const structures = this.#states.map((state, index) => this.#structureResult(state, index, answers));
     this.#reportHead();
-    for (const state of this.#states) remarksOn(state, this.#inputs.scopes.head, this.#unitsOf(state.scope));
+    for (const state of this.#states) {
+      const units = this.#unitsOf(state.scope);
+      remarksOn(state, this.#inputs.scopes.head, units);
+      doubtsOn(state, units);
+    }
+    unusedSharedCombinations(this.#inputs.scopes, this.#report);
     return { structures, answers, values };
   }
 
@@ -186,6 +192,7 @@ export class NoteEvaluation {
       display: this.#unitsOf(scope),
       shows: scope.statements.filter((statement): statement is StatementOf<'show'> => statement.kind === 'show'),
       withheld: state.withheld,
+      remedies: state.remedies,
     };
   }
 

@@ -1,157 +1,180 @@
-// An unstable structure in words: which points can move, which way, whether all of it or a part, and what would hold it.
+// What is said of a structure that is not held, or hardly: how it can move, how many restraints are missing, and which
+// changes were tried and found to hold it.
 import type { Diagnostic } from '../language/diagnostic.ts';
-import type { Analysis, Mechanism } from '../mechanics/solution.ts';
+import type { Statement, StatementOf } from '../language/syntax.ts';
+import {
+  type Analysis,
+  MAX_CONDITION,
+  MAX_MECHANISMS,
+  type Mechanism,
+  type Remedy,
+  SUSPICIOUS_CONDITION,
+} from '../mechanics/index.ts';
 import type { Structure } from '../model/structure.ts';
+import { describeMechanism, direction, list, movementOf, pointsInMotion } from './mechanism-words.ts';
 
-/** One diagnostic, at the structure's own line; the points that move are its related places. */
-export function describeInstability(structure: Structure, { stability }: Analysis): Diagnostic[] {
+/** Sets of changes, each tried and found to hold the structure, the least first. */
+export type Remedies = readonly (readonly Remedy[])[];
+
+/** One diagnostic, at the structure's own line; what moves and what lets it are its related places. */
+export function describeInstability(
+  structure: Structure,
+  { stability }: Analysis,
+  remedies: Remedies,
+  statements: readonly Statement[],
+): Diagnostic[] {
   const { mechanisms } = stability;
   const [first] = mechanisms;
   if (first === undefined) return [];
-  const sentences = mechanisms.slice(0, MOST_TOLD).map(mechanism => describe(structure, mechanism));
-  const more = mechanisms.length > MOST_TOLD ? ` There are ${mechanisms.length} ways to move in all.` : '';
-  const hint = mechanisms.length === 1 ? remedy(structure, first) : `${mechanisms.length} more restraints are needed`;
-  const related = first.points.slice(0, MOST_TOLD).map(index => {
-    const point = structure.points[index]!;
-    return { range: point.range, message: `${point.name} can move ${direction(movementOf(first, index))}.` };
-  });
+  const sentences = [...new Set(mechanisms.map(mechanism => describeMechanism(structure, mechanism)))];
+  const fix = fixFor(structure, remedies, statements);
   return [
     {
       code: 'unstable-structure',
       severity: 'error',
       range: structure.range,
-      message: sentences.join(' ') + more,
-      hint,
-      related,
+      message: `${sentences.slice(0, MOST_TOLD).join(' ')} ${missing(mechanisms.length)}`,
+      hint: hintFor(structure, mechanisms, remedies),
+      related: relatedPlaces(structure, first),
+      ...(fix && { fix }),
     },
   ];
 }
 
+/** Undefined where the structure is well held; past `MAX_CONDITION` an error, as no answer can be trusted. */
+export function describeNearInstability(structure: Structure, { stability }: Analysis): Diagnostic | undefined {
+  const { stable, condition, softest } = stability;
+  if (!stable || condition <= SUSPICIOUS_CONDITION) return undefined;
+  const lost = condition > MAX_CONDITION;
+  const digits = Math.max(0, Math.floor(16 - Math.log10(condition)));
+  const what = softest === undefined ? '' : ` ${hardlyHeld(structure, softest)}`;
+  const consequence = lost
+    ? 'too few for an answer'
+    : 'and answers are given only where both methods and equilibrium bear them out';
+  return {
+    code: 'nearly-unstable',
+    severity: lost ? 'error' : 'warning',
+    range: structure.range,
+    message: `This structure is nearly unstable: the condition of its stiffness is ${powerOfTen(condition)}, which leaves some ${digits} of 16 digits, ${consequence}.${what}`,
+    hint: 'look for parts almost in line, a support or a stiffness out by a power of ten, or very short legs',
+  };
+}
+
+/** `make D pinned`, `support A: pinned and support B: roller`: each set of changes in words. */
+export function remedyWords(structure: Structure, remedies: Remedies): string[] {
+  return remedies.map(changes =>
+    list(changes.map(change => wordsOf(structure, change))).replaceAll(WRITE_AGAIN, '$1support '),
+  );
+}
+
 const MOST_TOLD = 3;
-const MOST_NAMED = 6;
 
-interface Movement {
-  readonly x: number;
-  readonly y: number;
+/** Behind the first change, one `write` serves for all. */
+const WRITE_AGAIN = /(, | and )write support /g;
+
+function missing(count: number): string {
+  if (count >= MAX_MECHANISMS) return `At least ${count} restraints are missing.`;
+  return count === 1 ? 'One restraint is missing.' : `${count} restraints are missing.`;
 }
 
-function movementOf(mechanism: Mechanism, point: number): Movement {
-  const sign = signOf(mechanism);
-  return { x: sign * mechanism.movements[2 * point]!, y: sign * mechanism.movements[2 * point + 1]! };
-}
-
-/** A mechanism runs both ways; it is told as the one in which most moves to the right, or else up. */
-function signOf({ movements }: Mechanism): 1 | -1 {
-  let [right, up] = [0, 0];
-  for (let i = 0; i < movements.length; i += 2) {
-    right += movements[i]!;
-    up += movements[i + 1]!;
-  }
-  const leading = Math.abs(right) >= 0.1 * Math.abs(up) ? right : up;
-  return leading < 0 ? -1 : 1;
-}
-
-function describe(structure: Structure, mechanism: Mechanism): string {
-  if (mechanism.points.length === 0) return describeTurning(structure, mechanism);
-  const all = mechanism.kind === 'rigid-body';
-  const whole = mechanism.points.length + mechanism.turning.length >= structure.points.length;
-  const what = all && whole ? 'this structure' : membersNamed(structure, mechanism);
-  const ways = new Set(mechanism.points.map(point => direction(movementOf(mechanism, point))));
-  const [way] = ways;
-  const names = pointsNamed(structure, mechanism.points);
-  const many = mechanism.points.length > 1;
-  if (all && isTranslation(structure, mechanism)) {
-    return `Nothing holds ${what} ${isLevel(movementOf(mechanism, mechanism.points[0]!)) ? 'sideways' : 'that way'}: ${names} can move ${way}${many ? ' together' : ''}.`;
-  }
-  if (all) {
-    const centre = centreOf(structure, mechanism);
-    return `Nothing stops ${what} from turning${centre === undefined ? '' : ` about ${centre}`}: ${names} can move.`;
-  }
-  if (ways.size === 1)
-    return `${names} can move ${way}${many ? ' together' : ''}: nothing holds this part, a mechanism of ${what}.`;
-  const each = mechanism.points
-    .slice(0, MOST_NAMED)
-    .map(point => `${structure.points[point]!.name} ${direction(movementOf(mechanism, point))}`);
-  return `A part of the structure is a mechanism: ${list(each)} can move at once.`;
-}
-
-function describeTurning(structure: Structure, { turning, members }: Mechanism): string {
-  const names = pointsNamed(structure, turning);
-  const what =
-    members.length > 0
-      ? `${list(members.map(index => structure.members[index]!.name))} can turn in place`
-      : `the joint at ${names} can turn`;
-  return `Nothing holds the rotation at ${names}: ${what}.`;
-}
-
-/** What removes the only mechanism: any restraint with a part in its movement does. */
-function remedy(structure: Structure, mechanism: Mechanism): string {
-  const moving = new Set(mechanism.points);
-  const roller = structure.supports.find(({ point, symbol }) => moving.has(point) && symbol.kind === 'roller');
-  if (roller !== undefined) return `make ${structure.points[roller.point]!.name} pinned`;
-  const [largest] = [...mechanism.points].sort((a, b) => sizeOf(mechanism, b) - sizeOf(mechanism, a));
-  const pinned = structure.supports.find(({ point, symbol }) => symbol.kind === 'pinned' && !moving.has(point));
-  if (mechanism.kind === 'rigid-body' && pinned !== undefined && structure.supports.length === 1) {
-    return `make ${structure.points[pinned.point]!.name} fixed, or support another point`;
-  }
+function hintFor(structure: Structure, mechanisms: readonly Mechanism[], remedies: Remedies): string {
+  if (remedies.length > 0) return alternatives(remedyWords(structure, remedies));
+  if (mechanisms.length > 1) return `${mechanisms.length} more restraints are needed`;
+  const [only] = mechanisms;
+  const [largest] = [...only!.points].sort((a, b) => sizeOf(only!, b) - sizeOf(only!, a));
   if (largest === undefined) return 'hold the rotation there, or take a hinge out';
-  const name = structure.points[largest]!.name;
-  return `hold ${name} so that it cannot move ${direction(movementOf(mechanism, largest))}${mechanism.kind === 'mechanism' ? ', take a hinge out, or brace the part' : ''}`;
+  return `hold ${structure.points[largest]!.name} so that it cannot move ${direction(movementOf(only!, largest))}`;
+}
+
+function alternatives(words: readonly string[]): string {
+  if (words.length < 2) return words.join('');
+  return `${words.slice(0, -1).join(', ')}, or ${words.at(-1)}`;
+}
+
+function wordsOf(structure: Structure, remedy: Remedy): string {
+  const name = (point: number) => structure.points[point]!.name;
+  switch (remedy.kind) {
+    case 'hold':
+      return `make ${name(structure.supports[remedy.support]!.point)} ${remedy.as}`;
+    case 'close': {
+      const { point, member } = structure.hinges[remedy.hinge]!;
+      return `take out the hinge at ${name(point)}${member === undefined ? '' : ` in ${structure.members[member]!.name}`}`;
+    }
+    case 'brace':
+      return `brace ${name(remedy.from)}–${name(remedy.to)} with a bar`;
+    case 'support':
+      return `write support ${name(remedy.point)}: ${remedy.as === 'sideways' ? 'hold x' : remedy.as}`;
+  }
+}
+
+/** The edit of the least change that is sure in the text: a support that is one word, or a hinge of its own line. */
+function fixFor(structure: Structure, remedies: Remedies, statements: readonly Statement[]): Diagnostic['fix'] {
+  for (const [remedy, another] of remedies) {
+    if (remedy === undefined || another !== undefined) continue;
+    const edit = editFor(structure, remedy, statements);
+    if (edit !== undefined) return { title: capital(wordsOf(structure, remedy)), edits: [edit] };
+  }
+  return undefined;
+}
+
+function editFor(structure: Structure, remedy: Remedy, statements: readonly Statement[]) {
+  if (remedy.kind === 'hold') {
+    const { name } = structure.points[structure.supports[remedy.support]!.point]!;
+    const statement = statements.find(
+      (one): one is StatementOf<'support'> => one.kind === 'support' && one.point.text === name,
+    );
+    const [item, another] = statement?.items ?? [];
+    if (item === undefined || another !== undefined || item.kind === 'spring') return undefined;
+    return { range: item.range, text: remedy.as };
+  }
+  if (remedy.kind === 'close') {
+    const { range } = structure.hinges[remedy.hinge]!;
+    const statement = statements.find(one => one.kind === 'hinge' && one.point.range.start === range.start);
+    return statement === undefined ? undefined : { range: statement.range, text: '' };
+  }
+  return undefined;
+}
+
+/** Points that move, supports that let them, hinges that take part. */
+function relatedPlaces(structure: Structure, mechanism: Mechanism): NonNullable<Diagnostic['related']> {
+  const name = (point: number) => structure.points[point]!.name;
+  const moving = new Set(mechanism.points);
+  const taking = new Set([...mechanism.points, ...mechanism.turning]);
+  const points = mechanism.points.slice(0, MOST_TOLD).map(point => ({
+    range: structure.points[point]!.range,
+    message: `${name(point)} can move ${direction(movementOf(mechanism, point))}.`,
+  }));
+  const supports = structure.supports
+    .filter(({ point }) => moving.has(point))
+    .slice(0, MOST_TOLD)
+    .map(({ point, range, symbol }) => ({
+      range,
+      message: `${symbol.kind === 'roller' ? 'The roller' : 'The support'} at ${name(point)} lets it move.`,
+    }));
+  const hinges = structure.hinges
+    .filter(({ point }) => taking.has(point))
+    .slice(0, MOST_TOLD)
+    .map(({ point, range }) => ({ range, message: `The hinge at ${name(point)} lets it turn.` }));
+  return [...points, ...supports, ...hinges];
+}
+
+/** `3 × 10¹¹`: a condition is an estimate, of which one digit is known at most. */
+function powerOfTen(value: number): string {
+  const [digit, exponent] = value.toExponential(0).split('e+');
+  return `${digit} × 10${[...(exponent ?? '')].map(figure => '⁰¹²³⁴⁵⁶⁷⁸⁹'[Number(figure)]).join('')}`;
+}
+
+/** Points that move at least a third as far as the one that moves most. */
+function hardlyHeld(structure: Structure, softest: Mechanism): string {
+  const most = softest.points.filter(point => sizeOf(softest, point) > 1 / 3);
+  if (most.length === 0) return describeMechanism(structure, softest).replace('Nothing holds', 'Hardly anything holds');
+  return `It hardly resists that ${pointsInMotion(structure, softest, most).replace(' can move', most.length > 1 ? ' move' : ' moves')}.`;
 }
 
 function sizeOf({ movements }: Mechanism, point: number): number {
   return Math.hypot(movements[2 * point]!, movements[2 * point + 1]!);
 }
 
-/** Whether every point of the members that move does so by the same amount. */
-function isTranslation(structure: Structure, mechanism: Mechanism): boolean {
-  const first = movementOf(mechanism, mechanism.points[0]!);
-  const body = mechanism.members.flatMap(index => structure.members[index]!.legs.flatMap(({ from, to }) => [from, to]));
-  return [...mechanism.points, ...body].every(point => {
-    const { x, y } = movementOf(mechanism, point);
-    return Math.hypot(x - first.x, y - first.y) < 1e-6;
-  });
-}
-
-/** The point about which a rigid body turns: a named one where it stands there, else its place. */
-function centreOf(structure: Structure, mechanism: Mechanism): string | undefined {
-  const still = structure.points.findIndex((_, index) => sizeOf(mechanism, index) < 1e-9);
-  if (still >= 0 && !mechanism.points.includes(still)) return structure.points[still]!.name;
-  const [a, b] = mechanism.points.map(index => ({ point: structure.points[index]!, ...movementOf(mechanism, index) }));
-  if (a === undefined || b === undefined) return undefined;
-  const [dx, dy] = [b.point.x - a.point.x, b.point.y - a.point.y];
-  const angle = (dx * (b.y - a.y) - dy * (b.x - a.x)) / (dx * dx + dy * dy);
-  if (Math.abs(angle) < 1e-9) return undefined;
-  const [x, y] = [a.point.x - a.y / angle, a.point.y + a.x / angle];
-  return `a place at ${Number(x.toPrecision(4))} m, ${Number(y.toPrecision(4))} m`;
-}
-
-function isLevel({ x, y }: Movement): boolean {
-  return Math.abs(y) <= 1e-6 * Math.abs(x);
-}
-
-function direction({ x, y }: Movement): string {
-  const size = Math.hypot(x, y);
-  const across = Math.abs(x) > 0.02 * size ? (x > 0 ? 'to the right' : 'to the left') : '';
-  const upright = Math.abs(y) > 0.02 * size ? (y > 0 ? 'up' : 'down') : '';
-  return across !== '' && upright !== '' ? `${across} and ${upright}` : across + upright;
-}
-
-function membersNamed(structure: Structure, { members }: Mechanism): string {
-  return members.length === 0 ? 'this part' : list(shorten(members.map(index => structure.members[index]!.name)));
-}
-
-function pointsNamed(structure: Structure, points: readonly number[]): string {
-  return list(shorten(points.map(index => structure.points[index]!.name)));
-}
-
-function shorten(names: readonly string[]): readonly string[] {
-  return names.length <= MOST_NAMED
-    ? names
-    : [...names.slice(0, MOST_NAMED - 1), `${names.length - MOST_NAMED + 1} more`];
-}
-
-export function list(words: readonly string[]): string {
-  if (words.length < 2) return words.join('');
-  return `${words.slice(0, -1).join(', ')} and ${words.at(-1)}`;
+function capital(text: string): string {
+  return text.charAt(0).toUpperCase() + text.slice(1);
 }

@@ -1,20 +1,72 @@
 // What an experienced checker would remark on although nothing is wrong with the words: a case that no combination takes
 // up, a limit without a source.
-import type { Under } from '../language/syntax.ts';
+import type { Statement, StatementOf, Under } from '../language/syntax.ts';
 import { alternativesUnder } from '../model/combinations.ts';
-import type { Scope } from '../model/scope.ts';
+import type { Report } from '../model/report.ts';
+import type { Scope, Scopes } from '../model/scope.ts';
 import type { DisplayUnits } from '../quantity/display.ts';
 import { reversalsUnder, warnOfReversals } from './one-sided.ts';
 import type { StructureState } from './structure-state.ts';
 
 export function remarksOn(state: StructureState, head: Scope, units: DisplayUnits): void {
   limitsWithoutSource(state);
+  unusedCombinations(state.scope, [state.scope], head, state.report);
   showsNotDrawn(state);
   // Where something is missing from the structure, what is used and what is not cannot be told.
   if (state.withheld !== undefined) return;
   reversedForces(state, units);
   unusedCases(state, head);
   casesWithoutLoad(state);
+}
+
+/** Combinations of the note's head that no structure's question takes up. */
+export function unusedSharedCombinations({ head, structures }: Scopes, report: Report): void {
+  unusedCombinations(head, [head, ...structures], head, report);
+}
+
+/** Of one scope, asked about in some. Without a question there is nothing yet that could ask. */
+function unusedCombinations(scope: Scope, asking: readonly Scope[], head: Scope, report: Report): void {
+  const combinations = combinationsOf(scope);
+  if (combinations.size === 0) return;
+  const used = new Set<string>();
+  let asked = false;
+  for (const one of asking) {
+    const inReach = new Set([...combinationsOf(one), ...combinationsOf(head)].map(([name]) => name));
+    for (const statement of one.statements) {
+      const question = statement.kind === 'find' || statement.kind === 'require';
+      asked ||= question;
+      const under = question ? statement.under : showsUnder(statement);
+      if (under === undefined && !question) continue;
+      // The only one is meant where nothing is said.
+      if (under === undefined ? inReach.size === 1 : under === 'all' || under.kind === 'all') {
+        for (const name of inReach) used.add(name);
+      } else if (under !== undefined && under !== 'all' && under.kind === 'named') used.add(under.name.text);
+    }
+  }
+  if (!asked) return;
+  for (const [name, statement] of combinations) {
+    if (used.has(name)) continue;
+    report.warn('unused-combination', statement.name.range, `Nothing asks about ${name}.`, {
+      hint: `ask under ${name}, or take it out`,
+    });
+  }
+}
+
+/** By name, the first line of each. */
+function combinationsOf({ statements }: Scope): ReadonlyMap<string, StatementOf<'combine'>> {
+  const found = new Map<string, StatementOf<'combine'>>();
+  for (const statement of statements) {
+    if (statement.kind === 'combine' && !found.has(statement.name.text)) found.set(statement.name.text, statement);
+  }
+  return found;
+}
+
+/** What a `show` line looks at: a combination, or all of them where it shows reactions of all. */
+function showsUnder(statement: Statement): Under | 'all' | undefined {
+  if (statement.kind !== 'show') return undefined;
+  const { show } = statement;
+  const under = 'under' in show ? show.under : undefined;
+  return under ?? (show.kind === 'reactions' ? 'all' : undefined);
 }
 
 function limitsWithoutSource({ scope, report }: StructureState): void {

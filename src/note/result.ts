@@ -72,6 +72,8 @@ export interface StructureResult {
   readonly shows: readonly Extract<Statement, { readonly kind: 'show' }>[];
   /** Why every answer is withheld (unstable, not evaluated yet …), in one line; undefined when they are not. */
   readonly withheld: string | undefined;
+  /** Changes that would hold an unstable structure, each tried, in words, the least first; empty for any other. */
+  readonly remedies: readonly string[];
 }
 
 /** What may stand behind `under`. A case alone counts as a combination of one alternative. */

@@ -1,6 +1,6 @@
 // A structure with what it does: its analysis, the solutions of combinations and the second road, each worked once, when
 // first asked for. A structure that did not change is taken from memory with all of them.
-import { type Analysis, analyse, combine, type Solution } from '../mechanics/index.ts';
+import { type Analysis, analyse, combine, findRemedies, type Remedy, type Solution } from '../mechanics/index.ts';
 import type { Leg, Structure } from '../model/structure.ts';
 import { SecondRoad } from '../virtual-work/index.ts';
 
@@ -8,10 +8,23 @@ export class Solved {
   readonly analysis: Analysis;
   readonly secondRoad: SecondRoad;
   readonly #solutions = new Map<string, Solution>();
+  #remedies: readonly (readonly Remedy[])[] | undefined;
 
   constructor(structure: Structure) {
     this.analysis = analyse(structure);
     this.secondRoad = new SecondRoad(structure);
+  }
+
+  /** Sets of changes that would hold an unstable structure, each tried; see `findRemedies`. */
+  get remedies(): readonly (readonly Remedy[])[] {
+    const { structure, stability } = this.analysis;
+    this.#remedies ??= findRemedies(structure, stability.mechanisms);
+    return this.#remedies;
+  }
+
+  /** Whether a combination was asked for already. */
+  isSolved(factors: readonly number[]): boolean {
+    return this.#solutions.has(factors.join(' '));
   }
 
   solution(factors: readonly number[]): Solution {

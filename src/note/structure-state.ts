@@ -13,7 +13,7 @@ import type { Structure } from '../model/structure.ts';
 import { nearest } from '../quantity/nearest.ts';
 import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
-import { describeInstability } from './instability.ts';
+import { describeInstability, describeNearInstability, remedyWords } from './instability.ts';
 import type { SolvedStructures } from './memory.ts';
 import { type Descent, Once, type Refusal } from './once.ts';
 import { type Solved, solutionKey } from './solved.ts';
@@ -41,6 +41,8 @@ export class StructureState {
   readonly #combinations: Once<readonly CombinationModel[]>;
   /** The analysis of a structure that can move freely, for a drawing of how; undefined for any other. */
   unstable: Analysis | undefined;
+  /** What would hold it, each tried, in words, the least change first. */
+  remedies: readonly string[] = [];
 
   constructor(inputs: StateInputs) {
     this.scope = inputs.scope;
@@ -143,10 +145,23 @@ export class StructureState {
     const { stability, tooLarge, conflict } = solved.analysis;
     if (tooLarge !== undefined) return this.#refuseSize(structure, tooLarge);
     if (conflict !== undefined) return this.#conflict(structure, conflict);
-    if (stability.stable) return solved;
+    if (stability.stable) return this.#held(structure, solved);
     this.unstable = solved.analysis;
     this.#excuse = 'it can move freely';
-    this.report.diagnostics.push(...describeInstability(structure, solved.analysis));
+    this.remedies = remedyWords(structure, solved.remedies);
+    this.report.diagnostics.push(
+      ...describeInstability(structure, solved.analysis, solved.remedies, this.scope.statements),
+    );
+    return undefined;
+  }
+
+  /** A structure that is stable, if only just: too little so, and nothing is told of it. */
+  #held(structure: Structure, solved: Solved): Solved | undefined {
+    const near = describeNearInstability(structure, solved.analysis);
+    if (near === undefined) return solved;
+    this.report.diagnostics.push(near);
+    if (near.severity !== 'error') return solved;
+    this.#excuse = 'it is nearly unstable';
     return undefined;
   }
 

@@ -6,7 +6,7 @@ import { escapeHtml, plainHtml } from './html.ts';
 import { diagnosticsIn, lineOf } from './note-index.ts';
 
 /** Told in the answers, or where the page leaves something out. */
-const TOLD_ELSEWHERE: ReadonlySet<string> = new Set(['limit-exceeded', 'limit-without-source']);
+const TOLD_ELSEWHERE: ReadonlySet<string> = new Set(['limit-exceeded', 'limit-without-source', 'unasked-uplift']);
 
 /** Errors and warnings whose words lie in the range, in order. */
 export function messagesIn(note: NoteResult, range: Range): string {

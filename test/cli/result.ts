@@ -34,6 +34,7 @@ export function structureWith(parts: Partial<StructureResult>): StructureResult 
     display: METRIC,
     shows: [],
     withheld: undefined,
+    remedies: [],
     ...parts,
   };
 }

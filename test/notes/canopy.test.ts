@@ -86,9 +86,12 @@ describe('the canopy rafter', () => {
     }
   });
 
-  it('hints at limits that have no source, and at nothing else', () => {
+  it('hints at limits that have no source, warns of the uplift at B that it does not ask about, and at nothing else', () => {
     const others = note.diagnostics.filter(({ code }) => code !== 'limit-exceeded').map(({ code }) => code);
-    expect(others).toEqual(['limit-without-source', 'limit-without-source', 'limit-without-source']);
+    expect(others).toEqual(['unasked-uplift', 'limit-without-source', 'limit-without-source', 'limit-without-source']);
+    // About A: (1.9 − 1.15 − 0.26605049) kN/m × 6.6 m × 3.3 m / 4.8 m.
+    const { message } = note.diagnostics.find(({ code }) => code === 'unasked-uplift')!;
+    expect(message).toBe('B must hold down 2.196 kN under uplift, and no question asks about this reaction.');
   });
 
   function answer(name: string) {

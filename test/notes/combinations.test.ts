@@ -29,6 +29,7 @@ find any:   moment in B1 under all
 find seat:  reaction at A under strength
 require pull: reaction at A under strength >= -10 kN "anchors"
 require push: reaction at A under strength <= 25 kN "bearing"
+find hold: reaction at B under strength
 require bend: moment in B1 under strength <= 25 kN m "test"
 require low:  moment at 2 m from A on B1 under strength >= -7 kN m "test"`);
 

@@ -22,6 +22,8 @@ describe('the sample project', () => {
       mid: { value: 10.2054864399 * mm, limit: 4.8 / 360, status: 'ok' },
       bend: { value: 11.0878749058 * kN, limit: 33.8100520833 * kN, status: 'ok' },
       seat: { value: -1.18169067689 * kN, status: 'fails' },
+      // Statics about A: the net lift at 3.3 m, on 4.8 m.
+      hold: { value: (-1.18169067689 * kN * 3.3) / (4.8 - 3.3), status: 'none' },
     });
     expect(codesOf(note)).toEqual(['limit-exceeded']);
   });

@@ -271,6 +271,7 @@ describe('what is wrong', () => {
     );
     checkTags(html);
     expect(section(html, 'Not held')).toContain('free to move');
+    expect(wordsOf(section(html, 'Not held'))).toContain('Each of these was tried and holds it');
     expect(wordsOf(section(html, 'Not held'))).toContain('withheld');
     expect(html).not.toContain('<h3>Reactions');
     expect(html.match(/data-code="unstable-structure"/g)).toBeNull();

@@ -1,7 +1,8 @@
 // Structures that can move are found, every one, and told how; those that can not are not.
 import fc from 'fast-check';
 import { expect } from 'vitest';
-import { analyse } from '../../src/mechanics/analyse.ts';
+import { boundFreedoms } from '../../src/mechanics/freedoms.ts';
+import { analyse, findRemedies, remedied } from '../../src/mechanics/index.ts';
 import type { Structure } from '../../src/model/structure.ts';
 import { primaryStructure } from '../../src/virtual-work/index.ts';
 import { rotated } from './motions.ts';
@@ -62,6 +63,26 @@ holds(
     moves({ ...unloaded(structure), hinges: [...structure.hinges, { point, member: index, range: structure.range }] });
   },
   500,
+);
+
+holds(
+  'what is offered to hold it does, by both roads',
+  fc.tuple(determinateStructures(), fc.nat(99)),
+  ([structure, number]) => {
+    const index = number % structure.supports.length;
+    const supports = structure.supports.map((support, k) =>
+      k === index ? { ...support, restraints: support.restraints.slice(1) } : support,
+    );
+    const free = { ...unloaded(structure), supports };
+    const remedies = findRemedies(free, analyse(free).stability.mechanisms);
+    // Holding again what was held is among the candidates, in one way or another.
+    expect(remedies.length > 0 || boundFreedoms(free) > 300).toBe(true);
+    for (const changes of remedies) {
+      const held = changes.reduce(remedied, free);
+      expect(analyse(held).stability.stable).toBe(true);
+      expect(primaryStructure(held)).toBeDefined();
+    }
+  },
 );
 
 holds(

@@ -71,14 +71,17 @@ find peak: sag of R between A and B`;
 
 const figures = fc.tuple(...Array.from({ length: 8 }, () => fc.integer({ min: 4, max: 40 })));
 
+/** Random figures give rise to these, and nothing else. */
+const DOUBTS = ['unasked-uplift', 'large-movement', 'slender-compression'];
+
 holds(
   'a note in US units and in metric ones',
   figures,
   numbers => {
     const us = solved(note(US, numbers));
     const metric = solved(note(METRIC, numbers));
-    expect(codesOf(us)).toEqual([]);
-    expect(codesOf(metric)).toEqual([]);
+    expect(codesOf(us)).toEqual(codesOf(metric));
+    expect(codesOf(us).filter(code => !DOUBTS.includes(code))).toEqual([]);
     for (const [index, { name, value, unit }] of us.answers.entries()) {
       const other = metric.answers[index]!;
       expect(other.unit, name).toBe(unit);
