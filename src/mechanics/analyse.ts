@@ -1,7 +1,7 @@
 // The analysis of a structure: is it stable, how redundant is it, and how does it answer each of its cases.
 //
-// Plane frames, linear and first order: Euler-Bernoulli bending and axial force by the displacement method, with fields
-// exact between loads. Axes, signs and units are those of model/structure.ts and solution.ts.
+// Plane frames, linear and first order: bending, axial force and, where it is counted, shear by the displacement method,
+// with fields exact between loads. Axes, signs and units are those of model/structure.ts and solution.ts.
 
 import type { Load, Structure } from '../model/structure.ts';
 import { conditionEstimate } from './condition.ts';

@@ -68,7 +68,7 @@ export function movementAlong(piece: FieldPiece, leg: Leg, x: number, y: number)
   return result;
 }
 
-/** The same as one vector at a place, by global axes; joints do not come apart, so that both sides agree. */
+/** The same as one vector at a place, by global axes; behind it, where a release lets the two sides slide apart. */
 export function movementAt(
   field: MemberField,
   legs: readonly Leg[],
