@@ -67,6 +67,7 @@ class Sections {
   readonly #building: Building;
   readonly #indices = new Map<string, number>();
   readonly #told = new Set<string>();
+  #firstWanted: Definition | undefined;
 
   constructor(building: Building) {
     this.#building = building;
@@ -165,8 +166,23 @@ class Sections {
     );
   }
 
-  #needBending(definition: Definition, { properties }: SectionFigures, member: LaidMember): void {
-    if (properties.has('EI') || this.#told.has(definition.name)) return;
+  /** What each of two should be cannot be told from one movement. */
+  #wanted(definition: Definition): void {
+    this.#firstWanted ??= definition;
+    if (this.#firstWanted === definition || this.#told.has(definition.name)) return;
+    this.#told.add(definition.name);
+    this.#building.report.flawed = true;
+    this.#building.report.error(
+      'missing-property',
+      definition.definition,
+      `${this.#firstWanted.name} and ${definition.name} are both still to be chosen.`,
+      { hint: 'give one of them a figure, or give both members one section' },
+    );
+  }
+
+  #needBending(definition: Definition, { properties, wanted }: SectionFigures, member: LaidMember): void {
+    if (wanted) this.#wanted(definition);
+    if (properties.has('EI') || (wanted && properties.has('E')) || this.#told.has(definition.name)) return;
     this.#told.add(definition.name);
     this.#building.report.flawed = true;
     const missing = !properties.has('E') && !properties.has('I') ? 'E and I, or EI' : properties.has('E') ? 'I' : 'E';
@@ -207,16 +223,20 @@ const UNKNOWN_SECTION: Section = {
   range: { start: 0, end: 0 },
 };
 
+/** What stands in for an I that is wanted, m⁴. */
+const TRIAL_INERTIA = 1e-4;
+
 function toSection(
   definition: Definition,
-  { properties, material, modulusAssumed, description }: SectionFigures,
+  { properties, material, modulusAssumed, description, wanted }: SectionFigures,
 ): Section {
   const value = (key: string): number | undefined => properties.get(key)?.value;
   return {
     name: definition.name,
     ...(material === undefined ? {} : { material }),
     description,
-    bendingStiffness: value('EI'),
+    bendingStiffness: wanted ? (value('E') ?? Number.NaN) * TRIAL_INERTIA : value('EI'),
+    ...(wanted && { wanted }),
     axialStiffness: value('EA'),
     massPerLength: value('mass'),
     sectionModulus: value('modulus'),

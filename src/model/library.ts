@@ -36,6 +36,8 @@ export interface SectionFigures {
   readonly modulusAssumed: boolean;
   /** In the writer's words: `box 100 mm × 200 mm × 6 mm, S355`. */
   readonly description: string;
+  /** `I wanted`: it has no I and no EI. */
+  readonly wanted: boolean;
   readonly statement: StatementOf<'section'>;
 }
 
@@ -185,26 +187,36 @@ export class Library {
     const material = this.#materialOf(statement, definition, reading);
     const given = new Map<string, Quantity>();
     const shaped = new Map<string, Quantity>();
+    let wanted = false;
     for (const item of statement.items) {
       if (item.kind === 'property') reading.sound = this.#readProperty(item, reading.figures, given) && reading.sound;
       if (item.kind === 'shape') reading.shape(item, shaped);
       if (item.kind === 'multiple') this.#multiply(item, definition, reading, shaped, material);
       if (item.kind === 'wanted') {
-        reading.sound = false;
-        this.#report.error(
-          'not-evaluated-yet',
-          item.range,
-          `A section that is still to be chosen is read but not evaluated by this version: give ${item.key.text} a figure.`,
-        );
+        wanted = true;
+        if (item.key.text !== 'I' || statement.items.some(({ kind }) => kind === 'shape' || kind === 'multiple')) {
+          reading.sound = false;
+          this.#report.error('bad-statement', item.range, 'Only the I of a section without a shape can be wanted.', {
+            hint: 'write I wanted, and a material',
+          });
+        }
       }
     }
     reading.checkTurned(shaped);
+    if (wanted && (given.has('I') || given.has('EI'))) {
+      reading.sound = false;
+      this.#report.error(
+        'defined-twice',
+        definition.definition,
+        `${definition.name} has a stiffness, and one is wanted.`,
+      );
+    }
     if (!reading.sound) return undefined;
     const properties = new Map([...(material?.properties ?? []), ...shaped, ...given]);
     const modulusAssumed = reading.modulusAssumed || !properties.has('modulus');
     derive(properties);
     const description = statement.items.map(this.#wordsOf).join(', ').replace(/ x /g, ' × ');
-    return { properties, material: material?.name, modulusAssumed, description, statement };
+    return { properties, material: material?.name, modulusAssumed, description, statement, wanted };
   }
 
   #materialOf(

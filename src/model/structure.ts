@@ -37,6 +37,8 @@ export interface Section {
   readonly description: string;
   /** EI, N m²; undefined where no figure gives one (a bar's section needs none). */
   readonly bendingStiffness: number | undefined;
+  /** Its I is still to be chosen: `bendingStiffness` is that of a trial I, and no result of it may be shown. */
+  readonly wanted?: boolean;
   /** EA, N; undefined: no axial stiffness is known, and the member is axially stiff, exactly. */
   readonly axialStiffness: number | undefined;
   /** kg/m; undefined where no area or no density is known. */

@@ -22,6 +22,8 @@ import { hold, MOST_DIFFERENCE } from './second-road.ts';
 import type { Question, Series } from './series.ts';
 import { stiffnessFactor } from './stiffness.ts';
 import type { StructureState } from './structure-state.ts';
+import { isIndependent, isWanted } from './wanted.ts';
+import { wantedAnswer } from './wanted-answer.ts';
 
 export interface AnswerInputs {
   readonly question: Question;
@@ -56,6 +58,15 @@ export function answerTo(inputs: AnswerInputs): Answer {
   const { series, check } = borneOut;
   const value = series.values[series.governing]!;
   const limit = question.kind === 'require' ? readLimit(inputs, question.limit, series, value) : undefined;
+  const isTrial = isWanted(series);
+  const wanted =
+    isTrial && !isIndependent(series)
+      ? wantedAnswer(question, series, limit?.quantity.value, inWords(inputs, series), inputs.units)
+      : undefined;
+  if (wanted?.kind === 'none') {
+    refuseWanted(inputs, wanted.why, wanted.hint);
+    return { ...common, ...WITHHELD, unit: unitOf(question.what) };
+  }
   return {
     ...common,
     governing: governingInWords(series),
@@ -65,9 +76,12 @@ export function answerTo(inputs: AnswerInputs): Answer {
     display: inWords(inputs, series),
     place: placeOf(series),
     sides: sidesInWords(inputs, series),
-    asked: asked(series),
+    // A drawing would show the movements of the trial.
+    asked: isTrial ? undefined : asked(series),
     check,
-    ...judge(inputs, series, value, limit),
+    ...(wanted === undefined ? judge(inputs, series, value, limit) : unjudged(limit)),
+    ...wanted,
+    kind: question.kind,
   };
 }
 
@@ -264,6 +278,21 @@ function replaceSpans(limit: Value, words: string, wordsOf: (range: Range) => st
 }
 
 // Judgement
+
+/** Beside the least I there is nothing left to judge. */
+function unjudged(limit: Limit | undefined): Judgement {
+  return {
+    limit: limit?.quantity,
+    limitDisplay: limit?.display,
+    utilisation: undefined,
+    status: 'none',
+    stiffnessFactor: undefined,
+  };
+}
+
+function refuseWanted({ question, report }: AnswerInputs, why: string, hint: string): void {
+  report.error('bad-question', question.name.range, `${question.name.text} is withheld: ${why}.`, { hint });
+}
 
 type Judgement = Pick<Answer, 'limit' | 'limitDisplay' | 'utilisation' | 'status' | 'stiffnessFactor'>;
 

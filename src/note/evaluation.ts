@@ -2,6 +2,7 @@
 // the order of the text.
 import type { Diagnostic } from '../language/diagnostic.ts';
 import type { Item, Operand, Statement, StatementOf, Value } from '../language/syntax.ts';
+import type { Analysis } from '../mechanics/index.ts';
 import { Library } from '../model/library.ts';
 import { usesInValue } from '../model/name-uses.ts';
 import type { Definition, Names } from '../model/names.ts';
@@ -185,7 +186,7 @@ export class NoteEvaluation {
       name: scope.name ?? '',
       ...(title === undefined ? {} : { title }),
       range: structure?.range ?? scope.structure?.name.range ?? scope.statements[0]?.range ?? { start: 0, end: 0 },
-      analysis: solved?.analysis ?? state.unstable,
+      analysis: solved?.analysis ?? state.unstable ?? withoutCases(state.trial?.analysis),
       combinations: solved === undefined ? [] : combinations,
       answers: answers.flatMap((answer, i) => (answer.structure === index ? [i] : [])),
       assumptions: sentences,
@@ -250,11 +251,9 @@ export class NoteEvaluation {
 
   #result(definition: Definition, range: Range): { readonly quantity: Quantity; readonly chosen: boolean } | undefined {
     const series = this.#seriesOf(definition, range);
-    if (series === undefined || this.#answer(definition)?.quantity === undefined) return undefined;
-    return {
-      quantity: series.values[series.governing]!,
-      chosen: series.values.length > 1 || series.loaded !== undefined,
-    };
+    const quantity = this.#answer(definition)?.quantity;
+    if (series === undefined || quantity === undefined) return undefined;
+    return { quantity, chosen: series.values.length > 1 || series.loaded !== undefined };
   }
 
   #spanOfResult(definition: Definition, range: Range): Quantity | undefined {
@@ -379,6 +378,11 @@ export class NoteEvaluation {
       }
     }
   }
+}
+
+/** Of a trial only what does not depend on its figures. */
+function withoutCases(analysis: Analysis | undefined): Analysis | undefined {
+  return analysis === undefined ? undefined : { ...analysis, cases: [], parts: [] };
 }
 
 function isQuestion(statement: Statement): statement is Question {

@@ -111,7 +111,7 @@ class SeriesReader {
     const own = this.#alternatives();
     if (own === undefined) return undefined;
     const resolved = this.#resolve(measures);
-    const solved = state.solved(why => this.#refuse(why));
+    const solved = state.solved(why => this.#refuse(why)) ?? state.trial;
     if (resolved === undefined || solved === undefined || state.report.flawed) return undefined;
     if (own.some(({ cases }) => cases.some(name => state.report.flawedCases.has(name)))) return undefined;
     const running = this.#running(own, before);

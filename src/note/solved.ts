@@ -47,6 +47,7 @@ export function solutionKey(structure: Structure): string {
       section.depth ?? '',
       section.thermalExpansion ?? '',
       section.bendingStiffness ?? '',
+      ...(section.wanted ? ['wanted'] : []),
       section.axialStiffness ?? '',
       section.massPerLength ?? '',
       section.sectionModulus ?? '',

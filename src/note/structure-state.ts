@@ -10,6 +10,7 @@ import type { Names } from '../model/names.ts';
 import { Report } from '../model/report.ts';
 import type { BrokenStatement, Scope } from '../model/scope.ts';
 import type { Structure } from '../model/structure.ts';
+import { wantedSection } from '../model/wanted.ts';
 import { nearest } from '../quantity/nearest.ts';
 import { significant } from '../quantity/number.ts';
 import type { Range } from '../quantity/range.ts';
@@ -43,6 +44,8 @@ export class StructureState {
   unstable: Analysis | undefined;
   /** What would hold it, each tried, in words, the least change first. */
   remedies: readonly string[] = [];
+  /** A structure with a section still to be chosen, solved with a trial I: nothing of it may be shown as it is. */
+  trial: Solved | undefined;
 
   constructor(inputs: StateInputs) {
     this.scope = inputs.scope;
@@ -75,7 +78,7 @@ export class StructureState {
 
   /** Why nothing of this structure can be told, in one line. */
   get withheld(): string | undefined {
-    if (this.solved() !== undefined && !this.report.flawed) return undefined;
+    if ((this.solved() ?? this.trial) !== undefined && !this.report.flawed) return undefined;
     return this.#excuse ?? 'something of it cannot be read or is not evaluated';
   }
 
@@ -145,7 +148,12 @@ export class StructureState {
     const { stability, tooLarge, conflict } = solved.analysis;
     if (tooLarge !== undefined) return this.#refuseSize(structure, tooLarge);
     if (conflict !== undefined) return this.#conflict(structure, conflict);
-    if (stability.stable) return this.#held(structure, solved);
+    if (stability.stable) {
+      const held = this.#held(structure, solved);
+      if (wantedSection(structure) === undefined) return held;
+      this.trial = held;
+      return undefined;
+    }
     this.unstable = solved.analysis;
     this.#excuse = 'it can move freely';
     this.remedies = remedyWords(structure, solved.remedies);

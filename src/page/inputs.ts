@@ -83,7 +83,7 @@ function sectionTable(structure: Structure, units: DisplayUnits): string {
       figure(section.area, AREA, units),
       figure(section.secondMomentOfArea, SECOND_MOMENT_OF_AREA, units),
       figure(section.sectionModulus, SECTION_MODULUS, units),
-      figure(section.bendingStiffness, BENDING_STIFFNESS, units),
+      figure(section.wanted ? undefined : section.bendingStiffness, BENDING_STIFFNESS, units),
       figure(weight, FORCE_PER_LENGTH, units),
       ...(isHeated ? [figure(section.depth, LENGTH, units), expansion(section.thermalExpansion)] : []),
     ];

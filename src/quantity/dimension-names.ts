@@ -31,6 +31,7 @@ const KINDS: ReadonlyMap<string, Kind> = new Map([
   ['-2 1 -2 0', { name: 'a unit weight', si: 'N/m3' }],
   ['2 1 -2 0', { name: 'a moment', si: 'N m' }],
   ['3 1 -2 0', { name: 'a bending stiffness', si: 'N m2' }],
+  ['4 1 -2 0', { name: 'a movement times a bending stiffness', si: 'N m3' }],
   ['0 0 0 1', { name: 'a temperature difference', si: 'K' }],
   ['0 0 0 -1', { name: 'a thermal expansion', si: '1/K' }],
 ]);

@@ -158,6 +158,8 @@ const TRADE: readonly TradeUnits[] = [
   { dimension: SECTION_MODULUS, metric: [step('cm3'), step('m3', 0.1)], us: [step('in3'), step('ft3', 0.1)] },
   { dimension: SECOND_MOMENT_OF_AREA, metric: [step('cm4'), step('m4', 0.1)], us: [step('in4'), step('ft4', 0.1)] },
   { dimension: BENDING_STIFFNESS, metric: [step('kN m2')], us: [step('kip in2')] },
+  // A movement times a bending stiffness.
+  { dimension: [4, 1, -2, 0, 0], metric: [step('kN m3')], us: [step('kip in3')] },
   { dimension: UNIT_WEIGHT, metric: [step('kN/m3')], us: [step('pcf')] },
   { dimension: MASS, metric: [step('kg'), step('t', 1e4)], us: [step('lb')] },
   { dimension: MASS_PER_LENGTH, metric: [step('kg/m')], us: [step('lb/ft')] },

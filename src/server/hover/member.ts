@@ -5,6 +5,7 @@ import type { Measured, ResolvedMeasure } from '../../model/question.ts';
 import { isMovement } from '../../model/questions.ts';
 import { spansAt } from '../../model/spans.ts';
 import type { Location, Member, Structure } from '../../model/structure.ts';
+import { wantedSection } from '../../model/wanted.ts';
 import { worstAlternatives } from '../../note/patterns.ts';
 import type { Alternative, NoteResult, StructureResult } from '../../note/result.ts';
 import type { DisplayUnits } from '../../quantity/display.ts';
@@ -168,6 +169,8 @@ function aboutMember(structure: Structure, member: Member, units: DisplayUnits):
   return [member.kind, ...sections.filter(words => words !== ''), length(member.length, units), ...only].join(', ');
 }
 
-function withheldRows({ withheld }: StructureResult): Row[] {
-  return [{ label: 'Movement', text: withheld ?? 'there is no load to move it' }];
+function withheldRows({ withheld, structure }: StructureResult): Row[] {
+  const wanted = structure === undefined ? undefined : wantedSection(structure);
+  const open = wanted === undefined ? undefined : `the I of ${wanted.name} is still to be chosen`;
+  return [{ label: 'Movement', text: withheld ?? open ?? 'there is no load to move it' }];
 }

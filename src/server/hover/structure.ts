@@ -39,7 +39,7 @@ export function sectionCard(section: Section, units: DisplayUnits): Card {
   add('I', section.secondMomentOfArea, SECOND_MOMENT_OF_AREA);
   add('A', section.area, AREA);
   add('W', section.sectionModulus, SECTION_MODULUS);
-  add('EI', section.bendingStiffness, BENDING_STIFFNESS);
+  add('EI', section.wanted ? undefined : section.bendingStiffness, BENDING_STIFFNESS);
   add('EA', section.axialStiffness, FORCE);
   add('Mass', section.massPerLength, MASS_PER_LENGTH);
   return { title: section.name, about: `section, ${section.description}`, rows };
