@@ -70,6 +70,26 @@ require end: deflection at B under all_in <= 5 mm "brief"`);
     checkAnswers(sunk, { end: { value: null } });
   });
 
+  it('is met exactly by the I that it is answered with, under the alternative that it names', () => {
+    const portal = (section: string, question: string) =>
+      solved(`
+material S355: E 210 GPa
+section X: ${section}, A 40 cm2, S355
+member C1, X: A -- 3 m up -- B -- 5 m right -- C -- 3 m down -- D
+support A: fixed
+support D: fixed
+load live: 10 kN right at B
+load roof: 5 kN/m down on C1 from B to C
+combine s (a): live + roof
+combine s (b): 1.5 live
+${question}`);
+    // Axial strain gives way too, whatever I is.
+    const [wanted] = portal('I wanted', 'require turn: rotation at B under s <= 3 mrad "x"').answers;
+    const [chosen] = portal(`I ${wanted!.value} m4`, 'find turn: rotation at B under s').answers;
+    expect(Math.abs(Math.abs(chosen!.value!) - 0.003)).toBeLessThan(1e-11);
+    expect(wanted).toMatchObject({ unit: 'm4', status: 'ok', governing: chosen!.governing });
+  });
+
   it('shares forces out without I where all of it has one section, and not beside others', () => {
     const two = (second: string) =>
       solved(`

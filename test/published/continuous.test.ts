@@ -168,3 +168,35 @@ load live: 2.75 kN/m down on R${ASK}`,
     second: (5 * w * L) / 4 / (1 + (6 * EI) / (0.9e6 * L ** 3)),
   },
 );
+
+/** Any of the spans loaded: the envelope's coefficients are those of the worst arrangement of each table. */
+const patterned = (spans: 'two' | 'three', ask: string) =>
+  `${{ two, three }[spans]('2.75 kN/m down on R, patterned').split('\nfind first')[0]}\n${ask}`;
+
+check(
+  'N02, N01 patterned',
+  'two spans, uniform load on any of them',
+  aisc('29 for one span loaded', 'from memory, uncertain'),
+  patterned('two', 'find most: sagging in R\nfind over: moment at B in R\nrequire lift: reaction at C >= -1 kN "x"'),
+  {
+    most: { value: (49 * w * L ** 2) / 512, governing: 'live on A–B' },
+    over: { value: (-w * L ** 2) / 8, governing: 'live on A–B, B–C' },
+    lift: { value: (-w * L) / 16, governing: 'live on A–B' },
+  },
+);
+
+check(
+  'N05, N06, N07 patterned',
+  'three spans, uniform load on any of them',
+  aisc('37 and 38', 'from memory, uncertain'),
+  patterned(
+    'three',
+    'find most: sagging in R\nfind over: moment at B in R\nfind push: reaction at B\nfind worst: deflection of R',
+  ),
+  {
+    most: { value: (81 * w * L ** 2) / 800, governing: 'live on A–B, C–D' },
+    over: { value: (-7 * w * L ** 2) / 60, governing: 'live on A–B, B–C' },
+    push: { value: (6 * w * L) / 5, governing: 'live on A–B, B–C' },
+    worst: { ...endSpan(9 / 20), governing: 'live on A–B, C–D' },
+  },
+);
