@@ -397,20 +397,23 @@ interface Checked {
 /** The worst of the checks of all that took part; undefined, and reported, where they do not bear the answer out. */
 function checked(inputs: AnswerInputs, series: Series): Checked | undefined {
   if (series.reversal !== undefined) return refuseReversed(inputs, series.reversal);
-  let [difference, residual, rounding] = [0, 0, 0];
+  let [difference, residual, energy, rounding] = [0, 0, 0, 0];
   for (const taken of series.taken) {
     const held = hold(taken);
     difference = Math.max(difference, held.difference);
-    residual = Math.max(residual, taken.solved.solution(taken.factors).residual);
+    const solution = taken.solved.solution(taken.factors);
+    const balance = taken.solved.secondRoad.balance(taken.factors, solution);
+    residual = Math.max(residual, solution.residual, balance.equilibrium);
+    energy = Math.max(energy, balance.energy);
     rounding = Math.max(rounding, held.rounding);
   }
-  const borneOut = difference <= MOST_DIFFERENCE && residual <= MOST_DIFFERENCE;
-  if (borneOut) return { check: { difference, residual }, series: withoutRounding(series, rounding) };
+  const borneOut = Math.max(difference, residual, energy) <= MOST_DIFFERENCE;
+  if (borneOut) return { check: { difference, residual, energy }, series: withoutRounding(series, rounding) };
   const { question, report } = inputs;
   report.error(
     'answer-withheld',
     question.name.range,
-    `${question.name.text} is withheld: ${whyWithheld(difference, residual)}.`,
+    `${question.name.text} is withheld: ${whyWithheld({ difference, residual, energy })}.`,
     {
       hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
     },
@@ -427,10 +430,12 @@ function refuseReversed({ question, units, report }: AnswerInputs, reversal: Rev
   return undefined;
 }
 
-function whyWithheld(difference: number, residual: number): string {
+function whyWithheld({ difference, residual, energy }: Check): string {
   if (difference === Infinity) return 'the second method finds no answer to hold it against';
   const accepted = `and at most ${MOST_DIFFERENCE} is accepted`;
   if (difference > MOST_DIFFERENCE) return `the two methods differ by ${significant(difference, 2)} of it, ${accepted}`;
+  if (residual <= MOST_DIFFERENCE && energy > MOST_DIFFERENCE)
+    return `the work of loads and ground and that of the internal forces differ by ${significant(energy, 2)} of it, ${accepted}`;
   return Number.isFinite(residual)
     ? `equilibrium leaves ${significant(residual, 2)} of the loads, ${accepted}`
     : 'equilibrium cannot be shown';

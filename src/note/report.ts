@@ -43,7 +43,7 @@ export interface AnswerReport {
   readonly limit: number | null;
   readonly utilisation: number | null;
   readonly status: AnswerStatus;
-  readonly check: Check | null;
+  readonly check: Omit<Check, 'energy'> | null;
 }
 
 export interface ValueReport {
@@ -125,7 +125,7 @@ function answerReport(answer: Answer, structures: readonly StructureResult[]): A
     limit: answer.limit?.value ?? null,
     utilisation: answer.utilisation ?? null,
     status: answer.status,
-    check: answer.check ?? null,
+    check: answer.check === undefined ? null : { difference: answer.check.difference, residual: answer.check.residual },
   };
 }
 

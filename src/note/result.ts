@@ -145,8 +145,10 @@ export interface AnswerPlace {
 export interface Check {
   /** Relative difference of the two roads; 0 where the answer is no movement. */
   readonly difference: number;
-  /** Largest unbalanced force over the largest load. */
+  /** Largest unbalanced force, at a point, on a leg or on the whole, over the loads. */
   readonly residual: number;
+  /** Relative difference of the work of loads and ground and that of the internal forces. */
+  readonly energy: number;
 }
 
 export interface NamedValue {

@@ -167,6 +167,8 @@ function foot(answers: readonly Answer[]): string {
     sentences.push(
       residual === 0 ? 'Equilibrium is exact.' : `Equilibrium leaves at most ${power(residual)} of the loads.`,
     );
+    const energy = Math.max(...checks.map(check => check.energy));
+    if (energy > 0) sentences.push(`Work and stored energy differ by at most ${power(energy)}.`);
   }
   for (const { name, stiffnessFactor } of answers) {
     if (stiffnessFactor === undefined) continue;

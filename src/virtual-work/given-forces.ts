@@ -165,7 +165,7 @@ function strainsWithin(
 }
 
 /** What the leg does to the points at its start and end, `COMPONENTS` each. */
-function endForces(
+export function endForces(
   { cosine, sine, rigidStart, rigidEnd }: StaticLeg,
   pieces: readonly SpanPiece[],
   couples: EndCouples,
@@ -197,7 +197,11 @@ function momentAtEnd(pieces: readonly SpanPiece[]): number {
 }
 
 /** Legs and loads together, by the rows of the equations. */
-function sumAtPoints({ legs, forceRow, coupleRow }: Statics, ends: Float64Array, { joints }: Loading): Float64Array {
+export function sumAtPoints(
+  { legs, forceRow, coupleRow }: Statics,
+  ends: Float64Array,
+  { joints }: Loading,
+): Float64Array {
   const sum = joints.slice();
   for (const [index, { from, to }] of legs.entries()) {
     for (const [which, point] of [from, to].entries()) {

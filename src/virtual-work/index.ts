@@ -1,3 +1,4 @@
+export type { Balance } from './balance.ts';
 export { ForceMethod, prepare, type Response } from './force-method.ts';
 export { type GivenForces, givenForces, largestGap, movementFromForces } from './given-forces.ts';
 export type { Ground } from './grounds.ts';

@@ -2,11 +2,13 @@
 // redundants itself, or the forces of the first road, held to leave no gap.
 import type { UnitAction } from '../model/question.ts';
 import type { Structure } from '../model/structure.ts';
+import { type Balance, balanceOf, type SolvedState } from './balance.ts';
 import { type ForceMethod, prepare } from './force-method.ts';
 import { type GivenForces, givenForces, largestGap, movementFromForces } from './given-forces.ts';
 import type { InternalForces } from './internal-forces.ts';
 import { movementOf } from './movement.ts';
 import { type PrimaryStructure, primaryStructure, virtualSystem } from './primary.ts';
+import { type Statics, staticsOf } from './statics.ts';
 import type { Movement } from './work.ts';
 
 export interface SecondMovement extends Movement {
@@ -14,10 +16,15 @@ export interface SecondMovement extends Movement {
   readonly gap: number;
 }
 
+/** Of what cannot be shown to balance. */
+const UNBALANCED: Balance = { equilibrium: Infinity, energy: Infinity };
+
 export class SecondRoad {
   readonly #structure: Structure;
   #forceMethod: ForceMethod | undefined | 'not asked' = 'not asked';
   #primary: PrimaryStructure | undefined | 'not asked' = 'not asked';
+  #statics: Statics | undefined | 'not asked' = 'not asked';
+  readonly #balances = new WeakMap<SolvedState, Balance>();
   readonly #given = new WeakMap<InternalForces, { readonly forces: GivenForces; readonly gap: number }>();
 
   constructor(structure: Structure) {
@@ -48,6 +55,17 @@ export class SecondRoad {
     if (!primary) return undefined;
     const given = this.#givenBy(primary, factors, forces());
     return { ...movementFromForces(primary, given.forces, actions), gap: given.gap };
+  }
+
+  /** Whether a solution of the first road balances, and its work with it; one object for one combination. */
+  balance(factors: readonly number[], solution: SolvedState): Balance {
+    let balance = this.#balances.get(solution);
+    if (!balance) {
+      if (this.#statics === 'not asked') this.#statics = staticsOf(this.#structure);
+      balance = this.#statics ? balanceOf(this.#statics, factors, solution) : UNBALANCED;
+      this.#balances.set(solution, balance);
+    }
+    return balance;
   }
 
   #givenBy(primary: PrimaryStructure, factors: readonly number[], internal: InternalForces) {

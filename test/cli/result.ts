@@ -61,7 +61,7 @@ export function answerWith(parts: Partial<Answer>): Answer {
     utilisation: 0.1648703,
     status: 'ok',
     stiffnessFactor: undefined,
-    check: { difference: 1e-13, residual: 1e-15 },
+    check: { difference: 1e-13, residual: 1e-15, energy: 0 },
     range: { start: 0, end: 0 },
     nameRange: { start: 0, end: 0 },
     ...parts,

@@ -3,6 +3,7 @@ import fc from 'fast-check';
 import { expect } from 'vitest';
 import { fieldAt, movementAt } from '../../src/mechanics/field.ts';
 import { measure } from '../../src/mechanics/measure.ts';
+import { combine } from '../../src/mechanics/superposition.ts';
 import type { UnitAction } from '../../src/model/question.ts';
 import {
   givenForces,
@@ -11,6 +12,7 @@ import {
   movementFromForces,
   movementOf,
   prepare,
+  SecondRoad,
   virtualSystem,
   withLeastThrusts,
 } from '../../src/virtual-work/index.ts';
@@ -53,6 +55,19 @@ holds('points and places along members move alike on both', structures(), struct
       }
     }
   }
+});
+
+holds('every solution balances, and its work is that of its forces (Clapeyron)', structures(), structure => {
+  const analysis = analysed(structure);
+  const secondRoad = new SecondRoad(structure);
+  const tolerance = allowed(analysis, 1e-11);
+  const check = (factors: readonly number[]) => {
+    const { equilibrium, energy } = secondRoad.balance(factors, combine(analysis, factors));
+    expect(equilibrium).toBeLessThanOrEqual(tolerance);
+    expect(energy).toBeLessThanOrEqual(tolerance);
+  };
+  for (const index of structure.cases.keys()) check(only(index));
+  check([1.35, -0.9, 1.5]);
 });
 
 const powers = fc.array(fc.integer({ min: -6, max: 6 }), { minLength: 1, maxLength: 9 });
