@@ -18,7 +18,7 @@ import type { Range } from '../quantity/range.ts';
 import { type Reversal, reversalInWords } from './one-sided.ts';
 import { answerInWords, displayKind, show } from './phrases.ts';
 import type { Alternative, Answer, AnswerPlace, Check } from './result.ts';
-import { hold, MOST_DIFFERENCE } from './second-road.ts';
+import { checkOf, isBorneOut, MOST_DIFFERENCE } from './second-road.ts';
 import type { Question, Series } from './series.ts';
 import { stiffnessFactor } from './stiffness.ts';
 import type { StructureState } from './structure-state.ts';
@@ -399,25 +399,18 @@ function checked(inputs: AnswerInputs, series: Series): Checked | undefined {
   if (series.reversal !== undefined) return refuseReversed(inputs, series.reversal);
   let [difference, residual, energy, rounding] = [0, 0, 0, 0];
   for (const taken of series.taken) {
-    const held = hold(taken);
-    difference = Math.max(difference, held.difference);
-    const solution = taken.solved.solution(taken.factors);
-    const balance = taken.solved.secondRoad.balance(taken.factors, solution);
-    residual = Math.max(residual, solution.residual, balance.equilibrium);
-    energy = Math.max(energy, balance.energy);
-    rounding = Math.max(rounding, held.rounding);
+    const one = checkOf(taken);
+    difference = Math.max(difference, one.difference);
+    residual = Math.max(residual, one.residual);
+    energy = Math.max(energy, one.energy);
+    rounding = Math.max(rounding, one.rounding);
   }
-  const borneOut = Math.max(difference, residual, energy) <= MOST_DIFFERENCE;
-  if (borneOut) return { check: { difference, residual, energy }, series: withoutRounding(series, rounding) };
+  const check = { difference, residual, energy };
+  if (isBorneOut(check)) return { check, series: withoutRounding(series, rounding) };
   const { question, report } = inputs;
-  report.error(
-    'answer-withheld',
-    question.name.range,
-    `${question.name.text} is withheld: ${whyWithheld({ difference, residual, energy })}.`,
-    {
-      hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
-    },
-  );
+  report.error('answer-withheld', question.name.range, `${question.name.text} is withheld: ${whyWithheld(check)}.`, {
+    hint: 'very stiff and very soft parts together leave too few digits: look for a stiffness that is out by a power of ten',
+  });
   return undefined;
 }
 

@@ -4,6 +4,7 @@ import type { ResolvedMeasure, UnitAction } from '../model/question.ts';
 import { isMovement } from '../model/questions.ts';
 import { positionAlong } from '../model/spans.ts';
 import type { Location, Structure } from '../model/structure.ts';
+import type { Check } from './result.ts';
 import type { Solved } from './solved.ts';
 
 /** Past this relative difference, or residual, an answer is withheld. */
@@ -35,7 +36,20 @@ export interface Held {
   readonly rounding: number;
 }
 
-export function hold({ measure, place, value, factors, solved }: Taken): Held {
+/** Everything that a measure is held against, and its rounding as in `Held`. */
+export function checkOf(taken: Taken): Check & Pick<Held, 'rounding'> {
+  const { solved, factors } = taken;
+  const { difference, rounding } = hold(taken);
+  const solution = solved.solution(factors);
+  const { equilibrium, energy } = solved.secondRoad.balance(factors, solution);
+  return { difference, residual: Math.max(solution.residual, equilibrium), energy, rounding };
+}
+
+export function isBorneOut({ difference, residual, energy }: Check): boolean {
+  return difference <= MOST_DIFFERENCE && residual <= MOST_DIFFERENCE && energy <= MOST_DIFFERENCE;
+}
+
+function hold({ measure, place, value, factors, solved }: Taken): Held {
   const actions = unitActions(measure, place, solved.analysis.structure);
   if (actions === undefined) return { difference: 0, rounding: 0 };
   // Over a hinge, a connection or a release a member that runs on moves by another amount on either side: the one that was

@@ -8,7 +8,7 @@ import { type DisplayUnits, METRIC } from '../quantity/display.ts';
 import type { Quantity } from '../quantity/quantity.ts';
 import { show } from './phrases.ts';
 import type { Answer } from './result.ts';
-import { hold, MOST_DIFFERENCE } from './second-road.ts';
+import { checkOf, isBorneOut } from './second-road.ts';
 import type { Question, Series } from './series.ts';
 import { forcesAreSame, leastInertia, movementsScale } from './wanted.ts';
 
@@ -67,9 +67,9 @@ export function wantedAnswer(
   const found = leastInertia(solved, measure, series.alternatives, limit);
   if (found === undefined) return noneMeets;
   const { taken, alternative, multiple } = found;
-  const { difference } = hold(taken);
-  const { residual } = taken.solved.solution(taken.factors);
-  if (!(difference <= MOST_DIFFERENCE && residual <= MOST_DIFFERENCE))
+  const { difference, residual, energy } = checkOf(taken);
+  const check = { difference, residual, energy };
+  if (!isBorneOut(check))
     return none(
       'the two methods or equilibrium do not bear it out',
       'look for a stiffness that is out by a power of ten',
@@ -78,7 +78,7 @@ export function wantedAnswer(
   const loaded = loadedInWords(cases, spansUnder(cases, alternative.factors), k => taken.factors[k] !== 0);
   return {
     ...least(multiple * trial, units),
-    check: { difference, residual },
+    check,
     ...(series.alternatives.length > 1 || loaded.length > 0
       ? { governing: [alternative.text, ...loaded].join(', '), ...(loaded.length > 0 && { loaded: loaded.join(', ') }) }
       : {}),
