@@ -19,8 +19,8 @@ import {
 } from '../quantity/dimension.ts';
 import { nearest } from '../quantity/nearest.ts';
 import type { Quantity } from '../quantity/quantity.ts';
+import { A_LENGTH } from './dues.ts';
 import type { Due, Figures } from './figures.ts';
-import { A_LENGTH } from './geometry.ts';
 import { STANDARD_GRAVITY } from './gravity.ts';
 import type { Definition, Names } from './names.ts';
 import type { Report } from './report.ts';

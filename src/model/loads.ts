@@ -1,29 +1,13 @@
 // Loads in SI, put where they act: on a stretch of a member, at a place, on a support. A load that cannot act where it
 // is put is told at its words, and its case is then not all known.
-import type { End, LoadBody, Name, Place, StatementOf, Stretch, Turn, Value } from '../language/syntax.ts';
-import {
-  ANGLE,
-  DIMENSIONLESS,
-  type Dimension,
-  FORCE,
-  FORCE_PER_LENGTH,
-  MOMENT,
-  sameDimension,
-  TEMPERATURE,
-} from '../quantity/dimension.ts';
+import type { LoadBody, Name, Place, StatementOf, Stretch, Turn, Value } from '../language/syntax.ts';
+import { type Dimension, FORCE, FORCE_PER_LENGTH, MOMENT, sameDimension, TEMPERATURE } from '../quantity/dimension.ts';
 import type { Range } from '../quantity/range.ts';
+import { A_LENGTH, A_NUMBER, AN_ANGLE } from './dues.ts';
 import type { Due, Figures } from './figures.ts';
-import {
-  A_LENGTH,
-  AN_ANGLE,
-  cleanCosine,
-  cleanSine,
-  distanceOf,
-  type Geometry,
-  type LaidMember,
-  locateOnMember,
-  metres,
-} from './geometry.ts';
+import { distanceOf, type Geometry, type LaidMember } from './geometry.ts';
+import { HEADINGS, unitAt } from './headings.ts';
+import { endsAt, membersNamed, type ReadStretch, readPlace, readStretch } from './places.ts';
 import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
 import type { Hinge, LineDirection, Load, LoadCase, Location, Restraint, Section, Support } from './structure.ts';
@@ -31,9 +15,7 @@ import type { Hinge, LineDirection, Load, LoadCase, Location, Restraint, Section
 const A_FORCE: Due = { dimension: FORCE, words: 'a force' };
 const A_MOMENT: Due = { dimension: MOMENT, words: 'a moment' };
 const A_LINE_LOAD: Due = { dimension: FORCE_PER_LENGTH, words: 'a force per length' };
-const A_NUMBER: Due = { dimension: DIMENSIONLESS, words: 'a number' };
 const A_TEMPERATURE: Due = { dimension: TEMPERATURE, words: 'a temperature difference' };
-const A_ROTATION: Due = { dimension: ANGLE, words: 'an angle' };
 
 /** A row longer than this is a slip of a decimal point. */
 const MOST_IN_A_ROW = 10_000;
@@ -219,7 +201,7 @@ class LoadReader {
         return { kind: 'global', ...HEADINGS[direction.heading], onPlan: direction.onPlan };
       case 'angle': {
         const angle = this.#figures.number(direction.angle, AN_ANGLE);
-        return angle === undefined ? undefined : { kind: 'global', ...unit(angle), onPlan: direction.onPlan };
+        return angle === undefined ? undefined : { kind: 'global', ...unitAt(angle), onPlan: direction.onPlan };
       }
       case 'square': {
         const heading = HEADINGS[direction.heading];
@@ -350,7 +332,7 @@ class LoadReader {
     if (sameDimension(quantity.dimension, FORCE)) {
       const angle = direction.kind === 'angle' ? this.#figures.number(direction.angle, AN_ANGLE) : undefined;
       if (direction.kind === 'angle' && angle === undefined) return undefined;
-      const way = direction.kind === 'turn' ? HEADINGS[direction.turn as keyof typeof HEADINGS] : unit(angle!);
+      const way = direction.kind === 'turn' ? HEADINGS[direction.turn as keyof typeof HEADINGS] : unitAt(angle!);
       return { kind: 'force', x: 0 + way.x * amount, y: 0 + way.y * amount };
     }
     const isLine = this.#misplaced(
@@ -415,7 +397,7 @@ class LoadReader {
     const factor = body.factor === undefined ? 1 : this.#figures.number(body.factor, A_NUMBER);
     const point = this.#ground.geometry.pointNamed.get(body.point.text);
     const turning = body.turn === 'clockwise' || body.turn === 'anticlockwise';
-    const by = this.#figures.number(body.by, turning ? A_ROTATION : A_LENGTH);
+    const by = this.#figures.number(body.by, turning ? AN_ANGLE : A_LENGTH);
     if (factor === undefined || by === undefined || point === undefined) return false;
     const support = this.#ground.supports.find(other => other.point === point);
     const freedom = freedomOf(body.turn);
@@ -549,17 +531,6 @@ interface Common {
   readonly source?: string;
 }
 
-const HEADINGS = {
-  up: { x: 0, y: 1 },
-  down: { x: 0, y: -1 },
-  left: { x: -1, y: 0 },
-  right: { x: 1, y: 0 },
-} as const;
-
-function unit(angle: number): { readonly x: number; readonly y: number } {
-  return { x: cleanCosine(angle), y: cleanSine(angle) };
-}
-
 function freedomOf(turn: Turn): Restraint['freedom'] {
   return turn === 'clockwise' || turn === 'anticlockwise'
     ? { kind: 'rotation' }
@@ -580,116 +551,4 @@ function holds(restraints: readonly Restraint[], freedom: Restraint['freedom']):
   const across = (a: { x: number; y: number }, b: { x: number; y: number }): number => Math.abs(a.x * b.y - a.y * b.x);
   if (ways.some(way => across(way, freedom) < 1e-9)) return true;
   return ways.some((a, i) => ways.slice(i + 1).some(b => across(a, b) > 1e-9));
-}
-
-/** The members that have an end, or run through, at a point: one entry for each leg end, bars left out. */
-export function endsAt(geometry: Geometry, point: number): number[] {
-  return geometry.members.flatMap((member, index) =>
-    member.kind === 'bar'
-      ? []
-      : member.legs.flatMap(leg => [leg.from, leg.to].flatMap(end => (end === point ? [index] : []))),
-  );
-}
-
-/** Members, bars and groups by name, each member once; undefined where one does not resolve. */
-export function membersNamed(names: readonly Name[], geometry: Geometry): number[] | undefined {
-  const members = new Set<number>();
-  for (const { text } of names) {
-    const index = geometry.memberNamed.get(text);
-    const group = geometry.groups.find(other => other.name === text);
-    if (index !== undefined) members.add(index);
-    else if (group !== undefined) for (const member of group.members) members.add(member);
-    else return undefined;
-  }
-  return [...members];
-}
-
-/** Where a load or a question stands; undefined where it does not (reported, under the code given). */
-export function readPlace(
-  place: Place,
-  within: Name | undefined,
-  geometry: Geometry,
-  figures: Figures,
-  report: Report,
-  code: 'bad-load' | 'bad-question',
-): Location | undefined {
-  if (place.kind === 'point') {
-    const point = geometry.pointNamed.get(place.point.text);
-    if (point === undefined) return undefined;
-    if (within === undefined) return { kind: 'point', point };
-    const member = geometry.memberNamed.get(within.text);
-    if (member === undefined) {
-      if (geometry.groups.some(group => group.name === within.text))
-        report.error(code, within.range, `${within.text} is a group: name the member that is meant.`);
-      return undefined;
-    }
-    if (distanceOf(geometry.members[member]!, point) !== undefined) return { kind: 'point', point, member };
-    report.error(code, place.range, `${place.point.text} is not on ${within.text}.`);
-    return undefined;
-  }
-  const index = geometry.memberNamed.get(place.member.text);
-  if (index === undefined) return undefined;
-  const member = geometry.members[index]!;
-  if (within !== undefined && within.text !== place.member.text) {
-    report.error(code, within.range, `The place is on ${place.member.text}, so it cannot be in ${within.text}.`);
-    return undefined;
-  }
-  const distance = locateOnMember(place, member, geometry.pointNamed, figures, report);
-  return distance === undefined ? undefined : { kind: 'along', member: index, distance };
-}
-
-export interface ReadStretch {
-  /** Distances along the member, start < end. */
-  readonly start: number;
-  readonly end: number;
-  /** Whether the writer went against the member's travel. */
-  readonly reversed: boolean;
-}
-
-export function readStretch(
-  stretch: Stretch,
-  member: LaidMember,
-  geometry: Geometry,
-  figures: Figures,
-  report: Report,
-  code: 'bad-load' | 'bad-question',
-): ReadStretch | undefined {
-  const from = readEnd(stretch.from, member, geometry, figures, report, code);
-  const to = readEnd(stretch.to, member, geometry, figures, report, code);
-  if (from === undefined || to === undefined) return undefined;
-  if (Math.abs(to - from) <= 1e-9 * member.length) {
-    report.error(code, stretch.range, `This part of ${member.name} has no length.`);
-    return undefined;
-  }
-  return from < to ? { start: from, end: to, reversed: false } : { start: to, end: from, reversed: true };
-}
-
-function readEnd(
-  end: End,
-  member: LaidMember,
-  geometry: Geometry,
-  figures: Figures,
-  report: Report,
-  code: 'bad-load' | 'bad-question',
-): number | undefined {
-  if (end.kind === 'point') {
-    const point = geometry.pointNamed.get(end.point.text);
-    if (point === undefined) return undefined;
-    const distance = distanceOf(member, point);
-    if (distance === undefined) report.error(code, end.range, `${end.point.text} is not on ${member.name}.`);
-    return distance;
-  }
-  const distance = figures.number(end.distance, A_LENGTH);
-  if (distance === undefined) return undefined;
-  if (distance < 0 || distance > member.length * (1 + 1e-6)) {
-    report.error(
-      code,
-      end.range,
-      distance < 0
-        ? `A distance along ${member.name} is never negative.`
-        : `${metres(distance)} along ${member.name} is past its end (${metres(member.length)}).`,
-    );
-    return undefined;
-  }
-  return Math.min(distance, member.length);
 }

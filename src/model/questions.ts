@@ -5,7 +5,7 @@ import { ANGLE, FORCE, LENGTH, MOMENT, STRESS } from '../quantity/dimension.ts';
 import type { Figures } from './figures.ts';
 import { distanceOf, type Geometry } from './geometry.ts';
 import { ASSUMED_MODULUS_REMEDY, assumedModulus } from './library.ts';
-import { endsAt, membersNamed, readPlace, readStretch } from './loads.ts';
+import { endsAt, membersNamed, readPlace, readStretch } from './places.ts';
 import type { ResolvedMeasure } from './question.ts';
 import type { Report } from './report.ts';
 import type { Hinge, Location, Structure } from './structure.ts';

@@ -2,8 +2,10 @@
 import type { StatementOf, SupportItem } from '../language/syntax.ts';
 import { divideDimensions, FORCE, LENGTH, MOMENT } from '../quantity/dimension.ts';
 import type { Range } from '../quantity/range.ts';
+import { AN_ANGLE } from './dues.ts';
 import type { Due, Figures } from './figures.ts';
-import { AN_ANGLE, cleanCosine, cleanSine, type Geometry } from './geometry.ts';
+import type { Geometry } from './geometry.ts';
+import { cleanCosine, cleanSine } from './headings.ts';
 import type { Report } from './report.ts';
 import type { Scope } from './scope.ts';
 import type { Restraint, Support, SupportSymbol } from './structure.ts';

@@ -4,7 +4,8 @@
 import { type Analysis, type Conflict, MAX_FREEDOMS } from '../mechanics/index.ts';
 import { buildStructure } from '../model/build.ts';
 import { type CombinationModel, caseAlone, readCombinations } from '../model/combinations.ts';
-import { type Geometry, layOut } from '../model/geometry.ts';
+import type { Geometry } from '../model/geometry.ts';
+import { layOut } from '../model/layout.ts';
 import type { Library } from '../model/library.ts';
 import type { Names } from '../model/names.ts';
 import { Report } from '../model/report.ts';
