@@ -3,7 +3,7 @@
 
 import { eliminate, updateRemainder } from './dense-front.ts';
 import { analyseSymbolic, type Symbolic } from './symbolic.ts';
-import { multiply, type SymmetricMatrix } from './symmetric-matrix.ts';
+import type { SymmetricMatrix } from './symmetric-matrix.ts';
 import { type Factors, solveBackward, substitute } from './triangular-solve.ts';
 
 /**
@@ -116,19 +116,6 @@ export function factorise(matrix: SymmetricMatrix, symbolic: Symbolic = analyseS
   const inverses = new Float64Array(symbolic.size);
   eliminateFronts(symbolic, panels, pivots, inverses, tolerance);
   return new Factorisation({ symbolic, panels, pivots, inverses, scale }, tolerance);
-}
-
-/**
- * Solves and improves the answer once: what the first answer leaves unbalanced is solved for and added (Higham,
- * Accuracy and Stability of Numerical Algorithms, 2nd edition, chapter 12).
- */
-export function solveRefined(matrix: SymmetricMatrix, factorisation: Factorisation, rhs: Float64Array): Float64Array {
-  const x = factorisation.solve(rhs);
-  const unbalanced = multiply(matrix, x);
-  for (let k = 0; k < rhs.length; k++) unbalanced[k] = rhs[k]! - unbalanced[k]!;
-  const correction = factorisation.solve(unbalanced);
-  for (let k = 0; k < rhs.length; k++) x[k]! += correction[k]!;
-  return x;
 }
 
 function unitDiagonalScale(matrix: SymmetricMatrix): Float64Array {

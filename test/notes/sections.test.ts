@@ -159,6 +159,25 @@ find tip:   deflection at B
 find thrust: force in B1`);
     checkAnswers(note, { level: 0, tip: (6e3 * 27) / (3 * 24e6), thrust: 50e3 });
   });
+
+  it('of a member keep its length where that is assumed, and a bar gives way all the same', () => {
+    // The post's head is held by its bending, 3EI/h³, and by the bar, EA/L, side by side; its own EA does not count.
+    const note = solved(`
+assume: axially stiff
+section S: EI 10 MN m2, EA 100 MN
+member P1: A -- 3 m up -- B
+bar T1: B -- 4 m right -- C
+support A: fixed
+support C: pinned
+load push: 8 kN right at B
+load press: 90 kN down at B
+combine both: push + press
+find drift: sway at B
+find head:  deflection at B
+find strut: compression in T1`);
+    const [post, bar] = [(3 * 10e6) / 27, 100e6 / 4];
+    checkAnswers(note, { drift: 8e3 / (post + bar), head: 0, strut: (8e3 * bar) / (post + bar) });
+  });
 });
 
 /** Centroid from the edge that the parts are measured from, and second moment of area about it (parallel axes). */
